@@ -1,0 +1,77 @@
+import { mkdtempSync } from 'node:fs';
+import { createServer } from 'node:net';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { defineConfig } from '@playwright/test';
+
+async function freePort(): Promise<string> {
+  const server = createServer();
+  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+  const address = server.address();
+  await new Promise((resolve) => server.close(resolve));
+  if (address === null || typeof address === 'string') throw new Error('no free port');
+  return String(address.port);
+}
+
+function freshFolder(): string {
+  return mkdtempSync(join(tmpdir(), 'fusekeeper-browser-'));
+}
+
+// This file is read again in every worker: what the first reading chose is handed down by the environment.
+process.env['FK_DEMO_PORT'] ??= await freePort();
+process.env['FK_EMPTY_PORT'] ??= await freePort();
+process.env['FK_DEMO_DATA'] ??= freshFolder();
+process.env['FK_EMPTY_DATA'] ??= freshFolder();
+
+const demoUrl = `http://127.0.0.1:${process.env['FK_DEMO_PORT']}`;
+const emptyUrl = `http://127.0.0.1:${process.env['FK_EMPTY_PORT']}`;
+
+function server(port: string, dataFolder: string, demo: 'yes' | 'no') {
+  return {
+    command: 'node --enable-source-maps dist/server/index.js',
+    url: `http://127.0.0.1:${port}/api/health`,
+    env: {
+      HOST: '127.0.0.1',
+      PORT: port,
+      DATA_DIR: dataFolder,
+      DEMO: demo,
+      NODE_ENV: 'production',
+    },
+    timeout: 60_000,
+    gracefulShutdown: { signal: 'SIGTERM' as const, timeout: 5_000 },
+  };
+}
+
+export default defineConfig({
+  testDir: 'tests/browser',
+  testMatch: '*.test.ts',
+  workers: 1,
+  timeout: 60_000,
+  expect: { timeout: 15_000 },
+  forbidOnly: true,
+  outputDir: 'test-results/browser',
+  reporter: [['list'], ['json', { outputFile: 'test-results/browser.json' }]],
+  use: {
+    baseURL: demoUrl,
+    locale: 'en-US',
+    timezoneId: 'America/New_York',
+    trace: 'retain-on-failure',
+    launchOptions: {
+      executablePath: process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium',
+      args: [
+        '--no-sandbox',
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
+    },
+  },
+  metadata: { emptyUrl },
+  webServer: [
+    server(process.env['FK_DEMO_PORT'], process.env['FK_DEMO_DATA'], 'yes'),
+    server(process.env['FK_EMPTY_PORT'], process.env['FK_EMPTY_DATA'], 'no'),
+  ],
+});
