@@ -1,0 +1,79 @@
+import type { Random } from './random.ts';
+import type { Disc, Faults, Machine } from './machine.ts';
+import type { Nodes } from './simulate-run.ts';
+
+/** A change of the heater's power: which way, and what did it. */
+export type Switch = {
+  timeS: number;
+  powerW: number;
+  cause: 'disc' | 'limit' | 'person' | 'one-shot' | 'ground';
+};
+
+/** The parts that decide whether the heater has power, with their faults. */
+export function createControls(machine: Machine, faults: Faults, random: Random) {
+  const switches: Switch[] = [];
+  const clicksS: number[] = [];
+  let discClosed = true;
+  let limitClosed = true;
+  let lostForGood = false;
+  let off = false;
+  let openings = 0;
+  let opensC = machine.disc.opensC + faults.scatterK * random.gaussian();
+  let cutAtS = -Infinity;
+  let litAtS = machine.relightS;
+  let lastW = 0;
+
+  function moveDisc(timeS: number, discC: number): void {
+    if (discClosed && discC >= opensC) {
+      discClosed = false;
+      openings++;
+      clicksS.push(timeS);
+      // The relay lets go late, and later as it warms.
+      cutAtS = timeS + faults.relayLateS * (openings - 1);
+      opensC = machine.disc.opensC + faults.driftK * openings + faults.scatterK * random.gaussian();
+    } else if (!discClosed && discC <= machine.disc.closesC) {
+      discClosed = true;
+      litAtS = timeS + machine.relightS;
+    }
+  }
+
+  function controlledW(timeS: number): number {
+    const stuck = openings > faults.relaySticksAfter;
+    const asked = stuck || (discClosed ? timeS >= litAtS : timeS < cutAtS);
+    if (!asked || !limitClosed) return 0;
+    return machine.powerW * faults.heaterShare;
+  }
+
+  return {
+    switches,
+    clicksS,
+    turnOff() {
+      off = true;
+    },
+    /** Power of the heater in this step, W. */
+    powerW(timeS: number, nodes: Nodes): number {
+      moveDisc(timeS, nodes.discC);
+      const limitWas = limitClosed;
+      limitClosed = nextState(limitClosed, nodes.boxC, machine.boxLimit);
+      // After the limit closes, a gas burner warms its igniter again.
+      if (!limitWas && limitClosed) litAtS = timeS + machine.relightS;
+      const fuseOpens = nodes.fuseC >= machine.fuse.opensC || timeS >= faults.opensForGoodS;
+      lostForGood ||= fuseOpens;
+
+      const leaks = openings >= faults.groundedAfter ? faults.groundedW : 0;
+      const fedW = Math.max(controlledW(timeS), leaks);
+      const nowW = lostForGood || off ? 0 : fedW;
+      if (nowW !== lastW) {
+        const cause = off ? 'person' : lostForGood ? 'one-shot' : limitWas !== limitClosed ? 'limit' : 'disc';
+        switches.push({ timeS, powerW: nowW, cause });
+        lastW = nowW;
+      }
+      return nowW;
+    },
+  };
+}
+
+function nextState(closed: boolean, tempC: number, disc: Disc): boolean {
+  if (closed) return tempC < disc.opensC;
+  return tempC <= disc.closesC;
+}
