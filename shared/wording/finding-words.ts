@@ -1,0 +1,44 @@
+import type { Finding } from '../analysis/analysis.ts';
+import type { Rating } from '../analysis/rating.ts';
+import type { DisplayUnit } from '../units.ts';
+
+/** What the words depend on beside the finding. `fuel` other than gas counts as electric. */
+export type About = { unit: DisplayUnit; judgedBy: Rating | null; fuel: string };
+
+/** A cause that the readings would be consistent with, why, and the check that settles it. */
+export type Cause = { cause: string; why: string; settles: string };
+
+/** A finding in words for a technician. */
+export type WordedFinding = {
+  title: string;
+  sentences: string[];
+  evidence: { label: string; value: string }[];
+  /** Likeliest first. */
+  causes: Cause[];
+  /** In the order in which to make them. */
+  nextChecks: string[];
+};
+
+/** How one code is worded: plain functions of the finding. */
+export type FindingWords = {
+  title: (finding: Finding, about: About) => string;
+  sentences: (finding: Finding, about: About) => string[];
+  causes: (finding: Finding, about: About) => Cause[];
+  nextChecks: (finding: Finding, about: About) => string[];
+};
+
+/** A number of the evidence, or null where the finding does not carry it. */
+export function numberOf({ evidence }: Finding, key: string): number | null {
+  const value = evidence[key];
+  return typeof value === 'number' ? value : null;
+}
+
+/** Whether the finding was made on a gas machine. */
+export function isGas({ fuel }: About): boolean {
+  return fuel === 'gas';
+}
+
+/** `one cycle`, `4 cycles`: a count with its noun. */
+export function counted(count: number, noun: string, plural = `${noun}s`): string {
+  return count === 1 ? `one ${noun}` : `${count} ${plural}`;
+}
