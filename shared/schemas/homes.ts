@@ -74,6 +74,13 @@ export const fittedPartSchema = newFittedPartSchema.omit({ ratingId: true }).ext
 });
 export type FittedPart = z.infer<typeof fittedPartSchema>;
 
+/** What is said when a part comes out. */
+export const removedPartSchema = z.object({
+  removedAtMs: instantSchema,
+  removedWhy: neededWords(200, 'why it came out'),
+});
+export type RemovedPart = z.infer<typeof removedPartSchema>;
+
 /** A machine with all that is known of it. Its runs come from `/api/machines/:id/runs`. */
 export const machinePageSchema = machineSchema.extend({
   home: homeSchema,

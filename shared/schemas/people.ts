@@ -73,3 +73,7 @@ export const shopChangeSchema = z.object({
   minCycles: z.int('Enter a whole number').min(1, 'At least 1').max(20, 'At most 20'),
 });
 export type ShopChange = z.infer<typeof shopChangeSchema>;
+
+/** All that the sign-in page says of the shop; empty words where none was set up yet. */
+export const shopCardSchema = shopSchema.pick({ name: true, town: true });
+export type ShopCard = z.infer<typeof shopCardSchema>;

@@ -1,0 +1,61 @@
+import { createServer } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import { join } from 'node:path';
+import { createApp } from './app.ts';
+import { clientFiles, clientFromSource } from './client-files.ts';
+import { migrate, openDatabase } from './db.ts';
+import { readEnv } from './env.ts';
+import { createLogger } from './log.ts';
+import { closeWorkers, openWorkers } from './pool.ts';
+import { openSecrets } from './secrets.ts';
+
+/** An upload of 100 MB over a phone takes minutes; a request that says nothing for so long is dropped. */
+const HEADERS_MS = 60_000;
+const REQUEST_MS = 300_000;
+/** What is under way gets this long to end when the server is told to stop. */
+const CLOSING_MS = 10_000;
+
+async function start(): Promise<void> {
+  const env = readEnv();
+  const logger = createLogger(undefined, env.logLevel);
+  const secrets = await openSecrets(env.dataDir);
+  const db = openDatabase(join(env.dataDir, 'fusekeeper.sqlite'));
+  await migrate(db);
+  const workers = openWorkers();
+  const now = () => new Date();
+
+  const server = createServer({ headersTimeout: HEADERS_MS, requestTimeout: REQUEST_MS });
+  const pages = env.development ? await clientFromSource(server) : clientFiles();
+  const { dataDir, publicUrl, development } = env;
+  server.on(
+    'request',
+    createApp({ db, dataDir, now, workers, publicUrl, secrets, logger, pages, development }),
+  );
+
+  server.listen(env.port, env.host, () => {
+    process.stdout.write(`Fusekeeper is at ${publicUrl?.href ?? localUrl(server.address())}\n`);
+  });
+  const close = () => {
+    setTimeout(() => server.closeAllConnections(), CLOSING_MS).unref();
+    server.close(() => {
+      void closeWorkers(workers)
+        .then(() => db.destroy())
+        .then(() => process.exit(0));
+    });
+    server.closeIdleConnections();
+  };
+  process.once('SIGTERM', close).once('SIGINT', close);
+}
+
+function localUrl(address: AddressInfo | string | null): string {
+  if (address === null || typeof address === 'string') return 'an unknown address';
+  const isLoopback = address.address === '127.0.0.1' || address.address === '::1';
+  const host = address.family === 'IPv6' ? `[${address.address}]` : address.address;
+  return `http://${isLoopback ? 'localhost' : host}:${address.port}`;
+}
+
+start().catch((error: unknown) => {
+  const message = error instanceof Error ? error.message : String(error);
+  process.stderr.write(`Fusekeeper did not start. ${message}\n`);
+  process.exitCode = 1;
+});

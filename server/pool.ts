@@ -1,0 +1,37 @@
+import { availableParallelism } from 'node:os';
+import { createRequire } from 'node:module';
+import { pathToFileURL } from 'node:url';
+import { Piscina } from 'piscina';
+
+/** From source the workers are TypeScript and need tsx; once built they are JavaScript beside this bundle. */
+const fromSource = import.meta.url.endsWith('.ts');
+
+/** The threads that keep the main one free; each starts at its first task. */
+export type Workers = { passwords: Piscina; runs: Piscina };
+
+export function openWorkers(): Workers {
+  return {
+    // One hash at a time: a storm of sign-ins must leave a core for everyone else.
+    passwords: pool('people/password-worker', { maxThreads: 1, maxQueue: 20 }),
+    runs: pool('runs/run-worker', { maxThreads: Math.max(1, availableParallelism() - 1) }),
+  };
+}
+
+export async function closeWorkers(workers: Workers): Promise<void> {
+  await Promise.all([workers.passwords.destroy(), workers.runs.destroy()]);
+}
+
+function pool(name: string, limits: { maxThreads: number; maxQueue?: number }): Piscina {
+  return new Piscina({
+    filename: new URL(`./${name}.${fromSource ? 'ts' : 'js'}`, import.meta.url).href,
+    execArgv: fromSource ? ['--import', tsxUrl()] : [],
+    minThreads: 0,
+    idleTimeout: 60_000,
+    ...limits,
+  });
+}
+
+/** Absolute, so that the folder the program was started in does not matter. */
+function tsxUrl(): string {
+  return pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href;
+}
