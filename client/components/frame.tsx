@@ -1,0 +1,144 @@
+import type { ReactNode } from 'react';
+import { Link, NavLink } from 'react-router-dom';
+import { FuseMark } from './signs.tsx';
+import { ThemeWord } from './theme-word.tsx';
+
+export type Place = { to: string; name: string };
+
+export function SkipLink() {
+  return (
+    <a href="#main" className="word absolute top-1 left-2 z-20 bg-paper px-3 not-focus:sr-only">
+      Skip to the page
+    </a>
+  );
+}
+
+function DeskPlace({ to, name }: Place) {
+  return (
+    <NavLink
+      to={to}
+      className={({ isActive }) =>
+        `relative flex items-center px-4 font-gothic text-[17px] leading-none font-stretch-[98%] no-underline ${isActive ? 'font-bold text-ink after:absolute after:inset-x-4 after:-bottom-px after:h-[5px] after:bg-ink' : 'font-medium text-print'}`
+      }
+    >
+      {name}
+    </NavLink>
+  );
+}
+
+/** The head of a desk page: brand, the places, who is signed in, and the theme. `isSite`: not on a phone. */
+export function DeskHead({
+  places,
+  who,
+  isSite,
+}: {
+  places: Place[];
+  who: string;
+  isSite: boolean;
+}) {
+  return (
+    <header
+      className={`${isSite ? 'hidden desk:flex' : 'flex'} h-14 items-stretch border-b border-print pr-2 pl-4 desk:h-[60px] desk:px-12 print:hidden`}
+    >
+      <Link
+        to="/"
+        className="inline-flex items-center gap-3 font-gothic text-[20px] leading-none font-semibold font-stretch-[112%] tracking-[-0.005em] no-underline desk:mr-11"
+      >
+        <FuseMark />
+        Fusekeeper
+      </Link>
+      <nav aria-label="Main" className="hidden desk:flex">
+        {places.map((place) => (
+          <DeskPlace key={place.to} {...place} />
+        ))}
+      </nav>
+      <div className="ml-auto flex items-center gap-5">
+        <Link
+          to="/account"
+          className="hidden min-h-10 items-center font-gothic text-[16px] leading-none font-medium text-print no-underline hover:underline wide:inline-flex"
+        >
+          {who}
+        </Link>
+        <ThemeWord />
+      </div>
+    </header>
+  );
+}
+
+const PHONE_PLACES: Place[] = [
+  { to: '/rounds', name: 'Rounds' },
+  { to: '/jobs', name: 'Jobs' },
+  { to: '/homes', name: 'Homes' },
+  { to: '/more', name: 'More' },
+];
+
+/** Phone: four keys on the deck. Pages without a key of their own stand under More. */
+export function PhoneTabs({ isMore = false }: { isMore?: boolean }) {
+  return (
+    <nav
+      aria-label="Main, phone"
+      className="sticky bottom-0 z-10 grid grid-cols-4 gap-2 border-t-bar border-ink bg-deck px-3 pt-2.5 pb-[max(14px,env(safe-area-inset-bottom))] desk:hidden print:hidden"
+    >
+      {PHONE_PLACES.map(({ to, name }) => (
+        <NavLink
+          key={to}
+          to={to}
+          className={({ isActive }) =>
+            `grid min-h-14 place-items-center rounded-key border-line font-gothic text-press leading-none font-stretch-[96%] no-underline ${isActive || (isMore && to === '/more') ? 'border-ink bg-ink text-paper' : 'border-print bg-key'}`
+          }
+        >
+          {name}
+        </NavLink>
+      ))}
+    </nav>
+  );
+}
+
+/** The body of a desk page: one column of full-width bands. */
+export function DeskPage({
+  children,
+  className = '',
+}: {
+  children: ReactNode;
+  className?: string;
+}) {
+  return (
+    <main id="main" className={`px-4 pt-4 pb-10 desk:px-12 desk:pt-[22px] desk:pb-16 ${className}`}>
+      {children}
+    </main>
+  );
+}
+
+type SitePageProps = {
+  /** Where the arrow at the top left leads; none where the page is a place of its own. */
+  back?: { to: string; name: string };
+  /** Who and where, in the top bar; a heading may stand here instead. */
+  top: ReactNode;
+  children: ReactNode;
+  /** Keys at the thumb. */
+  deck?: ReactNode;
+};
+
+/** A site screen: paper above, keys below, at most 480 px wide. */
+export function SitePage({ back, top, children, deck }: SitePageProps) {
+  return (
+    <div className="mx-auto grid min-h-dvh max-w-site grid-cols-[minmax(0,1fr)] grid-rows-[auto_1fr_auto] bg-paper desk:min-h-[calc(100dvh-60px)] desk:border-x desk:border-print">
+      <header className="flex min-h-14 items-center gap-1 border-b border-print pr-2 pl-1 print:hidden">
+        {back && (
+          <Link
+            to={back.to}
+            className="inline-flex min-h-touch min-w-12 items-center gap-2 px-2 font-gothic text-[17px] leading-none font-semibold no-underline before:ml-1 before:size-[10px] before:rotate-45 before:border-b-[2.5px] before:border-l-[2.5px] before:border-current before:content-['']"
+          >
+            {back.name}
+          </Link>
+        )}
+        <div className={`min-w-0 flex-1 ${back ? '' : 'pl-3'}`}>{top}</div>
+        <ThemeWord className="desk:hidden" />
+      </header>
+      <main id="main" className="min-w-0">
+        {children}
+      </main>
+      {deck}
+    </div>
+  );
+}

@@ -1,0 +1,85 @@
+import { zodResolver } from '@hookform/resolvers/zod';
+import { useState } from 'react';
+import {
+  useForm,
+  type DefaultValues,
+  type FieldErrors,
+  type FieldValues,
+  type Path,
+} from 'react-hook-form';
+import type { z } from 'zod';
+import { ApiError } from '../api/http.ts';
+import type { FormProblem } from '../components/error-summary.tsx';
+
+type CheckedFormOptions<In extends FieldValues, Out> = {
+  schema: z.ZodType<Out, In>;
+  defaultValues: DefaultValues<In>;
+  /** Sends what was typed. A refusal that names fields lands on them; any other stands above the form. */
+  save: (values: Out) => Promise<unknown>;
+};
+
+/**
+ * A form over a shared schema. Checked when it is sent and, from then on, as it is put right; what was typed stays
+ * whatever the server says.
+ */
+export function useCheckedForm<In extends FieldValues, Out>({
+  schema,
+  defaultValues,
+  save,
+}: CheckedFormOptions<In, Out>) {
+  const form = useForm<In, unknown, Out>({
+    resolver: zodResolver(schema),
+    defaultValues,
+    shouldFocusError: false,
+  });
+  const [refusal, setRefusal] = useState<string | null>(null);
+  const { errors, isSubmitting, submitCount } = form.formState;
+
+  const handleSubmit = form.handleSubmit(
+    async (values) => {
+      setRefusal(null);
+      try {
+        await save(values);
+      } catch (error) {
+        if (!(error instanceof ApiError)) throw error;
+        const faulty = Object.entries(error.fields);
+        for (const [name, message] of faulty) form.setError(name as Path<In>, { message });
+        if (faulty.length === 0) setRefusal(error.message);
+      }
+    },
+    () => setRefusal(null),
+  );
+
+  return {
+    register: form.register,
+    setValue: form.setValue,
+    control: form.control,
+    handleSubmit,
+    isSaving: isSubmitting,
+    attempt: submitCount,
+    problems: problemsOf(errors, refusal),
+    /** What is wrong with a field, in words. */
+    fault: (name: Path<In>) => messageAt(errors, name),
+  };
+}
+
+/** Every fault of a form, in the order of its fields, then the refusal that belongs to none. */
+export function problemsOf(errors: FieldErrors, refusal: string | null): FormProblem[] {
+  const problems = listFaults(errors, '');
+  return refusal === null ? problems : [...problems, { name: null, message: refusal }];
+}
+
+function listFaults(errors: FieldErrors, prefix: string): FormProblem[] {
+  return Object.entries(errors).flatMap(([key, error]) => {
+    if (!error) return [];
+    const name = `${prefix}${key}`;
+    if (typeof error.message === 'string' && error.message !== '') {
+      return [{ name: key === 'root' ? null : name, message: error.message }];
+    }
+    return listFaults(error as FieldErrors, `${name}.`);
+  });
+}
+
+function messageAt(errors: FieldErrors, name: string): string | undefined {
+  return problemsOf(errors, null).find((problem) => problem.name === name)?.message;
+}

@@ -1,0 +1,83 @@
+/** The colours are variables of client/styles.css, so day, night and print share one set of class names. */
+const token = (name) => `var(--${name})`;
+
+/** @type {import('tailwindcss').Config} */
+export default {
+  content: ['./index.html', './client/**/*.{ts,tsx}'],
+  darkMode: ['selector', '[data-theme="night"]'],
+  theme: {
+    // Replaced, not extended: a colour that is neither an ink nor a ground cannot be typed.
+    colors: {
+      transparent: 'transparent',
+      current: 'currentColor',
+      paper: token('paper'),
+      strip: token('strip'),
+      deck: token('deck'),
+      key: token('key'),
+      ink: token('ink'),
+      print: token('print'),
+      rule: token('rule'),
+      hair: token('hair'),
+      grid: { major: token('grid-major'), minor: token('grid-minor') },
+      band: {
+        opens: token('band-opens'),
+        closes: token('band-closes'),
+        edge: token('band-edge'),
+      },
+      pen2: token('pen2'),
+      stop: { DEFAULT: token('stop'), on: token('on-stop'), tint: token('stop-tint') },
+      watch: { DEFAULT: token('watch'), tint: token('watch-tint') },
+      focus: token('focus'),
+    },
+    fontFamily: {
+      gothic: ["'FK Gothic'", "'Arial Narrow'", 'Arial', 'sans-serif'],
+      serif: ["'FK Text'", 'Georgia', "'Times New Roman'", 'serif'],
+    },
+    // Named for what they set, not for how big they are.
+    fontSize: {
+      mark: ['12px', '1'],
+      scale: ['13px', '1'],
+      label: ['14px', { lineHeight: '1.3', fontWeight: '500' }],
+      small: ['15px', '1.42'],
+      body: ['17px', '1.5'],
+      table: ['17px', '1.3'],
+      say: ['18px', '1.45'],
+      lead: ['19px', '1.48'],
+      press: ['18px', { lineHeight: '1.1', fontWeight: '600' }],
+      section: ['20px', { lineHeight: '1.2', fontWeight: '600' }],
+      'section-site': ['23px', { lineHeight: '1.2', fontWeight: '600' }],
+      finding: ['25px', { lineHeight: '1.15', letterSpacing: '-0.01em', fontWeight: '600' }],
+      page: ['30px', { lineHeight: '1.1', letterSpacing: '-0.014em', fontWeight: '600' }],
+      'page-desk': ['38px', { lineHeight: '1.1', letterSpacing: '-0.014em', fontWeight: '600' }],
+      opening: ['54px', { lineHeight: '1.04', letterSpacing: '-0.02em', fontWeight: '600' }],
+      figure: ['22px', { lineHeight: '1.1', fontWeight: '600' }],
+      total: ['30px', { lineHeight: '1', fontWeight: '600' }],
+      digit: ['36px', { lineHeight: '1', fontWeight: '500' }],
+      halt: [
+        'min(16.5vw, 64px)',
+        { lineHeight: '0.95', letterSpacing: '-0.01em', fontWeight: '700' },
+      ],
+      countdown: ['min(25vw, 98px)', { lineHeight: '0.86', fontWeight: '700' }],
+      elapsed: [
+        'min(38.2vw, 153px)',
+        { lineHeight: '0.78', letterSpacing: '-0.012em', fontWeight: '600' },
+      ],
+    },
+    borderRadius: { none: '0', key: '2px' },
+    borderWidth: { 0: '0', DEFAULT: '1px', line: '1.5px', bar: '3px', double: '4px', slip: '6px' },
+    boxShadow: { none: 'none' },
+    extend: {
+      minHeight: {
+        row: '44px',
+        touch: '48px',
+        key: '52px',
+        main: '60px',
+        pad: '64px',
+        cell: '66px',
+      },
+      maxWidth: { site: '480px', letter: '720px', read: '62ch', form: '788px' },
+      screens: { desk: '760px', wide: '1180px' },
+      transitionDuration: { roll: '90ms' },
+    },
+  },
+};
