@@ -57,6 +57,8 @@ export async function up(db: Knex): Promise<void> {
     table.text('judged_by');
     table.text('outcome').notNullable();
     table.text('headline').notNullable();
+    /** JSON list of the first calls in order of time, for lists. */
+    table.text('calls').notNullable();
     table.text('result').notNullable();
   });
 

@@ -1,0 +1,54 @@
+import type { MachinePage } from '#shared/schemas/homes.ts';
+import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
+import type { JudgedBy, RunConditions } from '#shared/schemas/runs.ts';
+import { toCelsius } from '#shared/units.ts';
+import { judgedBy, probeOf, ratingOf } from './judged-by.ts';
+import type { Judging } from './judging.ts';
+import type { Run } from './run.ts';
+
+/** What a machine is specified to have for a heat setting; null where nothing is. */
+export function specifiedFor(
+  machine: MachinePage,
+  setting: RunConditions['setting'],
+): JudgedBy | null {
+  const specified = machine.specified.find((each) => each.setting === setting);
+  return specified ? judgedBy(specified.rating, specified.limit) : null;
+}
+
+/** The same machine judged by another cycling rating: its own safety still stands. */
+export function judgedByAnother(
+  machine: MachinePage,
+  setting: RunConditions['setting'],
+  rating: StoredRating,
+): JudgedBy | null {
+  const specified = machine.specified.find((each) => each.setting === setting);
+  return judgedBy(rating, specified?.limit ?? null);
+}
+
+type Said = {
+  judged: JudgedBy | null;
+  probe: StoredProbe | null;
+  conditions: RunConditions;
+  marks: Run['marks'];
+  minCycles: number;
+};
+
+/** Rating, probe and what the technician said, as the engine takes them. */
+export function judgingFor({ judged, probe, conditions, marks, minCycles }: Said): Judging {
+  const { roomTemp, roomUnit, load } = conditions;
+  return {
+    rating: ratingOf(judged),
+    probe: probeOf(probe),
+    marks,
+    load,
+    roomC: roomTemp === null ? null : toCelsius(roomTemp, roomUnit),
+    minCycles,
+  };
+}
+
+/** Before anybody said anything: the machine's main heat setting, an unnamed probe. */
+export function judgingAtFirst(machine: MachinePage, minCycles: number): Judging {
+  const judged = specifiedFor(machine, machine.specified[0]?.setting ?? 'high');
+  const rating = ratingOf(specifiedFor(machine, 'high') ?? judged);
+  return { rating, probe: probeOf(null), marks: [], load: null, roomC: null, minCycles };
+}

@@ -1,0 +1,26 @@
+import type { AnalysisInput } from '#shared/analysis/analysis.ts';
+import type { Load, Probe, Rating } from '#shared/analysis/rating.ts';
+import { toKelvinStep } from '#shared/units.ts';
+import type { Run } from './run.ts';
+
+/** Swing threshold of a turning point: 4 °F (common practice). */
+const SWING_K = toKelvinStep(4, 'F');
+
+/** What an analysis needs beside the readings; plain values, so that it crosses to the worker. */
+export type Judging = {
+  rating: Rating | null;
+  probe: Probe;
+  /** Times in s of the whole record. */
+  marks: Run['marks'];
+  load: Load | null;
+  roomC: number | null;
+  minCycles: number;
+};
+
+/** The same, for the part of a record from `fromS` to `toS`, its times counted from `fromS`. */
+export function judgingOfSpan(judging: Judging, fromS: number, toS: number): AnalysisInput {
+  const marks = judging.marks
+    .filter((mark) => mark.timeS >= fromS && mark.timeS <= toS)
+    .map(({ kind, timeS }) => ({ kind, timeS: timeS - fromS }));
+  return { ...judging, marks, swingK: SWING_K };
+}

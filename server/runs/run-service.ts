@@ -1,0 +1,136 @@
+import { randomUUID } from 'node:crypto';
+import { join } from 'node:path';
+import type { Knex } from 'knex';
+import type { Person } from '#shared/schemas/people.ts';
+import type { RunConditions } from '#shared/schemas/runs.ts';
+import { createAudit } from '#server/people/audit-repository.ts';
+import { AppError, notFound } from '#server/errors.ts';
+import { createAnalysisRepository } from './analysis-repository.ts';
+import { moveDurably, type DataFolders } from './data-folders.ts';
+import { judgedByAnother, judgingFor, specifiedFor } from './judging-for.ts';
+import type { LogWorker } from './log-worker.ts';
+import type { Run, UploadedFile } from './run.ts';
+import { createRunRepository } from './run-repository.ts';
+import type { RunSources } from './run-sources.ts';
+import type { ImportAnswer } from './run-worker.ts';
+import { createSampleRepository } from './sample-repository.ts';
+import { storeRuns, type Imported, type LogToImport } from './store-runs.ts';
+import { readWholeRun } from './whole-run.ts';
+import { wallClockMs } from './wall-clock.ts';
+
+export type RunParts = {
+  db: Knex;
+  worker: LogWorker;
+  sources: RunSources;
+  folders: DataFolders;
+  now: () => Date;
+};
+
+export type RunService = ReturnType<typeof createRunService>;
+
+export function createRunService({ db, worker, sources, folders, now }: RunParts) {
+  const runs = createRunRepository(db);
+  const samples = createSampleRepository(db);
+
+  async function judgingOf(log: Pick<LogToImport, 'visitId' | 'conditions' | 'marks'>) {
+    const { machine } = await sources.visitFacts(log.visitId);
+    const { minCycles } = await sources.shop();
+    const probe = await findProbe(log.conditions);
+    const judged = specifiedFor(machine, log.conditions.setting);
+    return { machine, judged, said: { ...log, probe, minCycles } };
+  }
+
+  async function findProbe({ probeId }: RunConditions) {
+    if (probeId === null) return null;
+    const probe = await sources.findProbe(probeId);
+    if (!probe) throw new AppError(400, 'no-probe', 'Choose a probe of the list.');
+    return probe;
+  }
+
+  /** A file becomes runs: all of it, or nothing. @returns the runs' ids, in the order of the spans */
+  async function importRuns(by: Person, log: LogToImport): Promise<string[]> {
+    const { judged, said } = await judgingOf(log);
+
+    // [2 read] [3 analyse] in the worker, from the same bytes that were looked at
+    const { path, choices, spans, resultHash } = log;
+    const judging = judgingFor({ judged, ...said });
+    const read = imported(await worker.importRuns({ path, choices, spans, judging, resultHash }));
+
+    // [4 store] the untouched file first, then its rows; neither stays without the other
+    const startedAtMs = await startOf(log, read);
+    const kept = join(folders.uploads, log.id);
+    await moveDurably(path, kept);
+    try {
+      return await storeRuns({ db, now }, by, { log, read, judged, startedAtMs });
+    } catch (error) {
+      await moveDurably(kept, path);
+      throw error;
+    }
+  }
+
+  /** As told; else as the file's own clock says, in the shop's zone; else as if it ended now. */
+  async function startOf(log: LogToImport, read: Imported): Promise<number> {
+    const { startedAt } = read.log.notes;
+    const byClock = startedAt ? wallClockMs(startedAt, (await sources.shop()).zone) : undefined;
+    const lastS = Math.max(...read.log.runs.map(({ toS }) => toS));
+    return log.startedAtMs ?? byClock ?? Math.round(now().getTime() - lastS * 1000);
+  }
+
+  async function get(id: string): Promise<Run> {
+    const run = await runs.find(id);
+    if (!run) throw notFound();
+    return run;
+  }
+
+  /**
+   * Adds a result by another rating, or by the newest engine; earlier ones stay.
+   * @param ratingId null: by what the machine is specified to have now
+   */
+  async function judgeAgain(by: Person, id: string, ratingId: string | null): Promise<void> {
+    const run = await get(id);
+    const { machine, judged: own, said } = await judgingOf(run);
+    const rating = (await sources.listRatings()).find((each) => each.id === ratingId);
+    if (ratingId !== null && !rating) {
+      throw new AppError(400, 'no-rating', 'Choose a rating of the list.');
+    }
+    const judged = rating ? judgedByAnother(machine, run.conditions.setting, rating) : own;
+    const series = await readWholeRun(samples, run);
+    const result = await worker.judge({ ...series, judging: judgingFor({ judged, ...said }) });
+    await createAnalysisRepository(db).insert({
+      ...result,
+      id: randomUUID(),
+      runId: id,
+      madeAtMs: now().getTime(),
+      judgedBy: judged,
+    });
+    const details = { rating: judged?.name ?? 'none' };
+    await createAudit(
+      db,
+      now,
+    )({
+      userId: by.id,
+      event: 'run_judged_again',
+      subject: id,
+      details,
+    });
+  }
+
+  /** The untouched file that a run came from. */
+  async function fileOf(id: string): Promise<UploadedFile> {
+    const file = await runs.findUpload((await get(id)).uploadId);
+    if (!file) throw notFound();
+    return file;
+  }
+
+  return { importRuns, get, judgeAgain, fileOf };
+}
+
+function imported(answer: ImportAnswer): Imported {
+  if (answer.kind === 'imported') return answer;
+  if (answer.kind === 'empty-span') throw new AppError(400, 'empty-span', answer.message);
+  throw new AppError(
+    409,
+    'changed',
+    'This is no longer what you looked at. Look at the preview again, then accept it.',
+  );
+}

@@ -1,0 +1,22 @@
+import type { Customer, Home, MachinePage } from '#shared/schemas/homes.ts';
+import type { Visit } from '#shared/schemas/jobs.ts';
+import type { Person, Shop } from '#shared/schemas/people.ts';
+import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
+
+/** A visit with the job and the machine that it is about. */
+export type VisitFacts = {
+  visit: Visit;
+  job: { id: string; number: number; complaint: string };
+  machine: MachinePage;
+  home: Home;
+  customer: Customer;
+};
+
+/** What the runs ask of the other nouns. Each `find` is undefined where there is no such thing. */
+export type RunSources = {
+  visitFacts(visitId: string): Promise<VisitFacts>;
+  findProbe(id: string): Promise<StoredProbe | undefined>;
+  findPerson(id: string): Promise<Person | undefined>;
+  listRatings(): Promise<StoredRating[]>;
+  shop(): Promise<Shop>;
+};
