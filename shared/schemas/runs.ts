@@ -148,6 +148,10 @@ export const noteSchema = newNoteSchema.extend({
 });
 export type Note = z.infer<typeof noteSchema>;
 
+// A schema with refinements cannot be picked from.
+const { id, name } = ratingSchema.shape;
+const namedRatingSchema = z.object({ id, name });
+
 export const runPageSchema = z.object({
   id: idSchema,
   visitId: idSchema,
@@ -174,9 +178,9 @@ export const runPageSchema = z.object({
   customer: z.object({ id: idSchema, name: z.string() }),
   home: z.object({ id: idSchema, address: z.string() }),
   technician: z.string(),
-  fitted: z.array(ratingSchema.pick({ id: true, kind: true, name: true })),
+  fitted: z.array(namedRatingSchema.extend({ kind: ratingSchema.shape.kind })),
   /** Cycling ratings that it could be judged against instead: the machine's own first. */
-  otherRatings: z.array(ratingSchema.pick({ id: true, name: true })),
+  otherRatings: z.array(namedRatingSchema),
   samples: z.int(),
   durationS: z.number(),
   channel: z.string(),
