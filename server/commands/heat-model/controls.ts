@@ -18,10 +18,16 @@ export function createControls(machine: Machine, faults: Faults, random: Random)
   let lostForGood = false;
   let off = false;
   let openings = 0;
-  let opensC = machine.disc.opensC + faults.scatterK * random.gaussian();
+  let opensC = nextOpening(1);
   let cutAtS = -Infinity;
   let litAtS = machine.relightS;
   let lastW = 0;
+
+  function nextOpening(opening: number): number {
+    const lateK = faults.oneLate?.opening === opening ? faults.oneLate.byK : 0;
+    const movedK = faults.driftK * (opening - 1) + faults.scatterK * random.gaussian();
+    return machine.disc.opensC + movedK + lateK;
+  }
 
   function moveDisc(timeS: number, discC: number): void {
     if (discClosed && discC >= opensC) {
@@ -30,7 +36,7 @@ export function createControls(machine: Machine, faults: Faults, random: Random)
       clicksS.push(timeS);
       // The relay lets go late, and later as it warms.
       cutAtS = timeS + faults.relayLateS * (openings - 1);
-      opensC = machine.disc.opensC + faults.driftK * openings + faults.scatterK * random.gaussian();
+      opensC = nextOpening(openings + 1);
     } else if (!discClosed && discC <= machine.disc.closesC) {
       discClosed = true;
       litAtS = timeS + machine.relightS;
@@ -64,7 +70,13 @@ export function createControls(machine: Machine, faults: Faults, random: Random)
       const fedW = Math.max(controlledW(timeS), leaks);
       const nowW = lostForGood || off ? 0 : fedW;
       if (nowW !== lastW) {
-        const cause = off ? 'person' : lostForGood ? 'one-shot' : limitWas !== limitClosed ? 'limit' : 'disc';
+        const cause = off
+          ? 'person'
+          : lostForGood
+            ? 'one-shot'
+            : limitWas !== limitClosed
+              ? 'limit'
+              : 'disc';
         switches.push({ timeS, powerW: nowW, cause });
         lastW = nowW;
       }

@@ -47,6 +47,8 @@ export type Faults = {
   driftK: number;
   /** … and scatters by this standard deviation. */
   scatterK: number;
+  /** One opening, counted from 1, that comes this much late. */
+  oneLate: { opening: number; byK: number } | null;
   /** Something one-shot opens at this time, whatever its temperature; Infinity = never. */
   opensForGoodS: number;
 };
@@ -60,6 +62,7 @@ export const SOUND: Faults = {
   groundedAfter: Infinity,
   driftK: 0,
   scatterK: 0,
+  oneLate: null,
   opensForGoodS: Infinity,
 };
 

@@ -42,7 +42,7 @@ export function simulateRun(
     if (heatOffS === null && nodes.probeC >= watch.heatOffAtC) {
       heatOffS = timeS;
       end = Math.min(steps, i + 1 + Math.round(watch.afterHeatOffS / STEP_S));
-      controls.turnOff(timeS);
+      controls.turnOff();
     }
     const powerW = controls.powerW(timeS, nodes);
     stepNodes(nodes, machine, { powerW, airShare: airShareAt(faults, timeS) });
@@ -90,14 +90,16 @@ function stepNodes(
   const toAirW = airWPerK * taken * (nodes.heaterC - roomC);
   const heatedC = roomC + toAirW / airWPerK;
 
-  const left = Math.exp(-machine.drumWPerK / airWPerK);
+  // Heat passes less well to slower air: the usual power of a turbulent flow, 0.8.
+  const left = Math.exp((-machine.drumWPerK * now.airShare ** 0.8) / airWPerK);
   const leavingC = nodes.drumC + (heatedC - nodes.drumC) * left;
   const toDrumW = airWPerK * (heatedC - leavingC);
   const evaporatedKgPerS = evaporation(nodes, dryAirKgPerS);
   const drumW =
     toDrumW - machine.lossWPerK * (nodes.drumC - roomC) - evaporatedKgPerS * VAPOUR_J_PER_KG;
   const mixedC = leavingC + machine.leak * (roomC - leavingC);
-  nodes.outletC += ((mixedC - nodes.outletC) / (machine.mixingS / now.airShare)) * STEP_S;
+  nodes.outletC +=
+    ((mixedC - nodes.outletC) / (machine.mixingS / Math.sqrt(now.airShare))) * STEP_S;
   const { outletC } = nodes;
 
   const drumJPerK = machine.drumJPerK + nodes.waterKg * 4186;
@@ -106,7 +108,8 @@ function stepNodes(
   nodes.waterKg -= evaporatedKgPerS * STEP_S;
   nodes.discC += ((outletC - nodes.discC) / machine.disc.lagS) * STEP_S;
   // The limit sits on the housing: it feels the heated air and some glow of the coil.
-  nodes.boxC += ((0.85 * heatedC + 0.15 * nodes.heaterC - nodes.boxC) / machine.boxLimit.lagS) * STEP_S;
+  nodes.boxC +=
+    ((0.85 * heatedC + 0.15 * nodes.heaterC - nodes.boxC) / machine.boxLimit.lagS) * STEP_S;
   nodes.fuseC += ((outletC - nodes.fuseC) / machine.fuse.lagS) * STEP_S;
   nodes.probeC += ((outletC - nodes.probeC) / machine.probeLagS) * STEP_S;
 }
