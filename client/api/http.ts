@@ -40,6 +40,11 @@ export async function putJson<T>(schema: Checker<T>, url: string, body?: unknown
   return schema.parse(await answerOf(await sendJson('PUT', url, body)));
 }
 
+/** For a DELETE that answers with what remains. */
+export async function deleteJson<T>(schema: Checker<T>, url: string): Promise<T> {
+  return schema.parse(await answerOf(await sendJson('DELETE', url, undefined)));
+}
+
 /** For requests whose answer is empty (204). */
 export async function sendOnly(
   method: 'POST' | 'PUT' | 'DELETE',

@@ -1,4 +1,4 @@
-/* global document, localStorage, matchMedia */
+/* global document, matchMedia */
 // Before the first paint: the theme that was chosen on this device, else what the system asks for.
 (function () {
   let theme = null;
