@@ -1,6 +1,6 @@
 import type { Request } from 'express';
 import type { Role } from '#shared/schemas/people.ts';
-import type { Scope } from './scope-repository.ts';
+import type { Scope } from './jobs/scope-repository.ts';
 
 /**
  * Who may do what: the one table. A request without a row here is answered as if there were nothing,

@@ -5,27 +5,30 @@ import type { Express, RequestHandler } from 'express';
 import type { Knex } from 'knex';
 import type { Logger } from 'pino';
 import { errorHandler, unknownPath } from './error-handler.ts';
-import { guard } from './guard.ts';
+import { customerRoutes } from './homes/customer-routes.ts';
+import { homeRoutes } from './homes/home-routes.ts';
+import { machineRoutes } from './homes/machine-routes.ts';
+import { guard } from './http/guard.ts';
+import { jsonOnly, sameOrigin } from './http/same-origin.ts';
+import { noStore, securityHeaders } from './http/security-headers.ts';
+import { jobRoutes } from './jobs/job-routes.ts';
+import { createScopeRepository } from './jobs/scope-repository.ts';
+import { visitRoutes } from './jobs/visit-routes.ts';
 import { requestLog } from './log.ts';
-import { createAudit } from './people/audit-repository.ts';
-import { createBackOff } from './people/back-off.ts';
-import { createPasswords } from './people/passwords.ts';
-import { createPeopleRepository } from './people/people-repository.ts';
 import { peopleRoutes } from './people/people-routes.ts';
-import { createPeopleService } from './people/people-service.ts';
 import { createSessionCookie } from './people/session-cookie.ts';
-import { createSessionRepository } from './people/session-repository.ts';
 import { sessionRoutes } from './people/session-routes.ts';
-import { createSessionService } from './people/session-service.ts';
-import { createShopRepository } from './people/shop-repository.ts';
 import { shopRoutes } from './people/shop-routes.ts';
-import { createShopService } from './people/shop-service.ts';
-import { createSignInFailuresRepository } from './people/sign-in-failures-repository.ts';
 import type { Workers } from './pool.ts';
-import { jsonOnly, sameOrigin } from './same-origin.ts';
-import { createScopeRepository } from './scope-repository.ts';
+import { probeRoutes } from './ratings/probe-routes.ts';
+import { ratingRoutes } from './ratings/rating-routes.ts';
+import { runRoutes } from './runs/run-routes.ts';
+import { uploadRoutes } from './runs/upload-routes.ts';
 import type { Secrets } from './secrets.ts';
-import { noStore, securityHeaders } from './security-headers.ts';
+import { shareRoutes } from './shares/share-routes.ts';
+import { wireJobs } from './wiring/wire-jobs.ts';
+import { wirePeople } from './wiring/wire-people.ts';
+import { wireRuns } from './wiring/wire-runs.ts';
 
 export type AppParts = {
   db: Knex;
@@ -48,7 +51,9 @@ export function createApp(parts: AppParts): Express {
   const { publicUrl, logger, pages, development = false } = parts;
   const app = express();
   app.disable('x-powered-by');
-  // `?a=1&a=2` is a list and nothing nests; X-Forwarded-… is nobody's word (trust proxy stays off).
+  // Nothing of the API may be kept, so nothing needs to be compared.
+  app.disable('etag');
+  // `?a=1&a=2` is a list and nothing nests. Trust proxy stays off: X-Forwarded-… is nobody's word.
   app.set('query parser', 'simple');
 
   app.use(securityHeaders({ https: publicUrl?.protocol === 'https:', development }));
@@ -61,33 +66,14 @@ export function createApp(parts: AppParts): Express {
   return app;
 }
 
-function createApi({ db, now, workers, publicUrl, secrets }: AppParts): Router {
-  const audit = createAudit(db, now);
-  const passwords = createPasswords(workers.passwords, secrets.pepper);
-  const people = createPeopleRepository(db);
-  const sessionRows = createSessionRepository(db);
-  const backOff = createBackOff(createSignInFailuresRepository(db), now, secrets.pepper);
-  const shop = createShopService(createShopRepository(db), audit);
+function createApi(parts: AppParts): Router {
+  const { db, publicUrl } = parts;
+  const people = wirePeople(parts);
+  const jobs = wireJobs(parts, people);
+  const runs = wireRuns(parts, people, jobs);
+  const { audit, sessions, shop } = people;
   const cookie = createSessionCookie(publicUrl);
-  const sessions = createSessionService({
-    people,
-    sessions: sessionRows,
-    passwords,
-    backOff,
-    audit,
-    tokenKey: secrets.tokenKey,
-    now,
-  });
-  const peopleService = createPeopleService({
-    people,
-    sessions: sessionRows,
-    passwords,
-    audit,
-    now,
-  });
-
-  // Uploads tell who sent them (server/runs).
-  const scope = { ...createScopeRepository(db), sentUpload: () => Promise.resolve(false) };
+  const scope = { ...createScopeRepository(db), sentUpload: runs.uploads.sentUpload };
 
   const api = Router();
   api.use(noStore);
@@ -102,10 +88,17 @@ function createApi({ db, now, workers, publicUrl, secrets }: AppParts): Router {
   api.use(guard({ sessions, cookie, scope, audit }));
 
   api.use(sessionRoutes(sessions, shop, cookie));
-  api.use(peopleRoutes(peopleService));
+  api.use(peopleRoutes(people.peopleService));
   api.use(shopRoutes(shop));
-
-  // server/runs and server/shares add their routers here.
-
+  api.use(customerRoutes(jobs.customerService));
+  api.use(homeRoutes(jobs.homeService, scope.ownHomeIds));
+  api.use(machineRoutes(jobs.machineService, jobs.jobService.runsOfMachine));
+  api.use(ratingRoutes(jobs.ratingService));
+  api.use(probeRoutes(jobs.probeService));
+  api.use(jobRoutes(jobs.jobService, jobs.visitService));
+  api.use(visitRoutes(jobs.visitService, jobs.roundsService));
+  api.use(uploadRoutes(runs.uploads, runs.receive));
+  api.use(runRoutes(runs));
+  api.use(shareRoutes({ ...runs, shop: shop.get, publicUrl }));
   return api;
 }

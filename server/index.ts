@@ -1,12 +1,14 @@
+import { once } from 'node:events';
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 import { createApp } from './app.ts';
-import { clientFiles, clientFromSource } from './client-files.ts';
+import { clientFiles, clientFromSource } from './http/client-files.ts';
 import { migrate, openDatabase } from './db.ts';
 import { readEnv } from './env.ts';
 import { createLogger } from './log.ts';
 import { closeWorkers, openWorkers } from './pool.ts';
+import { openDataFolders } from './runs/data-folders.ts';
 import { openSecrets } from './secrets.ts';
 
 /** An upload of 100 MB over a phone takes minutes; a request that says nothing for so long is dropped. */
@@ -21,6 +23,7 @@ async function start(): Promise<void> {
   const secrets = await openSecrets(env.dataDir);
   const db = openDatabase(join(env.dataDir, 'fusekeeper.sqlite'));
   await migrate(db);
+  await openDataFolders(env.dataDir);
   const workers = openWorkers();
   const now = () => new Date();
 
@@ -32,9 +35,10 @@ async function start(): Promise<void> {
     createApp({ db, dataDir, now, workers, publicUrl, secrets, logger, pages, development }),
   );
 
-  server.listen(env.port, env.host, () => {
-    process.stdout.write(`Fusekeeper is at ${publicUrl?.href ?? localUrl(server.address())}\n`);
-  });
+  server.listen(env.port, env.host);
+  // Rejects where the port is taken.
+  await once(server, 'listening');
+  process.stdout.write(`Fusekeeper is at ${publicUrl?.href ?? localUrl(server.address())}\n`);
   const close = () => {
     setTimeout(() => server.closeAllConnections(), CLOSING_MS).unref();
     server.close(() => {
@@ -57,5 +61,5 @@ function localUrl(address: AddressInfo | string | null): string {
 start().catch((error: unknown) => {
   const message = error instanceof Error ? error.message : String(error);
   process.stderr.write(`Fusekeeper did not start. ${message}\n`);
-  process.exitCode = 1;
+  process.exit(1);
 });

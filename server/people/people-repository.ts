@@ -34,9 +34,12 @@ export function createPeopleRepository(db: Knex) {
       return row && toPerson(row);
     },
 
-    async findByEmail(email: string): Promise<(Person & { passwordHash: string }) | undefined> {
+    /** With the hash beside the person, so that it does not travel on with them. */
+    async findByEmail(
+      email: string,
+    ): Promise<{ person: Person; passwordHash: string } | undefined> {
       const row = await db<UserRow>('users').where({ email }).first();
-      return row && { ...toPerson(row), passwordHash: row.password_hash };
+      return row && { person: toPerson(row), passwordHash: row.password_hash };
     },
 
     async insert(person: PersonToStore): Promise<void> {

@@ -34,12 +34,12 @@ export function createSessionService(parts: SessionParts) {
   /** Every refusal is the same and takes as long: unknown, wrong, or disabled. */
   async function checkPassword({ email, password }: SignIn): Promise<Person> {
     const { failures } = await backOff.startTry(email);
-    const person = await people.findByEmail(email.trim().toLowerCase());
-    const matches = await passwords.matches(password, person?.passwordHash);
+    const stored = await people.findByEmail(email.trim().toLowerCase());
+    const matches = await passwords.matches(password, stored?.passwordHash);
+    const person = stored?.person;
     if (person && matches && person.disabledAtMs === null) {
       await backOff.succeeded(email);
-      const { passwordHash: _, ...known } = person;
-      return known;
+      return person;
     }
     const event = backOff.isLocking(failures) ? 'authn_login_lock' : 'authn_login_fail';
     await audit({ userId: person?.id ?? null, event, subject: 'session', details: { failures } });

@@ -14,6 +14,7 @@ import { createSessionRepository } from '#server/people/session-repository.ts';
 import { signToken } from '#server/people/session-token.ts';
 import { createShopRepository } from '#server/people/shop-repository.ts';
 import { closeWorkers, openWorkers } from '#server/pool.ts';
+import { openDataFolders } from '#server/runs/data-folders.ts';
 import type { Person, Role } from '#shared/schemas/people.ts';
 
 /** A moment that tests count from: Wednesday, 4 March 2026, 15:00 UTC, 10:00 in the shop. */
@@ -41,6 +42,7 @@ export async function createTestApp(given: Partial<AppParts> = {}) {
     logger: createLogger({ write: (line) => void lines.push(line) }),
     ...given,
   };
+  await openDataFolders(parts.dataDir);
   await createShopRepository(db).insert(TEST_SHOP, false);
   const app = createApp(parts);
 

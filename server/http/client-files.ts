@@ -2,10 +2,12 @@ import type { Server, ServerResponse } from 'node:http';
 import { fileURLToPath } from 'node:url';
 import express, { Router } from 'express';
 import type { RequestHandler } from 'express';
-import { notFound } from './errors.ts';
+import { notFound } from '#server/errors.ts';
 
 const fromSource = import.meta.url.endsWith('.ts');
-const BUILT = fileURLToPath(new URL(fromSource ? '../dist/client' : '../client', import.meta.url));
+const BUILT = fileURLToPath(
+  new URL(fromSource ? '../../dist/client' : '../client', import.meta.url),
+);
 
 /** The built application. Files under /assets carry a hash of what they hold in their name. */
 export function clientFiles(folder = BUILT): RequestHandler {

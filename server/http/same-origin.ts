@@ -1,5 +1,5 @@
 import type { Request, RequestHandler } from 'express';
-import { AppError } from './errors.ts';
+import { AppError } from '#server/errors.ts';
 
 const READS = ['GET', 'HEAD', 'OPTIONS'];
 

@@ -1,13 +1,13 @@
 import type { RequestHandler } from 'express';
 import { z } from 'zod';
 import type { Person } from '#shared/schemas/people.ts';
-import { RULES } from './access.ts';
-import type { Rule } from './access.ts';
-import { notAllowed, notFound, signInNeeded } from './errors.ts';
-import type { Audit } from './people/audit-repository.ts';
-import type { SessionCookie } from './people/session-cookie.ts';
-import type { SessionService } from './people/session-service.ts';
-import type { Scope } from './scope-repository.ts';
+import { RULES } from '#server/access.ts';
+import type { Rule } from '#server/access.ts';
+import { notAllowed, notFound, signInNeeded } from '#server/errors.ts';
+import type { Audit } from '#server/people/audit-repository.ts';
+import type { SessionCookie } from '#server/people/session-cookie.ts';
+import type { SessionService } from '#server/people/session-service.ts';
+import type { Scope } from '#server/jobs/scope-repository.ts';
 
 export type GuardParts = {
   sessions: SessionService;
