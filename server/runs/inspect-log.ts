@@ -1,9 +1,9 @@
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
 import type { LogReading, ReadOutcome } from '#shared/reading/log-reading.ts';
+import { findParts } from '#shared/reading/find-parts.ts';
+import { traceColumns } from '#shared/reading/preview-trace.ts';
 import type { ReadPreview } from '#shared/schemas/uploads.ts';
-import { findParts } from './find-parts.ts';
 import { judgingOfSpan, type Judging } from './judging.ts';
-import { minMaxColumns } from './min-max-columns.ts';
 import { roomOf } from './room-of.ts';
 
 const PREVIEW_COLUMNS = 600;
@@ -43,7 +43,7 @@ function previewOf(reading: LogReading, judging: Judging): ReadPreview {
     warnings: reading.warnings,
     preview: reading.preview,
     resultHash: reading.resultHash,
-    trace: minMaxColumns(series.timesS, series.tempsC, PREVIEW_COLUMNS),
+    trace: traceColumns(series.timesS, series.tempsC, PREVIEW_COLUMNS),
     parts: findParts(series.timesS),
     analysis: analyseRun(series, judgingOfSpan(room, 0, toS)),
   };

@@ -1,7 +1,7 @@
 import type { Knex } from 'knex';
 import { AppError } from '#server/errors.ts';
 import { toCelsius, type TemperatureUnit } from '#shared/units.ts';
-import { foldColumns, type Column } from './min-max-columns.ts';
+import { foldColumns, type Column } from './fold-columns.ts';
 import { packChunk } from './pack-samples.ts';
 import type { Run } from './run.ts';
 import { createSampleRepository, TEMPS, TIMES } from './sample-repository.ts';
@@ -16,7 +16,7 @@ export function createRunReadings(db: Knex) {
     /** At most `most` columns; every reading lies in exactly one. @param channel 0 is the run's own */
     async columns(run: Run, channel: number, most: number): Promise<Column[]> {
       const unit = unitOf(run, channel);
-      const folder = foldColumns(most, 0, run.durationS);
+      const folder = foldColumns(most, run);
       for await (const [timesS, temps] of samples.pairs(run.id, TEMPS + channel)) {
         folder.add(timesS, inCelsius(temps, unit));
       }

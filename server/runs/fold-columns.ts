@@ -8,12 +8,16 @@ export type ColumnFolder = {
 };
 
 /**
- * Folds readings into at most `most` columns of equal time between `fromS` and `toS`. Each reading counts in
- * exactly one column, so no peak can be lost; a stretch without readings has no column.
+ * Folds a run that comes in pieces into at most `most` columns of equal time. Each reading counts in exactly one
+ * column, so no peak can be lost; a stretch without readings has no column, and few readings keep one each.
  */
-export function foldColumns(most: number, fromS: number, toS: number): ColumnFolder {
+export function foldColumns(
+  most: number,
+  { samples, durationS }: { samples: number; durationS: number },
+): ColumnFolder {
   const columns: Column[] = [];
-  const perS = toS > fromS ? most / (toS - fromS) : 0;
+  const perS = durationS > 0 ? most / durationS : 0;
+  const isEachOwn = samples <= most;
   let place = -1;
 
   function add(timesS: Float64Array, temps: Float64Array): void {
@@ -21,9 +25,9 @@ export function foldColumns(most: number, fromS: number, toS: number): ColumnFol
       const timeS = timesS[i]!;
       const temp = temps[i]!;
       if (Number.isNaN(temp)) continue;
-      const at = Math.min(most - 1, Math.floor((timeS - fromS) * perS));
+      const at = isEachOwn ? place + 1 : Math.min(most - 1, Math.floor(timeS * perS));
       const last = columns[columns.length - 1];
-      if (last && at <= place) widen(last, temp);
+      if (last && at === place) widen(last, temp);
       else columns.push([timeS, temp, temp]);
       place = at;
     }
@@ -34,11 +38,4 @@ export function foldColumns(most: number, fromS: number, toS: number): ColumnFol
 function widen(column: Column, temp: number): void {
   if (temp < column[1]) column[1] = temp;
   if (temp > column[2]) column[2] = temp;
-}
-
-/** The whole of a series in at most `most` columns. */
-export function minMaxColumns(timesS: Float64Array, temps: Float64Array, most: number): Column[] {
-  const folder = foldColumns(most, timesS[0] ?? 0, timesS.at(-1) ?? 0);
-  folder.add(timesS, temps);
-  return folder.columns();
 }
