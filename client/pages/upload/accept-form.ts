@@ -4,6 +4,9 @@ import type { AcceptUpload } from '#shared/schemas/runs.ts';
 import type { ReadPreview, Upload } from '#shared/schemas/uploads.ts';
 import { formatRunTime, parseRunTime } from './run-time.ts';
 
+/** Times are typed and shown to a tenth of a second; the record itself ends where it ends. */
+const SHOWN_TO_S = 0.1;
+
 const typedTimeSchema = z.string().transform((typed, context) => {
   const timeS = parseRunTime(typed);
   if (timeS !== null) return timeS;
@@ -12,9 +15,9 @@ const typedTimeSchema = z.string().transform((typed, context) => {
 });
 
 const typedNumberSchema = z.string().transform((typed, context) => {
-  const text = typed.trim().replace(',', '.');
+  const text = typed.trim().replace(',', '.').replace('−', '-');
   if (text === '') return null;
-  if (/^[-−]?\d+(\.\d+)?$/.test(text)) return Number(text.replace('−', '-'));
+  if (/^-?\d+(\.\d+)?$/.test(text)) return Number(text);
   context.addIssue({ code: 'custom', message: 'Enter a number, like 70' });
   return z.NEVER;
 });
@@ -31,95 +34,95 @@ function chosen<Choice extends string>(choices: z.ZodType<Choice>, ask: string) 
 
 const conditions = runConditionsSchema.shape;
 
-/** What is typed on the upload page, checked with the parts of the schema that the server uses. */
+const typedConditionsSchema = z.object({
+  probeId: z
+    .string()
+    .transform((id) => id || null)
+    .pipe(conditions.probeId),
+  placement: conditions.placement,
+  duct: chosen(conditions.duct, 'Say whether the duct was on or off'),
+  load: chosen(conditions.load, 'Say what was in the drum'),
+  setting: chosen(conditions.setting, 'Say which heat setting it ran on'),
+  roomTemp: typedNumberSchema.pipe(conditions.roomTemp),
+  roomUnit: conditions.roomUnit,
+});
+
+/**
+ * What is typed on the upload page, checked with the parts of the schema that the server checks with. Its fields are
+ * called as on the wire, so that a fault that only the server sees lands on its field as well.
+ */
 export function acceptFormSchema(durationS: number) {
   const withinSchema = typedTimeSchema.refine(
-    (timeS) => timeS <= durationS + 0.1,
+    (timeS) => timeS <= durationS + SHOWN_TO_S,
     `The record ends at ${formatRunTime(durationS)}`,
   );
+  const typedSpanSchema = z
+    .object({ label: runSpanSchema.shape.label, fromS: withinSchema, toS: withinSchema })
+    .refine(({ fromS, toS }) => toS > fromS, { path: ['toS'], message: 'End after it starts' });
+  const typedMarkSchema = z.object({
+    timeS: withinSchema,
+    kind: markSchema.shape.kind,
+    text: markSchema.shape.text.unwrap(),
+  });
   return z.object({
-    placement: conditions.placement,
-    duct: chosen(conditions.duct, 'Say whether the duct was on or off'),
-    load: chosen(conditions.load, 'Say what was in the drum'),
-    setting: chosen(conditions.setting, 'Say which heat setting it ran on'),
-    roomTemp: typedNumberSchema.pipe(conditions.roomTemp),
-    roomUnit: conditions.roomUnit,
-    probeId: z
-      .string()
-      .transform((id) => id || null)
-      .pipe(conditions.probeId),
-    marks: z
-      .array(
-        z.object({
-          time: withinSchema,
-          kind: markSchema.shape.kind,
-          text: markSchema.shape.text.unwrap(),
-        }),
-      )
-      .max(500),
-    spans: z
-      .array(
-        z
-          .object({ from: withinSchema, to: withinSchema, label: runSpanSchema.shape.label })
-          .refine(({ from, to }) => to > from, { path: ['to'], message: 'End after it starts' }),
-      )
-      .min(1)
-      .max(20, 'At most 20 runs'),
+    spans: z.array(typedSpanSchema).min(1).max(20, 'At most 20 runs from one file'),
+    conditions: typedConditionsSchema,
+    marks: z.array(typedMarkSchema).max(500, 'At most 500 marks'),
   });
 }
 
 export type AcceptForm = z.input<ReturnType<typeof acceptFormSchema>>;
 export type CheckedForm = z.output<ReturnType<typeof acceptFormSchema>>;
+export type TypedSpan = AcceptForm['spans'][number];
 
-/** Nothing that bears on the judgement is filled in for the technician but what the shop already knows. */
+/** Nothing that bears on the judgement is filled in for the technician. */
 export function emptyForm(preview: ReadPreview, roomUnit: 'F' | 'C', firstRun: number): AcceptForm {
   return {
-    placement: '',
-    duct: '',
-    load: '',
-    setting: '',
-    roomTemp: '',
-    roomUnit,
-    probeId: '',
-    marks: [],
     spans: [wholeSpan(preview.durationS, firstRun)],
+    conditions: {
+      probeId: '',
+      placement: '',
+      duct: '',
+      load: '',
+      setting: '',
+      roomTemp: '',
+      roomUnit,
+    },
+    marks: [],
   };
 }
 
-export function wholeSpan(durationS: number, number: number): AcceptForm['spans'][number] {
-  return { from: '0:00', to: formatRunTime(durationS), label: `Run ${number}` };
+export function wholeSpan(durationS: number, number: number): TypedSpan {
+  return { label: `Run ${number}`, fromS: '0:00', toS: formatRunTime(durationS) };
 }
 
 /** The proposed parts as spans, named in order. */
-export function partSpans(parts: ReadPreview['parts'], firstRun: number): AcceptForm['spans'] {
+export function partSpans(parts: ReadPreview['parts'], firstRun: number): TypedSpan[] {
   return parts.map(({ fromS, toS }, index) => ({
-    from: formatRunTime(fromS),
-    to: formatRunTime(toS),
     label: `Run ${firstRun + index}`,
+    fromS: formatRunTime(fromS),
+    toS: formatRunTime(toS),
   }));
 }
 
-/** What goes to the server. Times shown to a tenth are let reach the record's own end. */
+/** What goes to the server. */
 export function toAcceptUpload(
   form: CheckedForm,
   upload: Upload,
   preview: ReadPreview,
 ): AcceptUpload {
-  const { marks, spans, ...conditionsOnly } = form;
+  const { durationS, resultHash } = preview;
+  const toEnd = (timeS: number) => (durationS - timeS < SHOWN_TO_S ? durationS : timeS);
   return {
     visitId: upload.visitId,
-    resultHash: preview.resultHash,
-    conditions: conditionsOnly,
-    marks: marks.map(({ time, kind, text }) => ({
-      timeS: Math.min(time, preview.durationS),
+    resultHash,
+    conditions: form.conditions,
+    marks: form.marks.map(({ timeS, kind, text }) => ({
+      timeS: Math.min(timeS, durationS),
       kind,
       ...(text && { text }),
     })),
-    spans: spans.map(({ from, to, label }) => ({
-      fromS: from,
-      toS: preview.durationS - to < 0.1 ? preview.durationS : to,
-      label,
-    })),
+    spans: form.spans.map((span) => ({ ...span, toS: toEnd(span.toS) })),
     startedAtMs: null,
   };
 }
