@@ -14,6 +14,8 @@ export type BinnedView = {
   tempsC: Float64Array;
   /** tempsC smoothed so far that noise is well under the swing threshold, °C. */
   smoothC: Float64Array;
+  /** Standard deviation of smoothC that noise alone gives, K. */
+  smoothNoiseK: number;
 };
 
 /**
@@ -23,6 +25,9 @@ export type BinnedView = {
  * cut-out precedes. `machine`: it is a turning point.
  */
 export type TurnedBy = 'machine' | 'start' | 'end' | 'person' | 'one-shot' | 'before-cut-out';
+
+/** When the heater really lost or got power; both uncertainties are expanded, k = 2. */
+export type SwitchInstant = { timeS: number; tempC: number; uS: number; uK: number };
 
 /** A local extreme of the cleaned record. */
 export type Extreme = {
@@ -34,8 +39,8 @@ export type Extreme = {
   uK: number;
   /** Reading of the cleaned series nearest to it. */
   index: number;
-  /** Where the slope broke; null where the record does not show it. `uS` is expanded, k = 2. */
-  switched: { timeS: number; tempC: number; uS: number } | null;
+  /** Where the slope broke; null where the record does not show it. */
+  switched: SwitchInstant | null;
 };
 
 /**

@@ -1,0 +1,103 @@
+import type { Mark, MarkKind } from './series.ts';
+import type { Rating } from './rating.ts';
+import type { Extreme, TurnedBy } from './run-facts.ts';
+import { median } from './statistics/quantile.ts';
+import { bandOf } from './judge-point.ts';
+
+const OFF_MARKS: MarkKind[] = ['heat-off', 'stopped', 'door'];
+/** A mark is tapped a little after the fact, s. */
+const TAPPED_LATE_S = 3;
+/** A last peak this far off the other cut-outs is no cut-out of the same thermostat, K (4 °F). */
+const OUT_OF_LINE_K = 4 / 1.8;
+
+/**
+ * Tells for each extreme what turned it (see `TurnedBy`): the record's ends are known already; a person's marks,
+ * a fall for good and valleys that no cut-out precedes are found here. All others are the machine's.
+ *
+ * @param extremes alternating, the record's ends first and last
+ */
+export function classifyTurns(
+  extremes: Extreme[],
+  marks: Mark[],
+  rating: Rating | null,
+  spacingS: number,
+): Extreme[] {
+  const lateS = Math.max(TAPPED_LATE_S, 0.5 * spacingS);
+  const turned = extremes.map((extreme, i): Extreme => {
+    if (extreme.turnedBy !== 'machine') return extreme;
+    return { ...extreme, turnedBy: byPerson(extremes, i, marks, lateS) ? 'person' : 'machine' };
+  });
+  const lost = lostForGood(turned, rating);
+  let cutOutSeen = false;
+  return turned.map((extreme, i) => {
+    let turnedBy: TurnedBy = extreme.turnedBy;
+    if (i === lost) turnedBy = 'one-shot';
+    if (turnedBy === 'machine' && extreme.kind === 'peak') cutOutSeen = true;
+    if (turnedBy === 'machine' && extreme.kind === 'valley' && !cutOutSeen) {
+      turnedBy = 'before-cut-out';
+    }
+    return { ...extreme, turnedBy };
+  });
+}
+
+/**
+ * A peak is a person's where heat was turned off, the machine stopped or the door opened while it was heating; a
+ * valley where that happened in the fall before it, or where heat was turned on just there.
+ */
+function byPerson(extremes: Extreme[], i: number, marks: Mark[], lateS: number): boolean {
+  const extreme = extremes[i]!;
+  const fromS = extremes[i - 1]!.timeS + lateS;
+  const toS = extreme.timeS + lateS;
+  const during = marks.filter(({ timeS }) => timeS > fromS && timeS <= toS);
+  const isOff = ({ kind }: Mark) => OFF_MARKS.includes(kind);
+  if (extreme.kind === 'valley')
+    return during.some((mark) => isOff(mark) || mark.kind === 'heat-on');
+  const lastOff = during.findLast(isOff);
+  if (!lastOff) return false;
+  const clicked = during.some(({ kind, timeS }) => kind === 'click' && timeS <= lastOff.timeS);
+  const backOn = during.some(({ kind, timeS }) => kind === 'heat-on' && timeS > lastOff.timeS);
+  return !clicked && !backOn;
+}
+
+/**
+ * The last peak where heat was lost for good: no return after it though the exhaust fell through the reset band and
+ * on, and out of line with the cut-outs before it (with none: with the opens band and its allowance).
+ */
+function lostForGood(extremes: Extreme[], rating: Rating | null): number | null {
+  const last = extremes.length - 2;
+  const peak = extremes[last];
+  const end = extremes[last + 1];
+  if (!peak || !end || peak.kind !== 'peak' || peak.turnedBy !== 'machine') return null;
+  const others = extremes.filter(
+    ({ kind, turnedBy }, i) => kind === 'peak' && turnedBy === 'machine' && i !== last,
+  );
+  const valleys = extremes.filter(
+    ({ kind, turnedBy }) => kind === 'valley' && turnedBy === 'machine',
+  );
+  if (!isOutOfLine(peak, others, rating)) return null;
+  return fellForGood(peak, end, valleys, rating) ? last : null;
+}
+
+function isOutOfLine(peak: Extreme, others: Extreme[], rating: Rating | null): boolean {
+  if (others.length > 0) {
+    const usualC = median(others.map(({ tempC }) => tempC));
+    return Math.abs(peak.tempC - usualC) > Math.max(OUT_OF_LINE_K, 2 * peak.uK);
+  }
+  if (!rating) return false;
+  const { lowC, highEndC } = bandOf('cut-out', rating);
+  return peak.tempC + peak.uK < lowC || peak.tempC - peak.uK > highEndC;
+}
+
+function fellForGood(
+  peak: Extreme,
+  end: Extreme,
+  valleys: Extreme[],
+  rating: Rating | null,
+): boolean {
+  if (valleys.length > 0) {
+    const usualC = median(valleys.map(({ tempC }) => tempC));
+    if (end.tempC < usualC - OUT_OF_LINE_K) return true;
+  } else if (rating && end.tempC < bandOf('reset', rating).lowEndC) return true;
+  // Up where the one-shot part opens there is nothing else that could have cut the heat.
+  return rating !== null && peak.tempC > rating.highLimitC - OUT_OF_LINE_K;
+}

@@ -1,0 +1,125 @@
+import type { BinnedView, Knee } from './run-facts.ts';
+import { choleskyFactor, choleskySolve } from './statistics/solve-normal.ts';
+import { fTail } from './statistics/student-t.ts';
+import { firstAtOrAfter } from './first-at-or-after.ts';
+
+/** Values looked at; the rest is averaged. */
+const VALUES = 160;
+const LEAST_VALUES = 14;
+/** Places tried for the knee, and the share of the leg left at either end of it. */
+const PLACES = 40;
+const MARGIN = 0.12;
+/** Chance of a knee where there is none; divided by the places tried (Bonferroni). */
+const RISK = 1e-6;
+/** A knee is a change of power, not of curvature: the slope changes by at least this share. */
+const LEAST_CHANGE = 0.3;
+
+/**
+ * Where a heating leg changes its rate without turning, if two pieces fit it significantly better than one.
+ *
+ * One piece is a cubic: it bends as much as cold metal, a first-order response and drift together can. The second
+ * model adds a change of slope at one instant. Tested by F on the fall of the residual squares with two more parameters
+ * (slope change and place), at a risk shared among the places tried.
+ *
+ * @param fromS start of the leg, clear of the corner, s
+ * @param toS end of the leg, before the next corner, s
+ * @param noiseK standard deviation of a reading, K: a change smaller than noise shows is none
+ */
+export function findKnee(
+  view: BinnedView,
+  fromS: number,
+  toS: number,
+  noiseK: number,
+): Knee | null {
+  const { x, y } = gather(view, fromS, toS);
+  const n = x.length;
+  if (n < LEAST_VALUES) return null;
+  const one = leastSquares(x, y, null);
+  if (!one) return null;
+  let best: { place: number; fit: Fit } | null = null;
+  for (let i = 0; i <= PLACES; i++) {
+    const place = MARGIN + ((1 - 2 * MARGIN) * i) / PLACES;
+    const fit = leastSquares(x, y, place);
+    if (fit && (!best || fit.squares < best.fit.squares)) best = { place, fit };
+  }
+  if (!best || n < 8) return null;
+  const { place, fit } = best;
+  const degrees = n - 6;
+  const floor = Math.max(fit.squares / degrees, 0.1 * noiseK * noiseK);
+  const ratio = (one.squares - fit.squares) / 2 / floor;
+  const pValue = Math.min(1, fTail(ratio, 2, degrees) * (PLACES + 1));
+  const slopes = slopesAt(fit, place);
+  const change = Math.abs(slopes.after - slopes.before);
+  const greater = Math.max(Math.abs(slopes.after), Math.abs(slopes.before));
+  if (pValue > RISK || change < LEAST_CHANGE * greater) return null;
+  const lengthS = toS - fromS;
+  return {
+    timeS: fromS + place * lengthS,
+    tempC: valueAt(fit, place),
+    slopeBeforeKPerS: slopes.before / lengthS,
+    slopeAfterKPerS: slopes.after / lengthS,
+    pValue,
+  };
+}
+
+/** Coefficients of 1, x, x², x³ and, with a knee, of the ramp after it; x from 0 to 1 along the leg. */
+type Fit = { coefficients: Float64Array; squares: number };
+
+function leastSquares(x: Float64Array, y: Float64Array, place: number | null): Fit | null {
+  const p = place === null ? 4 : 5;
+  const matrix = new Float64Array(p * p);
+  const right = new Float64Array(p);
+  const terms = new Float64Array(5);
+  const fill = (at: number) => {
+    terms[0] = 1;
+    for (let j = 1; j < 4; j++) terms[j] = terms[j - 1]! * (at - 0.5);
+    terms[4] = place === null ? 0 : Math.max(0, at - place);
+  };
+  for (let i = 0; i < x.length; i++) {
+    fill(x[i]!);
+    for (let a = 0; a < p; a++) {
+      for (let b = 0; b <= a; b++) matrix[a * p + b]! += terms[a]! * terms[b]!;
+      right[a]! += terms[a]! * y[i]!;
+    }
+  }
+  const factor = choleskyFactor(matrix, p);
+  if (!factor) return null;
+  const coefficients = choleskySolve(factor, right, p);
+  let squares = 0;
+  for (let i = 0; i < x.length; i++) {
+    fill(x[i]!);
+    let off = y[i]!;
+    for (let a = 0; a < p; a++) off -= coefficients[a]! * terms[a]!;
+    squares += off * off;
+  }
+  return { coefficients, squares };
+}
+
+function slopesAt({ coefficients: c }: Fit, place: number) {
+  const x = place - 0.5;
+  const before = c[1]! + 2 * c[2]! * x + 3 * c[3]! * x * x;
+  return { before, after: before + c[4]! };
+}
+
+function valueAt({ coefficients: c }: Fit, place: number): number {
+  const x = place - 0.5;
+  return c[0]! + (c[1]! + (c[2]! + c[3]! * x) * x) * x;
+}
+
+function gather({ timesS, tempsC }: BinnedView, fromS: number, toS: number) {
+  const from = firstAtOrAfter(timesS, fromS);
+  const to = firstAtOrAfter(timesS, toS + 1e-9);
+  const each = Math.max(1, Math.ceil((to - from) / VALUES));
+  const size = Math.ceil((to - from) / each);
+  const x = new Float64Array(Math.max(0, size));
+  const y = new Float64Array(x.length);
+  for (let k = 0; k < x.length; k++) {
+    const first = from + k * each;
+    const last = Math.min(to, first + each);
+    for (let i = first; i < last; i++) {
+      x[k]! += (timesS[i]! - fromS) / (toS - fromS) / (last - first);
+      y[k]! += tempsC[i]! / (last - first);
+    }
+  }
+  return { x, y };
+}
