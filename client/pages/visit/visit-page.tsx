@@ -1,10 +1,127 @@
-import { DeskPage } from '../../components/frame.tsx';
+import { useQuery } from '@tanstack/react-query';
+import { useParams } from 'react-router-dom';
+import type { VisitPage as Visit } from '#shared/schemas/jobs.ts';
+import { visitQuery } from '../../api/visits.ts';
+import { SitePage } from '../../components/frame.tsx';
+import { WordLink } from '../../components/key.tsx';
+import { CallbackNotice } from '../../components/notice.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
+import { SectionHead } from '../../components/section-head.tsx';
+import { Failed, Waiting } from '../../components/waiting.tsx';
+import { JOB_STATE_WORDS, quoted } from '../../format/job-words.ts';
+import { dayOf, daysBetween, momentWords, timeWords } from '../../format/when.ts';
+import { useSession } from '../frame/session-context.ts';
+import { Reach } from '../rounds/reach.tsx';
+import { MachineSection } from './machine-section.tsx';
+import { RunsSection } from './runs-section.tsx';
+import { SafetySection } from './safety-section.tsx';
+import { VisitKeys } from './visit-keys.tsx';
 
+/** The on-site page of a visit, for one hand. */
 export function VisitPage() {
+  const { id = '' } = useParams();
+  const visit = useQuery(visitQuery(id));
+  const back = { to: '/rounds', name: 'Rounds' };
+
+  if (visit.isPending) {
+    return (
+      <SitePage back={back} top={<TopLines head="Visit" />}>
+        <div className="px-4">
+          <Waiting>Fetching the visit…</Waiting>
+        </div>
+      </SitePage>
+    );
+  }
+  if (visit.isError) {
+    return (
+      <SitePage back={back} top={<TopLines head="Visit" />}>
+        <div className="px-4">
+          <Failed error={visit.error} onRetry={visit.refetch} />
+        </div>
+      </SitePage>
+    );
+  }
+  return <Opened visit={visit.data} nowMs={visit.dataUpdatedAt} />;
+}
+
+/** Who and where, in two lines that never wrap. */
+export function TopLines({ head, line = '' }: { head: string; line?: string }) {
   return (
-    <DeskPage>
-      <PageHeading>Visit</PageHeading>
-    </DeskPage>
+    <p className="truncate font-gothic text-[15px] leading-[1.2] font-medium font-stretch-[94%] text-print">
+      <b className="block truncate text-[17px] font-semibold text-ink">{head}</b>
+      {line}
+    </p>
+  );
+}
+
+function Opened({ visit, nowMs }: { visit: Visit; nowMs: number }) {
+  const { shop } = useSession();
+  const { job } = visit;
+  const { zone } = shop;
+  const day = dayOf(visit.startsAtMs, zone);
+  const where = [job.home.address, job.machine.place].filter(Boolean).join(', ');
+  return (
+    <SitePage
+      back={{ to: day === dayOf(nowMs, zone) ? '/rounds' : `/rounds?day=${day}`, name: 'Rounds' }}
+      top={<TopLines head={job.customer.name} line={where} />}
+      deck={<VisitKeys visit={visit} />}
+    >
+      <div className="grid gap-9 px-4 pb-12 *:scroll-mt-2">
+        <header className="pt-4">
+          <p className="lab">
+            {momentWords(visit.startsAtMs, zone, nowMs)} to {timeWords(visit.endsAtMs, zone)} ·{' '}
+            {visit.technician.name} · {JOB_STATE_WORDS[job.state].toLowerCase()}
+          </p>
+          <PageHeading className="pt-1.5" title={`Visit to ${job.customer.name}`}>
+            {quoted(job.complaint)}
+          </PageHeading>
+          <Reach job={job} />
+          <Callback visit={visit} zone={zone} />
+        </header>
+        <SafetySection visit={visit} zone={zone} />
+        <RunsSection visit={visit} zone={zone} />
+        <MachineSection machineId={job.machine.id} zone={zone} />
+        <NotesSection visit={visit} />
+      </div>
+    </SitePage>
+  );
+}
+
+function Callback({ visit, zone }: { visit: Visit; zone: string }) {
+  const { callsBack } = visit.job;
+  if (!callsBack) return null;
+  const days = daysBetween(callsBack.takenAtMs, visit.startsAtMs, zone);
+  return (
+    <div className="pt-3">
+      <CallbackNotice
+        head={`Callback, ${days} day${days === 1 ? '' : 's'} after job ${callsBack.number}`}
+      >
+        <WordLink to={`/jobs/${callsBack.id}`}>See what was done then</WordLink>
+      </CallbackNotice>
+    </div>
+  );
+}
+
+function NotesSection({ visit }: { visit: Visit }) {
+  const { notes, job } = visit;
+  const access = job.home.accessNotes;
+  return (
+    <section aria-labelledby="notes">
+      <SectionHead site id="notes">
+        Notes
+      </SectionHead>
+      <p className="pt-2 text-body whitespace-pre-line">
+        {notes || 'Nobody wrote a note for this visit.'}
+      </p>
+      {access && (
+        <p className="pt-2 text-body whitespace-pre-line">
+          <span className="lab block">Getting in</span>
+          {access}
+        </p>
+      )}
+      <WordLink to={`/jobs/${job.id}`} className="mt-1">
+        Job {job.number}
+      </WordLink>
+    </section>
   );
 }

@@ -1,0 +1,89 @@
+import { useState } from 'react';
+import type { VisitPage } from '#shared/schemas/jobs.ts';
+import { CHECK_CAUTIONS, RUN_CAUTIONS, SAFETY_LINE } from '#shared/wording/safety-lines.ts';
+import { useTickSafety } from '../../api/visits.ts';
+import { Key } from '../../components/key.tsx';
+import { Notice } from '../../components/notice.tsx';
+import { SectionHead } from '../../components/section-head.tsx';
+import { timeWords } from '../../format/when.ts';
+
+type SafetySectionProps = { visit: VisitPage; zone: string };
+
+/** The cautions before a run. Each is ticked by hand; with the last one the visit keeps when. */
+export function SafetySection({ visit, zone }: SafetySectionProps) {
+  const { safetyTickedAtMs: tickedAtMs, mayRecord } = visit;
+  const state = tickedAtMs === null ? 'not ticked yet' : `ticked ${timeWords(tickedAtMs, zone)}`;
+  return (
+    <section aria-labelledby="safety">
+      <SectionHead site id="safety" state={<span role="status">{state}</span>}>
+        Safety first
+      </SectionHead>
+      {tickedAtMs === null && mayRecord ? (
+        <CautionsToTick visitId={visit.id} />
+      ) : (
+        <PrintedCautions cautions={RUN_CAUTIONS} />
+      )}
+      <h3 className="words pt-4 pb-1 text-table font-semibold">Before you touch a terminal</h3>
+      <PrintedCautions cautions={CHECK_CAUTIONS} />
+      <p className="pt-3 text-small text-print">{SAFETY_LINE}</p>
+    </section>
+  );
+}
+
+function CautionsToTick({ visitId }: { visitId: string }) {
+  const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set());
+  const keep = useTickSafety(visitId);
+
+  function handleTick(caution: string, isTicked: boolean) {
+    const next = new Set(ticked);
+    if (isTicked) next.add(caution);
+    else next.delete(caution);
+    setTicked(next);
+    if (next.size === RUN_CAUTIONS.length) keep.mutate();
+  }
+
+  return (
+    <>
+      <ul>
+        {RUN_CAUTIONS.map((caution) => (
+          <li key={caution} className="border-b border-hair">
+            <label className="words flex min-h-main cursor-pointer items-center gap-4 py-2 text-[17px] leading-[1.25] font-medium">
+              <input
+                type="checkbox"
+                className="!size-7"
+                checked={ticked.has(caution)}
+                disabled={keep.isPending}
+                onChange={(event) => handleTick(caution, event.target.checked)}
+              />
+              <span>{caution}</span>
+            </label>
+          </li>
+        ))}
+      </ul>
+      {keep.isError && (
+        <Notice kind="stop" role="alert" head={keep.error.message} className="mt-3">
+          <div className="pt-3">
+            <Key size="site" onClick={() => keep.mutate()}>
+              Try again
+            </Key>
+          </div>
+        </Notice>
+      )}
+    </>
+  );
+}
+
+function PrintedCautions({ cautions }: { cautions: readonly string[] }) {
+  return (
+    <ul>
+      {cautions.map((caution) => (
+        <li
+          key={caution}
+          className="words border-b border-hair py-2.5 text-[17px] leading-[1.25] font-medium"
+        >
+          {caution}
+        </li>
+      ))}
+    </ul>
+  );
+}
