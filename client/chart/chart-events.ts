@@ -1,4 +1,5 @@
 import type { Call, Point } from '#shared/analysis/analysis.ts';
+import { wordCall } from '#shared/wording/word-call.ts';
 import type { Strip } from './strip.ts';
 
 /** Something that happened at a moment: what N and P step through, and the rows of the event table. */
@@ -11,12 +12,10 @@ export type ChartEvent = {
   kind: Point['kind'] | 'mark' | 'note' | 'span';
 };
 
-export type CallWords = (call: Call) => string;
-
-export function eventsOf(strip: Strip, callWords: CallWords): ChartEvent[] {
+export function eventsOf(strip: Strip): ChartEvent[] {
   const events = [
-    ...pointEvents(strip.points, 'cut-out', callWords),
-    ...pointEvents(strip.points, 'reset', callWords),
+    ...pointEvents(strip.points, 'cut-out'),
+    ...pointEvents(strip.points, 'reset'),
     ...strip.marks.map((mark) => ({
       timeS: mark.timeS,
       tempC: null,
@@ -42,14 +41,14 @@ export function eventsOf(strip: Strip, callWords: CallWords): ChartEvent[] {
   return events.sort((a, b) => a.timeS - b.timeS);
 }
 
-function pointEvents(points: Point[], kind: Point['kind'], callWords: CallWords): ChartEvent[] {
+function pointEvents(points: Point[], kind: Point['kind']): ChartEvent[] {
   return points
     .filter((point) => point.kind === kind)
     .sort((a, b) => a.timeS - b.timeS)
     .map((point, i) => ({
       timeS: point.timeS,
       tempC: point.tempC,
-      words: `${kind} ${i + 1}${point.call ? `, ${callWords(point.call)}` : ', not judged'}`,
+      words: `${kind} ${i + 1}${point.call ? `, ${wordCall(point.call).word}` : ', not judged'}`,
       call: point.call,
       kind,
     }));

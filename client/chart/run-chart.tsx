@@ -4,10 +4,11 @@ import 'uplot/dist/uPlot.min.css';
 import './run-chart.css';
 import type { DisplayUnit } from '#shared/units.ts';
 import { drawOverTrace, drawUnderTrace } from './draw-strip.ts';
-import { tempAt, type Frame } from './frame.ts';
+import { tempAt } from './frame.ts';
 import { attachGestures } from './gestures.ts';
 import { paintShapes, tracePen, type Paint } from './paint-shapes.ts';
-import { nearestReading, type Pyramid } from './pyramid.ts';
+import { addCursorDot, moveDot, placeOfReading } from './cursor-dot.ts';
+import type { Pyramid } from './pyramid.ts';
 import { readPaint, watchPaint } from './read-paint.ts';
 import type { Shape } from './shapes.ts';
 import { frameOn, scaleFor, sheetFor } from './sheet.ts';
@@ -227,7 +228,10 @@ function createStripPlot(host: HTMLElement, handlers: () => RunChartHandlers) {
       plot.setScale('x', { min: next.fromS, max: next.toS });
     },
     setCursor(timeS: number | null) {
-      placeCursor(plot, dot, timeS === null || !content ? null : placeOf(content, frame(), timeS));
+      const place =
+        timeS === null || !content ? null : placeOfReading(content.pyramid, frame(), timeS);
+      plot.setCursor(place ?? { left: -10, top: -10 }, false);
+      moveDot(dot, place);
     },
     setNames({
       name,
@@ -250,33 +254,4 @@ function createStripPlot(host: HTMLElement, handlers: () => RunChartHandlers) {
 
 function sizeOf(widthPx: number): { width: number; height: number } {
   return { width: widthPx, height: sheetFor(widthPx).heightPx };
-}
-
-function addCursorDot(over: HTMLElement): HTMLElement {
-  const dot = document.createElement('div');
-  dot.className = 'strip-cursor-dot';
-  dot.hidden = true;
-  over.append(dot);
-  return dot;
-}
-
-/** Where a reading stands on the plot, from its top left. */
-function placeOf(content: RunChartContent, frame: Frame, timeS: number) {
-  const i = nearestReading(content.pyramid, timeS);
-  if (i < 0 || timeS < frame.fromS || timeS > frame.toS) return null;
-  const { plot, fromS, toS, lowC, highC } = frame;
-  return {
-    left: ((timeS - fromS) / (toS - fromS)) * plot.width,
-    top: ((highC - content.pyramid.tempsC[i]!) / (highC - lowC)) * plot.height,
-  };
-}
-
-function placeCursor(
-  plot: uPlot,
-  dot: HTMLElement,
-  place: { left: number; top: number } | null,
-): void {
-  plot.setCursor(place ?? { left: -10, top: -10 }, false);
-  dot.hidden = place === null;
-  if (place) dot.style.transform = `translate(${place.left}px, ${place.top}px)`;
 }

@@ -1,5 +1,5 @@
 import type { Analysis, Finding } from '#shared/analysis/analysis.ts';
-import type { Mark, MarkKind } from '#shared/analysis/series.ts';
+import type { MarkKind } from '#shared/analysis/series.ts';
 import { formatSpan } from '#shared/wording/format.ts';
 import type { Bands, HotSpan, PenMark, Span, Strip, StripNote } from './strip.ts';
 
@@ -15,10 +15,13 @@ export const MARK_WORDS: Record<MarkKind, string> = {
   note: 'note',
 };
 
+/** A mark as it crosses the wire. */
+type RunMark = { timeS: number; kind: MarkKind; text?: string | undefined };
+
 type StripSource = {
   analysis: Analysis;
   bands: Bands | null;
-  marks: Mark[];
+  marks: RunMark[];
   notes: Omit<StripNote, 'letter'>[];
 };
 
@@ -68,7 +71,7 @@ function heatOf({ legs }: Analysis): Span[] {
   return legs.filter(({ kind }) => kind === 'heating').map(({ fromS, toS }) => ({ fromS, toS }));
 }
 
-function penMark(mark: Mark, hotFindings: Finding[]): PenMark {
+function penMark(mark: RunMark, hotFindings: Finding[]): PenMark {
   const isStop = hotFindings.some(
     ({ fromS, toS }) => mark.kind === 'click' && mark.timeS >= fromS - 30 && mark.timeS < toS,
   );

@@ -1,5 +1,4 @@
 import type { JobState } from '#shared/schemas/jobs.ts';
-import type { Machine } from '#shared/schemas/homes.ts';
 
 export const JOB_STATE_WORDS: Record<JobState, string> = {
   booked: 'Booked',
@@ -12,8 +11,10 @@ export const JOB_STATE_WORDS: Record<JobState, string> = {
 
 export const OUTCOME_WORDS = { stop: 'stop', proven: 'proven', 'not-proven': 'not proven' };
 
+type PlateWords = { make: string; model: string; fuel: string };
+
 /** "Calder D-60, electric". */
-export function machineWords({ make, model, fuel }: Pick<Machine, 'make' | 'model' | 'fuel'>) {
+export function machineWords({ make, model, fuel }: PlateWords) {
   return `${[make, model].filter(Boolean).join(' ')}, ${fuel}`;
 }
 

@@ -1,0 +1,141 @@
+import { zodResolver } from '@hookform/resolvers/zod';
+import { useEffect, useMemo } from 'react';
+import { useForm } from 'react-hook-form';
+import { z } from 'zod';
+import { newNoteSchema, type NewNote, type RunPage } from '#shared/schemas/runs.ts';
+import { fromCelsius, toCelsius, type DisplayUnit } from '#shared/units.ts';
+import { formatMoment } from '#shared/wording/format.ts';
+import { useAddNote, useChangeNote } from '../../api/runs.ts';
+import type { PickedMoment } from '../../chart/chart-panel.tsx';
+import { nearestReading, type Pyramid } from '../../chart/pyramid.ts';
+import { ErrorSummary } from '../../components/error-summary.tsx';
+import { Cells, TextField } from '../../components/field.tsx';
+import { Key, Word } from '../../components/key.tsx';
+import { problemsOf } from '../../forms/use-checked-form.ts';
+import { readNumber } from '../../forms/typed-number.ts';
+import { readMoment } from './moment.ts';
+
+type NoteFormProps = {
+  run: RunPage;
+  unit: DisplayUnit;
+  pyramid: Pyramid;
+  writing: { noteId: string | null; moment: PickedMoment | null };
+  onDone: () => void;
+};
+
+type Typed = { timeS: string; tempC: string; text: string };
+
+/** What was typed, in the reader's unit, as the shared schema of a note. */
+function noteSchemaFor(run: RunPage, unit: DisplayUnit, pyramid: Pyramid) {
+  return z
+    .object({ timeS: z.string(), tempC: z.string(), text: z.string() })
+    .transform(({ timeS, tempC, text }): Record<keyof NewNote, unknown> => {
+      const readS = readMoment(timeS) ?? NaN;
+      const typedTemp = readNumber(tempC);
+      const atTrace = pyramid.tempsC[nearestReading(pyramid, readS)];
+      return {
+        timeS: readS,
+        tempC: typedTemp === null ? atTrace : toCelsius(typedTemp, unit),
+        text,
+      };
+    })
+    .pipe(
+      newNoteSchema.refine((note) => note.timeS <= run.durationS, {
+        path: ['timeS'],
+        message: `Enter a time up to ${formatMoment(run.durationS)}`,
+      }),
+    );
+}
+
+function typedFrom(
+  { run, unit }: NoteFormProps,
+  note: { timeS: number; tempC: number; text: string } | undefined,
+): Typed {
+  if (!note) return { timeS: '', tempC: '', text: '' };
+  const { timeS, tempC, text } = note;
+  return {
+    timeS: momentTyped(timeS, run),
+    tempC: fromCelsius(tempC, unit).toFixed(1),
+    text,
+  };
+}
+
+function momentTyped(timeS: number, run: RunPage): string {
+  return formatMoment(Math.min(Math.round(timeS), run.durationS));
+}
+
+/** A note at a time and temperature: picked on the chart, or typed. */
+export function NoteForm(props: NoteFormProps) {
+  const { run, unit, pyramid, writing, onDone } = props;
+  const add = useAddNote(run.id);
+  const change = useChangeNote(run.id);
+  const schema = useMemo(() => noteSchemaFor(run, unit, pyramid), [run, unit, pyramid]);
+  const form = useForm<Typed, unknown, NewNote>({
+    resolver: zodResolver(schema),
+    defaultValues: typedFrom(
+      props,
+      run.notes.find((note) => note.id === writing.noteId),
+    ),
+    shouldFocusError: false,
+  });
+  const { errors, submitCount } = form.formState;
+  const refusal = add.error ?? change.error;
+  const { setValue, setFocus } = form;
+
+  useEffect(() => {
+    if (!writing.moment) return;
+    const { timeS, tempC } = writing.moment;
+    setValue('timeS', momentTyped(timeS, run), { shouldValidate: submitCount > 0 });
+    setValue('tempC', fromCelsius(tempC, unit).toFixed(1), { shouldValidate: submitCount > 0 });
+    setFocus('text');
+    // Only a new pick fills the cells; a failed try must not undo what was typed since.
+    // eslint-disable-next-line react-hooks/exhaustive-deps
+  }, [writing.moment]);
+
+  const handleSubmit = form.handleSubmit((note) => {
+    const done = { onSuccess: onDone };
+    if (writing.noteId === null) add.mutate(note, done);
+    else change.mutate({ noteId: writing.noteId, ...note }, done);
+  });
+  const isSaving = add.isPending || change.isPending;
+
+  return (
+    <form onSubmit={handleSubmit} noValidate className="max-w-form pt-2 pb-6">
+      <ErrorSummary problems={problemsOf(errors, refusal?.message ?? null)} attempt={submitCount} />
+      <h3 className="words pb-2 text-[18px] font-semibold">
+        {writing.noteId === null ? 'Add a note' : 'Change the note'}
+      </h3>
+      <p className="pb-3 text-small">Tap the trace to pick its place, or type it.</p>
+      <Cells className="desk:grid-cols-[170px_170px_minmax(0,1fr)]">
+        <TextField
+          label="Time, m:ss"
+          inputMode="text"
+          autoComplete="off"
+          error={errors.timeS?.message}
+          {...form.register('timeS')}
+        />
+        <TextField
+          label={`Temperature, °${unit}`}
+          inputMode="decimal"
+          autoComplete="off"
+          placeholder="at the trace"
+          error={errors.tempC?.message}
+          {...form.register('tempC')}
+        />
+        <TextField
+          label="Note"
+          autoComplete="off"
+          maxLength={200}
+          error={errors.text?.message}
+          {...form.register('text')}
+        />
+      </Cells>
+      <div className="flex gap-2 pt-3">
+        <Key type="submit" face="main" disabled={isSaving}>
+          {isSaving ? 'Keeping…' : 'Keep the note'}
+        </Key>
+        <Word onClick={onDone}>Do not keep it</Word>
+      </div>
+    </form>
+  );
+}
