@@ -1,6 +1,6 @@
 import type { ErrorRequestHandler, RequestHandler } from 'express';
 import type { Problem } from '#shared/schemas/primitives.ts';
-import { AppError, notFound } from './errors.ts';
+import { AppError, notFound, TooManyError } from './errors.ts';
 
 /** What body and path parsing refuses (http-errors with a `type`), in words. */
 const PARSER_PROBLEMS: Record<string, AppError> = {
@@ -20,6 +20,7 @@ export const errorHandler: ErrorRequestHandler = (error: unknown, req, res, next
   const refusal = known ?? new AppError(500, 'defect', 'Something broke on our side.');
   const problem: Problem = { code: refusal.code, message: refusal.message };
   if (refusal.fields) problem.fields = refusal.fields;
+  if (refusal instanceof TooManyError) res.set('Retry-After', String(refusal.retryAfterS));
   res.status(refusal.status).json(problem);
 };
 

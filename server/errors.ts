@@ -15,6 +15,17 @@ export class AppError extends Error {
   }
 }
 
+/** Too much at once, or too often: the same may be asked again after a while. */
+export class TooManyError extends AppError {
+  override name = 'TooManyError';
+  readonly retryAfterS: number;
+
+  constructor(code: string, message: string, retryAfterS: number) {
+    super(429, code, message);
+    this.retryAfterS = retryAfterS;
+  }
+}
+
 /** The one answer for what is not there and for what the asker may not see: they cannot be told apart. */
 export function notFound(): AppError {
   return new AppError(404, 'not-found', 'There is nothing here, or it is not yours to see.');

@@ -1,5 +1,5 @@
 import { createHmac } from 'node:crypto';
-import { AppError } from '#server/errors.ts';
+import { TooManyError } from '#server/errors.ts';
 import type { Failures, SignInFailuresRepository } from './sign-in-failures-repository.ts';
 
 const FREE_TRIES = 5;
@@ -18,7 +18,7 @@ export function createBackOff(tries: SignInFailuresRepository, now: () => Date, 
   return {
     /**
      * Counts a try as failed before the password is looked at, so that many at once gain nothing.
-     * @throws {AppError} 429 while it must wait
+     * @throws {TooManyError} while it must wait
      */
     async startTry(email: string): Promise<{ failures: number }> {
       const nowMs = now().getTime();
@@ -51,8 +51,9 @@ export function pauseMs(failures: number): number {
   return Math.min(FIRST_PAUSE_MS * 2 ** (failures - FREE_TRIES), LONGEST_PAUSE_MS);
 }
 
-function tooManyTries(waitMs: number): AppError {
+function tooManyTries(waitMs: number): TooManyError {
   const seconds = Math.ceil(waitMs / 1000);
   const wait = seconds < 60 ? `${seconds} s` : `${Math.ceil(seconds / 60)} min`;
-  return new AppError(429, 'too-many-tries', `Too many tries. Wait ${wait}, then try again.`);
+  const message = `Too many tries. Wait ${wait}, then try again.`;
+  return new TooManyError('too-many-tries', message, seconds);
 }

@@ -1,5 +1,5 @@
 import type { Piscina } from 'piscina';
-import { AppError } from '#server/errors.ts';
+import { TooManyError } from '#server/errors.ts';
 import { NOBODYS_HASH, prehash } from './password-hash.ts';
 import type { HashTask } from './password-hash.ts';
 
@@ -30,6 +30,6 @@ export function createPasswords(pool: Piscina, pepper: Buffer) {
   };
 }
 
-function tooBusy(): AppError {
-  return new AppError(429, 'busy', 'Too many people are signing in. Try again in a minute.');
+function tooBusy(): TooManyError {
+  return new TooManyError('busy', 'Too many people are signing in. Try again in a minute.', 60);
 }

@@ -1,6 +1,7 @@
-import { AppError } from '../errors.ts';
+import { TooManyError } from '#server/errors.ts';
 
 const MOST_AT_ONCE = 20;
+const RETRY_AFTER_S = 5;
 
 /** Bounds what the workers are asked for: one heavy piece of work a person, and so many in all. */
 export function createHeavyWork() {
@@ -20,6 +21,6 @@ export function createHeavyWork() {
   return { take };
 }
 
-function tooMany(message: string): AppError {
-  return new AppError(429, 'busy', message);
+function tooMany(message: string): TooManyError {
+  return new TooManyError('busy', message, RETRY_AFTER_S);
 }

@@ -3,7 +3,7 @@ import { extname } from 'node:path';
 import type { Request, Response } from 'express';
 import multer, { MulterError } from 'multer';
 import { MAX_UPLOAD_BYTES } from '#shared/reading/log-reading.ts';
-import { AppError } from '../errors.ts';
+import { AppError } from '#server/errors.ts';
 
 /** A file as it lies in the staging folder, under a name of ours. */
 export type ReceivedFile = { id: string; path: string; fileName: string; bytes: number };

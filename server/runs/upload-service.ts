@@ -1,5 +1,5 @@
 import { rm } from 'node:fs/promises';
-import { AppError, notFound } from '#server/errors.ts';
+import { AppError, notFound, TooManyError } from '#server/errors.ts';
 import type { Audit } from '#server/people/audit-repository.ts';
 import type { Person } from '#shared/schemas/people.ts';
 import type { AcceptUpload } from '#shared/schemas/runs.ts';
@@ -16,6 +16,7 @@ import type { StagedReading, StagedUpload } from './staged-upload.ts';
 /** What nobody accepts is swept within the hour. */
 const KEPT_MS = 55 * 60_000;
 const MOST_STAGED = 10;
+const STAGED_RETRY_S = 300;
 const AS_FOUND: ReadingChoices = { answers: {}, channel: null };
 
 export type UploadParts = {
@@ -44,7 +45,8 @@ export function createUploadService({ worker, sources, runs, audit, onDefect }: 
     await sources.visitFacts(visitId);
     const mine = [...staged.values()].filter(({ userId }) => userId === by.id);
     if (mine.length >= MOST_STAGED) {
-      throw new AppError(429, 'busy', 'Accept or discard one of your other files first.');
+      const message = 'Accept or discard one of your other files first.';
+      throw new TooManyError('busy', message, STAGED_RETRY_S);
     }
     return heavyWork.take(by.id);
   }

@@ -1,4 +1,4 @@
-import { AppError } from '#server/errors.ts';
+import { TooManyError } from '#server/errors.ts';
 
 const MOST_FAILED = 20;
 const WINDOW_MS = 60_000;
@@ -20,10 +20,11 @@ export function createOpenLimit(now: () => Date) {
   }
 
   return {
-    /** @throws {AppError} 429 where this address tried too many */
+    /** @throws {TooManyError} where this address tried too many */
     check(address: string): void {
       if (failedBy(address) < MOST_FAILED) return;
-      throw new AppError(429, 'too-many-tries', 'Too many tries. Wait a minute, then try again.');
+      const message = 'Too many tries. Wait a minute, then try again.';
+      throw new TooManyError('too-many-tries', message, WINDOW_MS / 1000);
     },
     countFailed(address: string): void {
       failed.set(address, failedBy(address) + 1);
