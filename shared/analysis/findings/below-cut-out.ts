@@ -1,0 +1,71 @@
+import type { Finding } from '../analysis.ts';
+import { fitResponse } from '../fit-response.ts';
+import { bandOf } from '../judge-point.ts';
+import type { RunFacts, RunLeg } from '../run-facts.ts';
+import { totalU } from './trace.ts';
+
+/** Shares of the rise left out of the two fits that must agree: the heater warms first, the drum later. */
+const EARLY_SHARE = 0.3;
+const LATE_SHARE = 0.55;
+/** Share of the rise still to come that the model itself may be wrong by. */
+const MODEL_SHARE = 0.35;
+
+/**
+ * The exhaust levels off under the opens band: no turn came, and the upper bound of where it is heading lies below it.
+ *
+ * Assumes an empty drum (a damp load holds the exhaust down and is `too-short`) and a rise that ends as a first-order
+ * response. A drum is not exactly that, so part of the rise still to come is added to the bound.
+ *
+ * Evidence: asymptoteC, asymptoteUK, bandLowC, lastC, durationS.
+ */
+export function findBelowCutOut(facts: RunFacts): Finding | null {
+  const { rating, load } = facts.input;
+  const leg = facts.legs.at(-1) ?? null;
+  const rise = riseOf(leg, facts);
+  if (!rating || load === 'damp' || facts.cutOuts.length > 0 || !leg || !rise) return null;
+  const heading = asymptoteOf(rise, facts);
+  if (!heading) return null;
+  const { lowC } = bandOf('cut-out', rating);
+  if (heading.asymptoteC + heading.uK >= lowC) return null;
+  return {
+    code: 'below-cut-out',
+    fromS: rise.from.timeS,
+    toS: rise.to.timeS,
+    evidence: {
+      asymptoteC: heading.asymptoteC,
+      asymptoteUK: heading.uK,
+      bandLowC: lowC,
+      lastC: rise.to.tempC,
+      durationS: rise.to.timeS - rise.from.timeS,
+    },
+  };
+}
+
+/** The rise that nobody cut short: the last heating leg, or the one before a fall that a person made. */
+function riseOf(last: RunLeg | null, { legs }: RunFacts): RunLeg | null {
+  if (!last) return null;
+  if (last.kind === 'heating') return last;
+  return last.from.turnedBy === 'person' ? (legs.at(-2) ?? null) : null;
+}
+
+/** Two fits, the second of the later part alone; the worse of them counts. */
+function asymptoteOf(rise: RunLeg, facts: RunFacts): { asymptoteC: number; uK: number } | null {
+  const bounds = [EARLY_SHARE, LATE_SHARE].map((share) => fitFrom(rise, facts, share));
+  const [early, late] = bounds;
+  if (!early || !late) return null;
+  const higher = early.asymptoteC + early.uK > late.asymptoteC + late.uK ? early : late;
+  const toComeK = Math.max(0, higher.asymptoteC - rise.to.tempC);
+  return { asymptoteC: higher.asymptoteC, uK: higher.uK + MODEL_SHARE * toComeK };
+}
+
+function fitFrom(rise: RunLeg, facts: RunFacts, share: number) {
+  const { timesS, tempsC } = facts.binned;
+  const startS = rise.from.timeS + share * (rise.to.timeS - rise.from.timeS);
+  const first = timesS.findIndex((timeS) => timeS >= startS);
+  const last = timesS.findLastIndex((timeS) => timeS <= rise.to.timeS);
+  if (first < 0 || last - first < 5) return null;
+  const fit = fitResponse(timesS.slice(first, last + 1), tempsC.slice(first, last + 1));
+  if (!fit) return null;
+  const ownUK = 2 * fit.asymptoteErrorK;
+  return { asymptoteC: fit.asymptoteC, uK: Math.hypot(ownUK, totalU(facts, { uK: 0 })) };
+}

@@ -1,0 +1,128 @@
+import type { Finding } from '../analysis.ts';
+import { bandOf } from '../judge-point.ts';
+import type { Rating } from '../rating.ts';
+import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
+import { firstCrossing, marksWithin, spanOf, temperatureAt, totalU } from './trace.ts';
+
+/** A leg must pass cut-outs that the machine makes up there by itself by this much to be another thing, K (3 °F). */
+const BEYOND_OWN_K = 3 / 1.8;
+/** Within this of its asymptote a leg has levelled off, K (2 °F). */
+const LEVEL_K = 2 / 1.8;
+
+/**
+ * Heat goes on with no cut-out until the exhaust is above the opens band and its allowance.
+ *
+ * Assumes that a sound thermostat, whose air may run ahead of it by the allowance, has cut out by then; that a peak
+ * between band and allowance is overshoot (common practice: near 165 °F for a thermostat of 155).
+ *
+ * Evidence: aboveFromS, aboveForS (above the band), aboveC (where band and allowance end), peakC, highLimitC,
+ * limitAtS, ended (by-hand, levels-off, record-ends, by-itself), afterTrip, clickAtS, clickC, kneeAtS, cutOutsBefore,
+ * asymptoteC, asymptoteUK.
+ */
+export function findRunaway(facts: RunFacts): Finding | null {
+  const { rating } = facts.input;
+  if (!rating) return null;
+  const leg = facts.legs.find((candidate) => runsAway(candidate, facts, rating));
+  return leg ? toFinding(leg, facts, rating) : null;
+}
+
+function runsAway(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
+  const { to } = leg;
+  if (leg.kind !== 'heating') return false;
+  const { highEndC } = bandOf('cut-out', rating);
+  if (to.tempC >= rating.highLimitC) return true;
+  const uK = totalU(facts, to);
+  if (to.tempC - uK <= highEndC) return false;
+  const ownC = cutOutsUpThere(facts, to, highEndC);
+  if (to.turnedBy === 'machine') return ownC.length === 0 && !comesBack(facts, to);
+  return to.tempC > Math.max(-Infinity, ...ownC) + BEYOND_OWN_K + uK;
+}
+
+/** Where the machine cut out by itself above band and allowance: hot, but it does cut out. */
+function cutOutsUpThere({ extremes }: RunFacts, but: Extreme, highEndC: number): number[] {
+  return extremes
+    .filter(
+      (extreme) =>
+        extreme !== but &&
+        extreme.kind === 'peak' &&
+        extreme.turnedBy === 'machine' &&
+        extreme.tempC > highEndC,
+    )
+    .map(({ tempC }) => tempC);
+}
+
+function comesBack({ extremes }: RunFacts, peak: Extreme): boolean {
+  return extremes.some(
+    ({ kind, turnedBy, timeS }) =>
+      kind === 'valley' && turnedBy === 'machine' && timeS > peak.timeS,
+  );
+}
+
+function toFinding(leg: RunLeg, facts: RunFacts, rating: Rating): Finding {
+  const { highC, highEndC } = bandOf('cut-out', rating);
+  const toS = leg.to.timeS;
+  const aboveFromS = firstCrossing(facts, spanOf(leg), highC, 'up') ?? leg.from.timeS;
+  const reaches = leg.to.tempC >= rating.highLimitC;
+  const click = clickInBand(leg, facts, rating);
+  const knee = kneeInBand(leg, facts, rating);
+  const cutOutsBefore = facts.cutOuts.filter(({ timeS }) => timeS < toS).length;
+  return {
+    code: 'runaway',
+    fromS: aboveFromS,
+    toS,
+    evidence: {
+      aboveFromS,
+      aboveForS: toS - aboveFromS,
+      aboveC: highEndC,
+      peakC: leg.to.tempC,
+      highLimitC: rating.highLimitC,
+      limitAtS: reaches ? firstCrossing(facts, spanOf(leg), rating.highLimitC, 'up') : null,
+      ended: howEnded(leg, facts),
+      afterTrip: isAfterTrip({ earlier: cutOutsBefore > 0, click, knee, facts }),
+      clickAtS: click?.timeS ?? null,
+      clickC: click ? temperatureAt(facts, click.timeS) : null,
+      kneeAtS: knee?.timeS ?? null,
+      cutOutsBefore,
+      asymptoteC: leg.fit?.asymptoteC ?? null,
+      asymptoteUK: leg.fit ? 2 * leg.fit.asymptoteErrorK : null,
+    },
+  };
+}
+
+function clickInBand(leg: RunLeg, facts: RunFacts, rating: Rating) {
+  return marksWithin(facts, spanOf(leg), ['click']).find(({ timeS }) => {
+    const tempC = temperatureAt(facts, timeS);
+    return tempC !== null && liesInBand(tempC, totalU(facts, leg.to) + facts.noiseK, rating);
+  });
+}
+
+/** A knee tells of a thermostat that opened only where the exhaust slowed down at it. */
+function kneeInBand({ knee, to, hasGap }: RunLeg, facts: RunFacts, rating: Rating) {
+  if (!knee || hasGap || knee.slopeAfterKPerS >= knee.slopeBeforeKPerS) return null;
+  return liesInBand(knee.tempC, totalU(facts, to), rating) ? knee : null;
+}
+
+function liesInBand(tempC: number, uK: number, rating: Rating): boolean {
+  const { lowC, highC } = bandOf('cut-out', rating);
+  return tempC + uK >= lowC && tempC - uK <= highC;
+}
+
+/** Whether the thermostat had opened: true, false where somebody listened for clicks and heard none, else unknown. */
+function isAfterTrip(seen: {
+  earlier: boolean;
+  click: unknown;
+  knee: unknown;
+  facts: RunFacts;
+}): boolean | null {
+  if (seen.earlier || seen.click || seen.knee) return true;
+  return seen.facts.input.marks.some(({ kind }) => kind === 'click') ? false : null;
+}
+
+function howEnded(leg: RunLeg, facts: RunFacts): string {
+  if (leg.to.turnedBy === 'end') {
+    const level = leg.fit !== null && leg.fit.asymptoteC - leg.to.tempC < LEVEL_K;
+    return level ? 'levels-off' : 'record-ends';
+  }
+  const off = marksWithin(facts, spanOf(leg), ['heat-off', 'stopped', 'door']);
+  return leg.to.turnedBy === 'person' || off.length > 0 ? 'by-hand' : 'by-itself';
+}

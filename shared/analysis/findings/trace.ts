@@ -1,0 +1,68 @@
+import type { Mark, MarkKind } from '../series.ts';
+import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
+import { totalUncertainty } from '../judge-point.ts';
+
+/** A mark is tapped a little after the fact, s. */
+const TAPPED_LATE_S = 3;
+
+/** Expanded uncertainty of an extreme with the probe's part, K. */
+export function totalU({ input }: RunFacts, { uK }: Pick<Extreme, 'uK'>): number {
+  return totalUncertainty(uK, input.probe);
+}
+
+/**
+ * When the smoothed record first passes a level within a span, s; null where it does not.
+ *
+ * @param direction up: from below to at least the level; down: the reverse
+ */
+export function firstCrossing(
+  { binned }: RunFacts,
+  { fromS, toS }: { fromS: number; toS: number },
+  levelC: number,
+  direction: 'up' | 'down',
+): number | null {
+  const { timesS, smoothC } = binned;
+  const sign = direction === 'up' ? 1 : -1;
+  for (let i = 0; i < timesS.length; i++) {
+    const timeS = timesS[i]!;
+    if (timeS < fromS) continue;
+    if (timeS > toS) return null;
+    const over = sign * (smoothC[i]! - levelC);
+    if (over < 0) continue;
+    const before = i > 0 ? sign * (levelC - smoothC[i - 1]!) : 0;
+    if (i === 0 || timesS[i - 1]! < fromS || before <= 0) return timeS;
+    return timesS[i - 1]! + ((timeS - timesS[i - 1]!) * before) / (before + over);
+  }
+  return null;
+}
+
+/** The smoothed record at a time, °C, held at the ends; null for an empty record. */
+export function temperatureAt({ binned }: RunFacts, timeS: number): number | null {
+  const { timesS, smoothC } = binned;
+  const n = timesS.length;
+  if (n === 0) return null;
+  let after = 0;
+  while (after < n && timesS[after]! < timeS) after++;
+  if (after === 0) return smoothC[0]!;
+  if (after === n) return smoothC[n - 1]!;
+  const share = (timeS - timesS[after - 1]!) / (timesS[after]! - timesS[after - 1]!);
+  return smoothC[after - 1]! + share * (smoothC[after]! - smoothC[after - 1]!);
+}
+
+/** Marks of some kinds that belong to a stretch of the record, in order. */
+export function marksWithin(
+  { input }: RunFacts,
+  { fromS, toS }: { fromS: number; toS: number },
+  kinds: MarkKind[],
+): Mark[] {
+  return input.marks
+    .filter(
+      ({ kind, timeS }) => kinds.includes(kind) && timeS > fromS && timeS <= toS + TAPPED_LATE_S,
+    )
+    .sort((a, b) => a.timeS - b.timeS);
+}
+
+/** The span of a leg, s. */
+export function spanOf({ from, to }: RunLeg): { fromS: number; toS: number } {
+  return { fromS: from.timeS, toS: to.timeS };
+}
