@@ -117,13 +117,20 @@ type SitePageProps = {
   children: ReactNode;
   /** Keys at the thumb. */
   deck?: ReactNode;
+  /** On a desk it takes the whole width: offices use it as well. */
+  isWide?: boolean;
 };
 
 /** A site screen: paper above, keys below, at most 480 px wide. */
-export function SitePage({ back, top, children, deck }: SitePageProps) {
+export function SitePage({ back, top, children, deck, isWide = false }: SitePageProps) {
+  const width = isWide ? '' : 'max-w-site desk:border-x desk:border-print';
   return (
-    <div className="mx-auto grid min-h-dvh max-w-site grid-cols-[minmax(0,1fr)] grid-rows-[auto_1fr_auto] bg-paper desk:min-h-[calc(100dvh-60px)] desk:border-x desk:border-print">
-      <header className="flex min-h-14 items-center gap-1 border-b border-print pr-2 pl-1 print:hidden">
+    <div
+      className={`mx-auto grid min-h-dvh grid-cols-[minmax(0,1fr)] grid-rows-[auto_1fr_auto] bg-paper desk:min-h-[calc(100dvh-60px)] ${width}`}
+    >
+      <header
+        className={`flex min-h-14 items-center gap-1 border-b border-print pr-2 pl-1 print:hidden ${isWide ? 'desk:px-9' : ''}`}
+      >
         {back && (
           <Link
             to={back.to}

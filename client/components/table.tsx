@@ -1,15 +1,21 @@
 import type { ReactNode, TdHTMLAttributes, ThHTMLAttributes } from 'react';
 
-type TableProps = { caption: string; head: ReactNode; children: ReactNode; className?: string };
+type TableProps = {
+  caption: string;
+  head: ReactNode;
+  children: ReactNode;
+  className?: string;
+  headClassName?: string;
+};
 
 /** Printed labels over a 1.5 px line, rows parted by hairlines; figures right, words left. */
-export function Table({ caption, head, children, className = '' }: TableProps) {
+export function Table({ caption, head, children, className = '', headClassName = '' }: TableProps) {
   return (
     <table
       className={`w-full border-collapse font-gothic text-table font-stretch-[92%] tabular-nums lining-nums ${className}`}
     >
       <caption className="sr-only">{caption}</caption>
-      <thead>
+      <thead className={headClassName}>
         <tr>{head}</tr>
       </thead>
       <tbody>{children}</tbody>

@@ -6,6 +6,7 @@ import {
   type FieldErrors,
   type FieldValues,
   type Path,
+  type UseFormRegisterReturn,
 } from 'react-hook-form';
 import type { z } from 'zod';
 import { ApiError } from '../api/http.ts';
@@ -16,6 +17,8 @@ type CheckedFormOptions<In extends FieldValues, Out> = {
   defaultValues: DefaultValues<In>;
   /** Sends what was typed. A refusal that names fields lands on them; any other stands above the form. */
   save: (values: Out) => Promise<unknown>;
+  /** Where a field is called otherwise by the server: its name there to its name here. */
+  fieldNames?: Record<string, string>;
 };
 
 /**
@@ -26,6 +29,7 @@ export function useCheckedForm<In extends FieldValues, Out>({
   schema,
   defaultValues,
   save,
+  fieldNames = {},
 }: CheckedFormOptions<In, Out>) {
   const form = useForm<In, unknown, Out>({
     resolver: zodResolver(schema),
@@ -43,7 +47,9 @@ export function useCheckedForm<In extends FieldValues, Out>({
       } catch (error) {
         if (!(error instanceof ApiError)) throw error;
         const faulty = Object.entries(error.fields);
-        for (const [name, message] of faulty) form.setError(name as Path<In>, { message });
+        for (const [name, message] of faulty) {
+          form.setError((fieldNames[name] ?? name) as Path<In>, { message });
+        }
         if (faulty.length === 0) setRefusal(error.message);
       }
     },
@@ -62,6 +68,12 @@ export function useCheckedForm<In extends FieldValues, Out>({
     fault: (name: Path<In>) => messageAt(errors, name),
   };
 }
+
+/** What a set of cells needs of the form it is part of. */
+export type FormPart<Name extends string> = {
+  register: (name: Name) => UseFormRegisterReturn;
+  fault: (name: Name) => string | undefined;
+};
 
 /** Every fault of a form, in the order of its fields, then the refusal that belongs to none. */
 export function problemsOf(errors: FieldErrors, refusal: string | null): FormProblem[] {

@@ -1,10 +1,139 @@
+import { useQuery } from '@tanstack/react-query';
+import { useDeferredValue, useEffect, useState } from 'react';
+import { JOB_STATES } from '#shared/schemas/jobs.ts';
+import { jobsQuery } from '../../api/jobs.ts';
+import { techniciansQuery } from '../../api/people.ts';
+import { Cells, SelectField, TextField, TickField } from '../../components/field.tsx';
 import { DeskPage } from '../../components/frame.tsx';
+import { KeyLink } from '../../components/key.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
+import { Failed, Waiting } from '../../components/waiting.tsx';
+import { JOB_STATE_WORDS } from '../../format/job-words.ts';
+import { mayRunOffice, useSession } from '../frame/session-context.ts';
+import { EmptyJobs } from './empty-jobs.tsx';
+import { askedFilter, isNarrowed, isShown, useJobFilter, type ShownFilter } from './job-filter.ts';
+import { JobsTable } from './jobs-table.tsx';
 
 export function JobsPage() {
+  const session = useSession();
+  const { filter, change } = useJobFilter();
+  const jobs = useQuery(jobsQuery(askedFilter(filter)));
+
+  const shown = jobs.data?.filter((job) => isShown(job, filter));
+  const isEmptyShop = jobs.data?.length === 0 && !isNarrowed(filter);
   return (
     <DeskPage>
-      <PageHeading>Jobs</PageHeading>
+      <div className="grid grid-cols-[minmax(0,1fr)_auto] items-end gap-x-3 gap-y-3 pb-3 wide:grid-cols-[auto_minmax(0,1fr)_auto] wide:gap-x-8 wide:pb-5">
+        <PageHeading className="pb-0 wide:pb-2 wide:text-[44px] wide:leading-none">
+          Jobs
+        </PageHeading>
+        <div className="order-last col-span-full wide:order-none wide:col-span-1">
+          <Seek filter={filter} onChange={change} mayPickTechnician={mayRunOffice(session)} />
+        </div>
+        {mayRunOffice(session) && (
+          <KeyLink to="/jobs/new" face="main" className="min-h-touch wide:min-h-key">
+            Take a call
+          </KeyLink>
+        )}
+      </div>
+      {jobs.isPending && <Waiting>Fetching the jobs…</Waiting>}
+      {jobs.isError && <Failed error={jobs.error} onRetry={jobs.refetch} />}
+      {isEmptyShop && <EmptyJobs mayTake={mayRunOffice(session)} />}
+      {shown && !isEmptyShop && <JobsTable jobs={shown} session={session} filter={filter} />}
     </DeskPage>
+  );
+}
+
+type SeekProps = {
+  filter: ShownFilter;
+  onChange: (name: keyof ShownFilter, value: string) => void;
+  mayPickTechnician: boolean;
+};
+
+function Seek({ filter, onChange, mayPickTechnician }: SeekProps) {
+  return (
+    <search>
+      <Cells
+        className={`grid-cols-2 ${mayPickTechnician ? 'sm:grid-cols-3 wide:grid-cols-[minmax(0,1fr)_160px_180px_150px]' : 'wide:grid-cols-[minmax(0,1fr)_160px_150px]'}`}
+      >
+        <FindCell find={filter.find} onChange={(find) => onChange('find', find)} />
+        <SelectField
+          label="State"
+          name="state"
+          value={filter.state}
+          onChange={(event) => onChange('state', event.target.value)}
+        >
+          <option value="">All open</option>
+          {JOB_STATES.map((state) => (
+            <option key={state} value={state}>
+              {JOB_STATE_WORDS[state]}
+            </option>
+          ))}
+          <option value="all">All, closed too</option>
+        </SelectField>
+        {mayPickTechnician && (
+          <TechnicianCell
+            technician={filter.technician}
+            onChange={(technician) => onChange('technician', technician)}
+          />
+        )}
+        <TickField
+          label="Callbacks"
+          name="callbacks"
+          tick="only"
+          checked={filter.callbacks === 'yes'}
+          onChange={(event) => onChange('callbacks', event.target.checked ? 'yes' : '')}
+          className={mayPickTechnician ? 'col-span-2 sm:col-span-1' : ''}
+        />
+      </Cells>
+    </search>
+  );
+}
+
+/** What is typed stands at once; it is searched for when the typing rests. */
+function FindCell({ find, onChange }: { find: string; onChange: (find: string) => void }) {
+  const [typed, setTyped] = useState(find);
+  const rested = useDeferredValue(typed);
+  useEffect(() => {
+    const timer = setTimeout(() => {
+      if (rested !== find) onChange(rested);
+    }, 250);
+    return () => clearTimeout(timer);
+  });
+  return (
+    <TextField
+      label="Find by name, street, number, make or serial"
+      name="find"
+      type="search"
+      autoComplete="off"
+      value={typed}
+      onChange={(event) => setTyped(event.target.value)}
+      className="col-span-full wide:col-span-1"
+    />
+  );
+}
+
+function TechnicianCell({
+  technician,
+  onChange,
+}: {
+  technician: string;
+  onChange: (technician: string) => void;
+}) {
+  const technicians = useQuery(techniciansQuery());
+  return (
+    <SelectField
+      label="Technician"
+      name="technician"
+      value={technician}
+      onChange={(event) => onChange(event.target.value)}
+    >
+      <option value="">Anyone</option>
+      {technicians.data?.map(({ id, name }) => (
+        <option key={id} value={id}>
+          {name}
+        </option>
+      ))}
+    </SelectField>
   );
 }
