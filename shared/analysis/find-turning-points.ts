@@ -1,11 +1,17 @@
 import type { BinnedView, Extreme } from './run-facts.ts';
 import type { Series } from './series.ts';
+import { quantile } from './statistics/quantile.ts';
 import { findExtremes } from './turns/find-extremes.ts';
 import { firstAtOrAfter } from './first-at-or-after.ts';
 import { locateTurns, type LocatedTurn } from './turns/locate-turns.ts';
 
 /** The zig-zag looks for a little less than the threshold: smoothing has taken something off each swing. */
 const ROUGH_SHARE = 0.8;
+/** Swings stand clear of a threshold where nine in ten of them are this much greater. */
+const CLEAR_OF = 1.5;
+const CLEAR_SHARE = 0.1;
+const LEVEL_STEP = 1.25;
+const MOST_ROUNDS = 4;
 
 /**
  * All extremes of a record whose swings reach the threshold, located by a fit of lagged first-order legs.
@@ -24,12 +30,12 @@ export function findTurningPoints(
   noiseK: number,
   swingK: number,
 ): Extreme[] {
-  let rough = findRough(view, noiseK, swingK);
-  for (let round = 0; round < 6; round++) {
+  let rough = findRough(view, swingK);
+  for (let round = 0; round < MOST_ROUNDS; round++) {
     const extremes = locate(series, view, rough, noiseK);
-    const weakest = weakestSwing(extremes, swingK);
-    if (weakest === null) return extremes;
-    rough = withoutSwing(rough, weakest);
+    const kept = withoutWeakSwings(extremes, swingK);
+    if (kept.length === extremes.length) return extremes;
+    rough = kept.map((i) => rough[i]!);
   }
   return locate(series, view, rough, noiseK);
 }
@@ -37,16 +43,30 @@ export function findTurningPoints(
 type Rough = ReturnType<typeof findExtremes>;
 
 /**
- * Looks at the smoothed view with the threshold, and at the readings as they are with one that noise does not reach
- * (the range of n normal values is about 2·√(2 ln n) deviations). By hand, with four readings a cycle, smoothing would
- * drown the swings and turns pass for noise; there the second look finds more.
+ * Looks at the smoothed view with the threshold, and at the readings as they are with the least threshold that noise
+ * does not make swings at. By hand, with four readings a cycle, smoothing would drown the swings; there the second
+ * look finds more.
  */
-function findRough(view: BinnedView, noiseK: number, swingK: number): Rough {
+function findRough(view: BinnedView, swingK: number): Rough {
   const smooth = findExtremes(view.smoothC, ROUGH_SHARE * swingK);
   if (view.smoothC === view.tempsC) return smooth;
-  const rangeK = (2 * Math.sqrt(2 * Math.log(view.tempsC.length + 1)) + 1) * noiseK;
-  const plain = findExtremes(view.tempsC, Math.max(rangeK, ROUGH_SHARE * swingK));
+  const plain = findClearExtremes(view.tempsC, swingK);
   return plain.length > smooth.length ? plain : smooth;
+}
+
+/**
+ * Swings that noise makes pile up just above whatever threshold lets them through; those of a machine stand clear of
+ * it. So the threshold is raised until (nearly) all swings do.
+ */
+function findClearExtremes(tempsC: Float64Array, swingK: number): Rough {
+  for (let levelK = ROUGH_SHARE * swingK; ; levelK *= LEVEL_STEP) {
+    const found = findExtremes(tempsC, levelK);
+    if (found.length < 4) return [];
+    const swingsK = found
+      .slice(1)
+      .map(({ slot }, i) => Math.abs(tempsC[slot]! - tempsC[found[i]!.slot]!));
+    if (quantile(swingsK, CLEAR_SHARE) >= CLEAR_OF * levelK) return found;
+  }
 }
 
 function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number): Extreme[] {
@@ -80,25 +100,35 @@ function atReading(turn: { timeS: number; tempC: number }, noiseK: number): Loca
   return { timeS: turn.timeS, tempC: turn.tempC, uK: 2 * noiseK, switched: null };
 }
 
-/** The smallest swing under the threshold, as the place of its first extreme; null where all stand out. */
-function weakestSwing(extremes: Extreme[], swingK: number): number | null {
+/**
+ * Places of the extremes that are left when the smallest swing under the threshold is taken out again and again: it
+ * joins the two legs beside it. At the record's ends the next extreme becomes the end.
+ */
+function withoutWeakSwings(extremes: Extreme[], swingK: number): number[] {
+  const kept = extremes.map((_, i) => i);
+  for (;;) {
+    const at = weakestSwing(
+      kept.map((i) => extremes[i]!.tempC),
+      swingK,
+    );
+    if (at === null) return kept;
+    if (at === 0) kept.shift();
+    else if (at === kept.length - 2) kept.pop();
+    else kept.splice(at, 2);
+  }
+}
+
+function weakestSwing(tempsC: number[], swingK: number): number | null {
   let weakest: number | null = null;
   let leastK = swingK;
-  for (let i = 0; i + 1 < extremes.length; i++) {
-    const swing = Math.abs(extremes[i + 1]!.tempC - extremes[i]!.tempC);
+  for (let i = 0; i + 1 < tempsC.length; i++) {
+    const swing = Math.abs(tempsC[i + 1]! - tempsC[i]!);
     if (swing < leastK) {
       leastK = swing;
       weakest = i;
     }
   }
   return weakest;
-}
-
-/** Takes a swing out; at the record's ends that leaves the next extreme as the end. */
-function withoutSwing(rough: Rough, at: number): Rough {
-  if (at === 0) return rough.slice(1);
-  if (at === rough.length - 2) return rough.slice(0, -1);
-  return [...rough.slice(0, at), ...rough.slice(at + 2)];
 }
 
 function nearestReading(timesS: Float64Array, timeS: number): number {

@@ -3,8 +3,9 @@ import { median } from '../statistics/quantile.ts';
 import { choleskyFactor, choleskySolve } from '../statistics/solve-normal.ts';
 import {
   legsAt,
+  LN_LAG,
   parameterCount,
-  placeOfBend,
+  placeOfRamp,
   placeOfNode,
   placeOfSwitch,
   SHARED,
@@ -236,11 +237,11 @@ function touched(
   if (j < placeOfNode(shape, 0)) {
     firstLeg = j - SHARED;
     lastLeg = firstLeg + 2;
-  } else if (j < placeOfBend(shape, 0)) {
+  } else if (j < placeOfRamp(shape, 0)) {
     firstLeg = j - placeOfNode(shape, 0) - 1;
     lastLeg = firstLeg + 2;
   } else {
-    firstLeg = j - placeOfBend(shape, 0);
+    firstLeg = j - placeOfRamp(shape, 0);
     lastLeg = firstLeg + 1;
   }
   const fromS = firstLeg <= 0 ? -Infinity : parameters[placeOfSwitch(firstLeg - 1)]!;
@@ -251,5 +252,5 @@ function touched(
 function stepFor(shape: LegShape, parameters: Float64Array, j: number): number {
   if (j < SHARED) return 1e-4;
   if (j >= placeOfNode(shape, 0)) return 0.01;
-  return 1e-3 * Math.exp(parameters[2]!);
+  return 1e-3 * Math.exp(parameters[LN_LAG]!);
 }

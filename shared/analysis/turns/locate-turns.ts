@@ -9,10 +9,11 @@ import {
   lagsOf,
   LN_LAG,
   LN_TAU_COOL,
+  LN_TAU_FIRST,
   LN_TAU_HEAT,
   LOGIT_RATIO,
   parameterCount,
-  placeOfBend,
+  placeOfRamp,
   placeOfNode,
   placeOfSwitch,
   SHARED,
@@ -40,8 +41,10 @@ const LAG_SHARE = 0.09;
 const LAG_LOOSENESS = 1;
 const TAU_SHARE = 1.1;
 const TAU_LOOSENESS = 0.8;
-/** How far a leg's middle may lie off a first-order response, as a share of its swing. */
-const BEND_SHARE = 0.02;
+/** How much of a leg's swing may be a steady ramp; k = 1. */
+const RAMP_SHARE = 0.4;
+/** The fit's own noise is not believed under this share of the readings' noise. */
+const LEAST_NOISE_SHARE = 0.1;
 /** A switch instant less certain than this share of the leg after it is not shown by the record. */
 const MOST_SWITCH_U = 0.35;
 
@@ -68,8 +71,8 @@ export function locateTurns(
   for (const window of planWindows(edgesS)) {
     const problem = buildProblem(view, turns, window, noiseK, shared);
     const fit: FittedLegs | null = problem && fitLegs(problem);
-    for (let k = 0; k < window.to - window.from; k++) {
-      located.push(fit && readTurn(fit, k, turns[window.from - 1 + k]!.kind));
+    for (let turn = window.readFrom; turn < window.readTo; turn++) {
+      located.push(fit && readTurn(fit, turn - window.from, turns[turn - 1]!.kind));
     }
     if (fit && window.to - window.from > 2) shared = fit.parameters.slice(0, SHARED);
   }
@@ -100,12 +103,14 @@ function buildProblem(
   const shareds = shared ?? [
     Math.log(TAU_SHARE * usualS),
     Math.log(TAU_SHARE * usualS),
+    Math.log(TAU_SHARE * usualS),
     Math.log(lagS),
     0,
   ];
   for (let j = 0; j < SHARED; j++) start[j] = shareds[j]!;
   looseness[LN_TAU_HEAT] = shared ? 0.4 : TAU_LOOSENESS;
   looseness[LN_TAU_COOL] = shared ? 0.4 : TAU_LOOSENESS;
+  looseness[LN_TAU_FIRST] = 1.2;
   looseness[LN_LAG] = shared ? 0.2 : LAG_LOOSENESS;
   looseness[LOGIT_RATIO] = shared ? 0.8 : 1.5;
 
@@ -128,14 +133,14 @@ function buildProblem(
     looseness[placeOfNode(shape, k)] = 3 * greatK;
   });
   swings.forEach((swing, leg) => {
-    looseness[placeOfBend(shape, leg)] = BEND_SHARE * Math.max(swing, 0.3 * greatK);
+    looseness[placeOfRamp(shape, leg)] = RAMP_SHARE * Math.max(swing, 0.3 * greatK);
   });
   return {
     shape,
     ...values,
     start,
     looseness,
-    leastNoiseK: Math.max((0.3 * noiseK) / Math.sqrt(values.usual), 1e-3),
+    leastNoiseK: Math.max((LEAST_NOISE_SHARE * noiseK) / Math.sqrt(values.usual), 1e-3),
   };
 }
 

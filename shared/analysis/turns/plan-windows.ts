@@ -2,9 +2,12 @@ import { median } from '../statistics/quantile.ts';
 
 /** A stretch that is fitted at once: some consecutive turns with a leg at either side. */
 export type FitWindow = {
-  /** First turn and the one past the last. */
+  /** First turn fitted and the one past the last. */
   from: number;
   to: number;
+  /** First turn read off this fit and the one past the last: a turn at the window's edge is there as a neighbour. */
+  readFrom: number;
+  readTo: number;
   startS: number;
   endS: number;
 };
@@ -15,25 +18,34 @@ const MOST_TURNS = 12;
 const LONG_LEG = 2.5;
 /** How much of a long leg is used beside a turn, in usual legs. */
 const USED_OF_LONG = 1.2;
-/** The record's own start is rounded by the lags; this share of a short first leg is left out. */
-const LEFT_OUT_AT_START = 0.12;
+/**
+ * Left out at the record's own ends, as a share of the leg: the start is rounded by the lags, and the last extreme
+ * may be the start of a turn that the record does not show whole.
+ */
+const LEFT_OUT = 0.12;
+/** Left out where the leg goes on to a turn that is not in the window: its rounded corner. */
+const CORNER = 0.4;
 
 /**
- * Cuts a record's turns into windows: at most twelve at once, and never across a leg much longer than usual.
+ * Cuts a record's turns into windows: at most twelve at once, and never across a leg much longer than usual. Where a
+ * window ends between like legs it takes in one turn more as a neighbour.
  *
  * @param edgesS times of the turns with the record's first and last extreme around them, s
- * @returns windows in order; every turn (1 to edges − 2) is in exactly one
+ * @returns windows in order; every turn (1 to edges − 2) is read off exactly one
  */
 export function planWindows(edgesS: ArrayLike<number>): FitWindow[] {
   const turns = edgesS.length - 2;
   const usualS = [usualLeg(edgesS, 0), usualLeg(edgesS, 1)] as const;
+  const isJoined = (leg: number) => leg > 0 && leg < turns && !isLong(edgesS, leg, usualS);
   const windows: FitWindow[] = [];
-  let from = 1;
-  while (from <= turns) {
-    let to = from + 1;
-    while (to <= turns && to - from < MOST_TURNS && !isLong(edgesS, to - 1, usualS)) to++;
-    windows.push({ from, to, ...reach(edgesS, from, to, usualS) });
-    from = to;
+  let readFrom = 1;
+  while (readFrom <= turns) {
+    let readTo = readFrom + 1;
+    while (readTo <= turns && readTo - readFrom < MOST_TURNS && isJoined(readTo - 1)) readTo++;
+    const from = isJoined(readFrom - 1) ? readFrom - 1 : readFrom;
+    const to = isJoined(readTo - 1) ? readTo + 1 : readTo;
+    windows.push({ from, to, readFrom, readTo, ...reach(edgesS, from, to, usualS) });
+    readFrom = readTo;
   }
   return windows;
 }
@@ -63,7 +75,8 @@ function reach(edgesS: ArrayLike<number>, from: number, to: number, usualS: Usua
 function used(edgesS: ArrayLike<number>, leg: number, usualS: Usual): number {
   const lengthS = edgesS[leg + 1]! - edgesS[leg]!;
   const isFirst = leg === 0;
-  const whole = lengthS * (isFirst ? 1 - LEFT_OUT_AT_START : 1);
+  const isOwnEnd = isFirst || leg === edgesS.length - 2;
+  const whole = lengthS * (1 - (isOwnEnd ? LEFT_OUT : CORNER));
   const ownS = usualS[(leg % 2) as 0 | 1];
   const otherS = usualS[(1 - (leg % 2)) as 0 | 1];
   const usual = Number.isNaN(ownS) ? otherS : ownS;
