@@ -24,14 +24,19 @@ export async function closeWorkers(workers: Workers): Promise<void> {
 function pool(name: string, limits: { maxThreads: number; maxQueue?: number }): Piscina {
   return new Piscina({
     filename: new URL(`./${name}.${fromSource ? 'ts' : 'js'}`, import.meta.url).href,
-    execArgv: fromSource ? ['--import', tsxUrl()] : [],
+    execArgv: fromSource ? ['--import', tsxInThread()] : [],
     minThreads: 0,
     idleTimeout: 60_000,
     ...limits,
   });
 }
 
-/** Absolute, so that the folder the program was started in does not matter. */
-function tsxUrl(): string {
-  return pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href;
+/**
+ * tsx registers itself on the main thread only (Node 20), so a thread is told to. The address is absolute: the
+ * folder the program was started in does not matter.
+ */
+function tsxInThread(): string {
+  const loader = pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href;
+  const api = new URL('./esm/api/index.mjs', loader).href;
+  return `data:text/javascript,import { register } from '${api}'; register();`;
 }
