@@ -62,19 +62,17 @@ function findClearExtremes(tempsC: Float64Array, swingK: number): Rough {
   for (let levelK = ROUGH_SHARE * swingK; ; levelK *= LEVEL_STEP) {
     const found = findExtremes(tempsC, levelK);
     if (found.length < 4) return [];
-    const swingsK = found
-      .slice(1)
-      .map(({ slot }, i) => Math.abs(tempsC[slot]! - tempsC[found[i]!.slot]!));
+    const swingsK = found.slice(1).map(({ tempC }, i) => Math.abs(tempC - found[i]!.tempC));
     if (quantile(swingsK, CLEAR_SHARE) >= CLEAR_OF * levelK) return found;
   }
 }
 
 function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number): Extreme[] {
   if (rough.length < 2) return [];
-  const turns = rough.map(({ kind, slot }) => ({
+  const turns = rough.map(({ kind, slot, tempC }) => ({
     kind,
     timeS: view.timesS[slot]!,
-    tempC: view.smoothC[slot]!,
+    tempC,
   }));
   const located = locateTurns(
     view,

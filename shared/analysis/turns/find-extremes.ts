@@ -1,5 +1,5 @@
 /** An extreme of the binned view, before it is located. */
-export type RoughExtreme = { kind: 'peak' | 'valley'; slot: number };
+export type RoughExtreme = { kind: 'peak' | 'valley'; slot: number; tempC: number };
 
 /**
  * Local extremes that stand out by a threshold on both sides (zig-zag with hysteresis), in one pass.
@@ -19,16 +19,16 @@ export function findExtremes(tempsC: Float64Array, thresholdK: number): RoughExt
     if (rising !== false && tempC > tempsC[high]!) high = slot;
     if (rising !== true && tempC < tempsC[low]!) low = slot;
     if (rising !== true && tempC - tempsC[low]! >= thresholdK) {
-      found.push({ kind: 'valley', slot: low });
+      found.push({ kind: 'valley', slot: low, tempC: tempsC[low]! });
       rising = true;
       high = slot;
     } else if (rising !== false && tempsC[high]! - tempC >= thresholdK) {
-      found.push({ kind: 'peak', slot: high });
+      found.push({ kind: 'peak', slot: high, tempC: tempsC[high]! });
       rising = false;
       low = slot;
     }
   }
-  if (rising !== null)
-    found.push(rising ? { kind: 'peak', slot: high } : { kind: 'valley', slot: low });
+  if (rising === true) found.push({ kind: 'peak', slot: high, tempC: tempsC[high]! });
+  if (rising === false) found.push({ kind: 'valley', slot: low, tempC: tempsC[low]! });
   return found;
 }

@@ -88,7 +88,7 @@ function buildProblem(
 ): LegProblem | null {
   const own = turns.slice(window.from - 1, window.to - 1);
   const values = gather(view, window, own.length + 1);
-  if (values.timesS.length < 3 * own.length + 2) return null;
+  if (values.timesS.length < 2 * own.length + 3) return null;
   const shape: LegShape = {
     switches: own.length,
     heatsFirst: own[0]!.kind === 'peak',
