@@ -15,6 +15,7 @@ import { Reach } from '../rounds/reach.tsx';
 import { MachineSection } from './machine-section.tsx';
 import { RunsSection } from './runs-section.tsx';
 import { SafetySection } from './safety-section.tsx';
+import { TopLines } from './top-lines.tsx';
 import { VisitKeys } from './visit-keys.tsx';
 
 /** The on-site page of a visit, for one hand. */
@@ -42,16 +43,6 @@ export function VisitPage() {
     );
   }
   return <Opened visit={visit.data} nowMs={visit.dataUpdatedAt} />;
-}
-
-/** Who and where, in two lines that never wrap. */
-export function TopLines({ head, line = '' }: { head: string; line?: string }) {
-  return (
-    <p className="truncate font-gothic text-[15px] leading-[1.2] font-medium font-stretch-[94%] text-print">
-      <b className="block truncate text-[17px] font-semibold text-ink">{head}</b>
-      {line}
-    </p>
-  );
 }
 
 function Opened({ visit, nowMs }: { visit: Visit; nowMs: number }) {

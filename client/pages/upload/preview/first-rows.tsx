@@ -1,0 +1,61 @@
+import type { ReadPreview } from '#shared/schemas/uploads.ts';
+import { Table, Td, Th } from '../../../components/table.tsx';
+import { formatRunTime } from '../run-time.ts';
+
+type FirstRowsProps = {
+  rows: ReadPreview['preview'];
+  caption: string;
+  /** null: told elsewhere. */
+  unit: string | null;
+};
+
+/** Rows of the file beside what was made of them: the time of the run, the temperature. */
+export function FirstRows({ rows, caption, unit }: FirstRowsProps) {
+  return (
+    <Table
+      caption={caption}
+      head={
+        <>
+          <Th figure className="w-14">
+            Row
+          </Th>
+          <Th>In the file</Th>
+          <Th figure>Time</Th>
+          <Th figure>{unit ?? 'Reading'}</Th>
+        </>
+      }
+    >
+      {rows.map(({ row, cells, timeS, temp }) => (
+        <tr key={row}>
+          <Td figure className="text-print">
+            {row}
+          </Td>
+          <Td className="text-[15px] text-print">
+            <Cells cells={cells} />
+          </Td>
+          <Td figure className="font-semibold">
+            {timeS === null ? '–' : formatRunTime(timeS)}
+          </Td>
+          <Td figure className="font-semibold">
+            {temp === null ? '–' : shownTemp(temp)}
+          </Td>
+        </tr>
+      ))}
+    </Table>
+  );
+}
+
+/** As recorded, without digits that binary fractions make up. */
+function shownTemp(temp: number): string {
+  return String(Number(temp.toPrecision(12))).replace('-', '−');
+}
+
+function Cells({ cells }: { cells: string[] }) {
+  return (
+    <span className="flex flex-wrap gap-x-3 wrap-anywhere">
+      {cells.map((cell, index) => (
+        <span key={index}>{cell === '' ? '(empty)' : cell}</span>
+      ))}
+    </span>
+  );
+}

@@ -1,0 +1,54 @@
+import { useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import { clampTime, moveHandle } from '../move-handle.ts';
+import { formatRunTime } from '../run-time.ts';
+import { SMALL_STRIP_MARGINS, shareOf, timeAtPx } from './strip-place.ts';
+
+type SpanHandleProps = {
+  name: string;
+  timeS: number;
+  bounds: { lowS: number; highS: number };
+  durationS: number;
+  widthPx: number;
+  onMove: (timeS: number) => void;
+};
+
+/** An end of a run on the strip: dragged with a finger, or a second at a time with the arrow keys. */
+export function SpanHandle({ name, timeS, bounds, durationS, widthPx, onMove }: SpanHandleProps) {
+  const handle = useRef<HTMLDivElement>(null);
+
+  function handlePointer(event: PointerEvent<HTMLDivElement>) {
+    const strip = handle.current?.parentElement;
+    if (!strip || !event.currentTarget.hasPointerCapture(event.pointerId)) return;
+    const px = event.clientX - strip.getBoundingClientRect().left;
+    onMove(clampTime(timeAtPx(px, durationS, widthPx), bounds));
+  }
+
+  function handleKey(event: KeyboardEvent) {
+    const moved = moveHandle(event.key, timeS, bounds);
+    if (moved === null) return;
+    event.preventDefault();
+    onMove(moved);
+  }
+
+  const { top, bottom } = SMALL_STRIP_MARGINS;
+  return (
+    <div
+      ref={handle}
+      role="slider"
+      tabIndex={0}
+      aria-label={name}
+      aria-valuemin={Math.round(bounds.lowS)}
+      aria-valuemax={Math.round(bounds.highS)}
+      aria-valuenow={Math.round(timeS)}
+      aria-valuetext={formatRunTime(timeS)}
+      onPointerDown={(event) => event.currentTarget.setPointerCapture(event.pointerId)}
+      onPointerMove={handlePointer}
+      onKeyDown={handleKey}
+      className="absolute -ml-6 w-12 cursor-ew-resize touch-none"
+      style={{ left: `${shareOf(timeS, durationS, widthPx) * 100}%`, top, bottom: bottom - 18 }}
+    >
+      <span className="absolute inset-y-0 left-1/2 -ml-px w-0.5 bg-ink" />
+      <span className="absolute bottom-0 left-1/2 -ml-[9px] h-[22px] w-[18px] rounded-key border-line border-ink bg-key" />
+    </div>
+  );
+}
