@@ -1,0 +1,150 @@
+import { findUnit } from '../cells/find-unit.ts';
+import { splitCells, type Delimiter } from '../text/split-cells.ts';
+import { isTyped, type CellKind } from './cell-kind.ts';
+import type { DelimiterChoice, SplitLine } from './choose-delimiter.ts';
+
+/** One column's cells in the sampled rows of readings, in file order. */
+export type SampleColumn = {
+  index: number;
+  kind: CellKind;
+  cells: string[];
+  /** How many of `cells` stand one below the other at the head of the file. */
+  headCells: number;
+};
+
+export type Table = {
+  delimiter: Delimiter;
+  width: number;
+  columns: SampleColumn[];
+  /** Cells of the header, or null. */
+  header: string[] | null;
+  /** Cells of a row of units under the header, or null. */
+  unitRow: string[] | null;
+  /** Place of the first row of readings in the head lines. */
+  firstLine: number;
+  /** Lines above the header. */
+  preamble: string[];
+};
+
+/**
+ * Where the rows of readings begin, and which line above them is their header.
+ *
+ * @param headCount how many of the choice's lines are the head of the file
+ * @returns null where no line of the head looks like a row of readings
+ */
+export function findTable(
+  choice: DelimiterChoice,
+  headLines: string[],
+  headCount: number,
+): Table | null {
+  const { lines, width, delimiter } = choice;
+  const kinds = columnKinds(lines, width);
+  const fits = lines.map((line) => fitsKinds(line, kinds));
+  const firstLine = firstOf(fits, headCount);
+  if (firstLine < 0) return null;
+  const { header, unitRow, from } = findHeader(headLines, firstLine, choice);
+  return {
+    delimiter,
+    width,
+    columns: kinds.map((kind, index) =>
+      sampleColumn(index, kind, lines, fits, firstLine, headCount),
+    ),
+    header,
+    unitRow,
+    firstLine,
+    preamble: headLines.slice(0, from).filter((line) => line.trim() !== ''),
+  };
+}
+
+function columnKinds(lines: SplitLine[], width: number): CellKind[] {
+  return Array.from({ length: width }, (_, column) => {
+    const counts = new Map<CellKind, number>();
+    for (const line of lines) {
+      const kind = line.kinds.length === width ? line.kinds[column]! : 'empty';
+      if (!line.kinds.some(isTyped)) continue;
+      if (kind !== 'empty' && kind !== 'open') counts.set(kind, (counts.get(kind) ?? 0) + 1);
+    }
+    const most = [...counts].sort((a, b) => b[1] - a[1])[0];
+    return most?.[0] ?? 'empty';
+  });
+}
+
+/** A row of readings: the right number of cells, each of its column's kind or without a reading. */
+function fitsKinds({ kinds }: SplitLine, columns: CellKind[]): boolean {
+  if (kinds.length < columns.length || kinds.length > columns.length + 1) return false;
+  let typed = 0;
+  for (const [i, column] of columns.entries()) {
+    const kind = kinds[i]!;
+    if (isTyped(kind)) typed++;
+    if (isTyped(column) && kind !== column && kind !== 'empty' && kind !== 'open') return false;
+  }
+  return typed > 0 && (columns.length === 1 || typed > 1 || columns.filter(isTyped).length < 2);
+}
+
+/** A lone line that looks right above the table is preamble: most of what follows must fit too. */
+function firstOf(fits: boolean[], headCount: number): number {
+  for (let i = 0; i < headCount; i++) {
+    if (!fits[i]) continue;
+    const next = fits.slice(i, Math.min(i + 6, headCount));
+    if (next.filter(Boolean).length * 2 > next.length) return i;
+  }
+  return fits.slice(0, headCount).indexOf(true);
+}
+
+function sampleColumn(
+  index: number,
+  kind: CellKind,
+  lines: SplitLine[],
+  fits: boolean[],
+  firstLine: number,
+  headCount: number,
+): SampleColumn {
+  const cells: string[] = [];
+  let headCells = 0;
+  for (let i = firstLine; i < lines.length; i++) {
+    if (!fits[i]) continue;
+    cells.push(lines[i]!.cells[index]!);
+    if (i < headCount) headCells++;
+  }
+  return { index, kind, cells, headCells };
+}
+
+const UNIT_CELL =
+  /^[([]?\s*(s|sec|secs|seconds?|ms|min|minutes?|h|hrs?|hours?|hh:mm(:ss)?|h:mm(:ss)?|mm?:ss|[ymd]{1,4}[-/.][ymd]{1,4}[-/.][ymd]{1,4}.*|%|% ?rh|v|mv|a|ma|w|kw|pa|hpa|-|#|no\.?)\s*[)\]]?$/i;
+
+/** The line right above the readings is a header if it is words; above a row of units, the line before. */
+function findHeader(
+  headLines: string[],
+  firstLine: number,
+  choice: DelimiterChoice,
+): { header: string[] | null; unitRow: string[] | null; from: number } {
+  const nearest = lineAbove(headLines, firstLine);
+  const cells = nearest < 0 ? null : headerCells(headLines[nearest]!, choice);
+  if (!cells) return { header: null, unitRow: null, from: firstLine };
+  const above = lineAbove(headLines, nearest);
+  const upper = above < 0 ? null : headerCells(headLines[above]!, choice);
+  const filled = cells.filter((cell) => cell !== '');
+  const areUnits = filled.every(
+    (cell) => UNIT_CELL.test(cell) || (findUnit(cell) && cell.length < 12),
+  );
+  if (areUnits && upper) return { header: upper, unitRow: cells, from: above };
+  return { header: cells, unitRow: null, from: nearest };
+}
+
+function lineAbove(lines: string[], index: number): number {
+  let at = index - 1;
+  while (at >= 0 && lines[at]!.trim() === '') at--;
+  return at;
+}
+
+/** Words in about as many cells as the readings have; null where the line is no header. */
+function headerCells(line: string, { delimiter, width }: DelimiterChoice): string[] | null {
+  if (/^sep=.\s*$/i.test(line)) return null;
+  let { cells } = splitCells(line.replace(/^\s*#\s*/, ''), delimiter);
+  if (delimiter === ' ' && cells.length !== width) cells = line.trim().split(/\s{2,}|\t+/);
+  const words = cells.filter((cell) => /[^\d\s.,:;/+-]/.test(cell)).length;
+  const filled = cells.filter((cell) => cell !== '').length;
+  if (words === 0 || words < filled * 0.5) return null;
+  if (width === 1) return cells.length === 1 && !/[:=]/.test(line) ? cells : null;
+  return filled >= 2 && filled >= width * 0.5 ? cells : null;
+}

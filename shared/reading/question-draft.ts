@@ -1,0 +1,8 @@
+import type { QuestionSubject } from './log-reading.ts';
+
+/** A question before its previews are made; the proposal first. */
+export type QuestionDraft = {
+  about: QuestionSubject;
+  message: string;
+  options: { answer: string; label: string }[];
+};

@@ -1,0 +1,80 @@
+import { toKelvinStep, type TemperatureUnit } from '../../units.ts';
+
+/**
+ * Numbers that loggers and sensors write for "no reading" (common practice): all nines, ends of 16-bit
+ * and 12-bit ranges and their tenths, power-on and fault codes of digital sensors, ends of scale.
+ */
+const KNOWN = new Set([
+  -9999, -9999.9, -999.9, -999, -99.9, -99, 999, 999.9, 9999, 9999.9, 99999, 32767, 32768, -32768,
+  3276.7, 3276.8, -3276.8, 327.67, -327.68, 6553.5, 655.35, 65535, 2047, 2047.9, 4095, 85, 127,
+  -127, -128, 127.9, 128, -45, -40, -46.85, -242.02, 988.79, -200, 850, 1372, 0, -1, 1e9,
+]);
+
+/** A reading stands out where both neighbours are further off than an exhaust moves in one step, K. */
+const STANDS_OUT_K = 15;
+/** ... and by this many times the usual step. */
+const STANDS_OUT_STEPS = 10;
+const NEIGHBOURS = 20_000;
+
+export type Sentinel = { place: number; value: number };
+
+/**
+ * Places of readings that stand for "no reading": a known number, alone or in a run of its own, that
+ * jumps away from the readings before and after. 85.0 in the middle of a plausible curve is a reading.
+ *
+ * @param temps readings in `unit`, finite
+ */
+export function findSentinels(temps: Float64Array, unit: TemperatureUnit): Sentinel[] {
+  const found: Sentinel[] = [];
+  const stepK = Math.max(STANDS_OUT_K, STANDS_OUT_STEPS * toKelvinStep(medianMove(temps), unit));
+  let i = 0;
+  while (i < temps.length) {
+    const value = temps[i]!;
+    const isJump = i === 0 || toKelvinStep(Math.abs(value - temps[i - 1]!), unit) >= stepK;
+    if (!isJump || !KNOWN.has(value)) {
+      i++;
+      continue;
+    }
+    let to = i + 1;
+    while (to < temps.length && temps[to] === value) to++;
+    if (standsOut(temps, i, to, (k) => toKelvinStep(k, unit) >= stepK)) {
+      for (let place = i; place < to; place++) found.push({ place, value });
+    }
+    i = to;
+  }
+  return found.length < temps.length ? found : [];
+}
+
+function standsOut(
+  temps: Float64Array,
+  from: number,
+  to: number,
+  isFar: (step: number) => boolean,
+): boolean {
+  const value = temps[from]!;
+  const before = nearest(temps, from - 1, -1);
+  const after = nearest(temps, to, 1);
+  if (before === null && after === null) return false;
+  const farBefore = before === null || isFar(Math.abs(before - value));
+  const farAfter = after === null || isFar(Math.abs(after - value));
+  if (!farBefore || !farAfter) return false;
+  // a jump up and a jump on up is a fast rise, not an isolated reading
+  return before === null || after === null || before > value === after > value;
+}
+
+/** The nearest reading that is not itself a known number. */
+function nearest(temps: Float64Array, from: number, step: 1 | -1): number | null {
+  for (let i = from; i >= 0 && i < temps.length; i += step) {
+    if (!KNOWN.has(temps[i]!)) return temps[i]!;
+  }
+  return null;
+}
+
+function medianMove(temps: Float64Array): number {
+  const stride = Math.max(1, Math.floor(temps.length / NEIGHBOURS));
+  const moves: number[] = [];
+  for (let i = stride; i < temps.length; i += stride)
+    moves.push(Math.abs(temps[i]! - temps[i - 1]!));
+  const sorted = Float64Array.from(moves).sort();
+  return sorted[sorted.length >> 1] ?? 0;
+}
