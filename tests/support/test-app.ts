@@ -22,7 +22,7 @@ export const NOW = new Date('2026-03-04T15:00:00Z');
 
 export type TestApp = Awaited<ReturnType<typeof createTestApp>>;
 /** Somebody signed in, with the requests they send. */
-export type Agent = ReturnType<typeof request.agent> & { person: Person };
+export type Agent = ReturnType<typeof request.agent> & { person: Person; cookie: string };
 
 /**
  * The real app on a migrated in-memory database with one shop and nobody in it. Gone after the test file.
@@ -56,7 +56,8 @@ export async function createTestApp(given: Partial<AppParts> = {}) {
     app,
     lines,
     ...parts,
-    agent: (role: Role, name?: string) => signedIn(app, parts, role, name),
+    agent: (role: Role, name?: string) => newAgent(app, parts, role, name),
+    agentOf: (person: Person) => agentOf(app, parts, person),
   };
 }
 
@@ -71,28 +72,23 @@ export const TEST_SHOP = {
 } as const;
 
 /** A new person with an open session, without the third of a second that a password costs. */
-async function signedIn(
-  app: Express,
-  parts: AppParts,
-  role: Role,
-  name = `A ${role}`,
-): Promise<Agent> {
-  const nowMs = parts.now().getTime();
+async function newAgent(app: Express, parts: AppParts, role: Role, name = `A ${role}`) {
   const id = randomUUID();
   const person: Person = { id, name, email: `${id}@harrowlane.example`, role, disabledAtMs: null };
+  const createdAtMs = parts.now().getTime();
   const passwordHash = 'no password fits this';
-  await createPeopleRepository(parts.db).insert({ ...person, passwordHash, createdAtMs: nowMs });
+  await createPeopleRepository(parts.db).insert({ ...person, passwordHash, createdAtMs });
+  return agentOf(app, parts, person);
+}
 
-  const session = {
-    id: randomUUID(),
-    userId: id,
-    createdAtMs: nowMs,
-    seenAtMs: nowMs,
-    endedAtMs: null,
-  };
+/** A session of its own for somebody who is there. */
+async function agentOf(app: Express, parts: AppParts, person: Person): Promise<Agent> {
+  const nowMs = parts.now().getTime();
+  const times = { createdAtMs: nowMs, seenAtMs: nowMs, endedAtMs: null };
+  const session = { id: randomUUID(), userId: person.id, ...times };
   await createSessionRepository(parts.db).insert(session);
-  const claims = { sessionId: session.id, userId: id };
-  const token = signToken(claims, parts.secrets.tokenKey, nowMs + 86_400_000);
-  const agent = request.agent(app).set('Cookie', `fusekeeper=${token}`);
-  return Object.assign(agent, { person });
+  const claims = { sessionId: session.id, userId: person.id };
+  const token = signToken(claims, parts.secrets.tokenKey, nowMs + 30 * 86_400_000);
+  const cookie = `fusekeeper=${token}`;
+  return Object.assign(request.agent(app).set('Cookie', cookie), { person, cookie });
 }
