@@ -23,15 +23,16 @@ export function createRunReadings(db: Knex) {
       return folder.columns();
     },
 
-    /** All times, then all temperatures, as little-endian float64. */
-    async *octets(run: Run, channel: number): AsyncGenerator<Uint8Array> {
-      const unit = unitOf(run, channel);
-      for await (const timesS of samples.chunks(run.id, TIMES)) yield packChunk(timesS);
-      for await (const temps of samples.chunks(run.id, TEMPS + channel)) {
-        yield packChunk(inCelsius(temps, unit));
-      }
-    },
+    /** All times, then all temperatures, as little-endian float64. Refuses before the first octet. */
+    octets: (run: Run, channel: number) => octets(run.id, channel, unitOf(run, channel)),
   };
+
+  async function* octets(runId: string, channel: number, unit: TemperatureUnit) {
+    for await (const timesS of samples.chunks(runId, TIMES)) yield packChunk(timesS);
+    for await (const temps of samples.chunks(runId, TEMPS + channel)) {
+      yield packChunk(inCelsius(temps, unit));
+    }
+  }
 }
 
 function unitOf(run: Run, channel: number): TemperatureUnit {

@@ -23,8 +23,7 @@ export function uploadRoutes(uploads: UploadService, receive: ReceiveFile): Rout
     const release = await uploads.begin(by, visitId);
     try {
       const upload = uploads.stage(by, visitId, await receive(req, res));
-      // It goes on after the answer; the page asks how far it is.
-      void uploads.read(upload).finally(release);
+      uploads.startReading(upload, release);
       res.status(201).location(`/api/uploads/${upload.id}`);
       send(res, upload);
     } catch (error) {

@@ -66,7 +66,12 @@ export function createUploadService({ worker, sources, runs, audit, onDefect }: 
     return upload;
   }
 
-  /** [2 read] what lies in the staging folder, for a person to look at. Never rejects: the upload tells how it went. */
+  /** It goes on after the answer: the page asks how far it is, and the upload tells how it went. */
+  function startReading(upload: StagedUpload, release: () => void): void {
+    void read(upload).catch(onDefect).finally(release);
+  }
+
+  /** [2 read] what lies in the staging folder, for a person to look at. */
   async function read(upload: StagedUpload): Promise<void> {
     const progress = new SharedArrayBuffer(Float64Array.BYTES_PER_ELEMENT);
     const stop = new AbortController();
@@ -81,7 +86,8 @@ export function createUploadService({ worker, sources, runs, audit, onDefect }: 
     } catch (error) {
       if (stop.signal.aborted) return;
       onDefect(error);
-      await show(upload, { state: 'refused', problem: DEFECT });
+      upload.reading = { state: 'refused', problem: DEFECT };
+      await rm(upload.path, { force: true });
     }
   }
 
@@ -111,7 +117,7 @@ export function createUploadService({ worker, sources, runs, audit, onDefect }: 
   return {
     begin,
     stage,
-    read,
+    startReading,
     get,
     discard: (by: Person, id: string) => discard(get(by, id)),
     sentUpload: (personId: string, id: string) =>
@@ -123,7 +129,7 @@ export function createUploadService({ worker, sources, runs, audit, onDefect }: 
       if (upload.reading.state === 'refused') throw gone();
       const release = heavyWork.take(by.id);
       upload.choices = choices;
-      void read(upload).finally(release);
+      startReading(upload, release);
       return upload;
     },
 

@@ -12,7 +12,8 @@ export function createOpenLimit(now: () => Date) {
 
   function failedBy(address: string): number {
     const nowMs = now().getTime();
-    if (nowMs - windowStartMs >= WINDOW_MS) {
+    // A clock that was set back begins a new minute too.
+    if (nowMs < windowStartMs || nowMs - windowStartMs >= WINDOW_MS) {
       windowStartMs = nowMs;
       failed.clear();
     }

@@ -1,7 +1,10 @@
-import { expect } from 'vitest';
+import { expect, vi } from 'vitest';
 import type { AcceptUpload, RunConditions } from '#shared/schemas/runs.ts';
 import { uploadSchema, type Upload } from '#shared/schemas/uploads.ts';
 import type { Agent } from './test-app.ts';
+
+/** For what waits for a worker's first start, on a machine that has much else to do. */
+export const WORKER_START_MS = 60_000;
 
 export const CONDITIONS: RunConditions = {
   placement: 'Centre of the outlet',
@@ -30,12 +33,16 @@ export async function sendLog(
   return untilRead(agent, sent.body.id);
 }
 
-export async function untilRead(agent: Agent, id: string): Promise<Upload> {
-  for (;;) {
-    const { body } = await agent.get(`/api/uploads/${id}`).expect(200);
-    const upload = uploadSchema.parse(body);
-    if (upload.reading.state !== 'reading') return upload;
-  }
+export function untilRead(agent: Agent, id: string): Promise<Upload> {
+  return vi.waitFor(
+    async () => {
+      const { body } = await agent.get(`/api/uploads/${id}`).expect(200);
+      const upload = uploadSchema.parse(body);
+      expect(upload.reading.state).not.toBe('reading');
+      return upload;
+    },
+    { timeout: 60_000, interval: 100 },
+  );
 }
 
 export function previewOf(upload: Upload): Read['preview'] {

@@ -3,7 +3,7 @@ import { jobPageSchema } from '#shared/schemas/jobs.ts';
 import { runCardSchema, runPageSchema } from '#shared/schemas/runs.ts';
 import { bookVisit, THERMOSTAT_155, type BookedVisit } from '#tests/support/booked-visit.ts';
 import { cyclingLog, cyclingTemps } from '#tests/support/cycling-log.ts';
-import { makeRun } from '#tests/support/send-log.ts';
+import { makeRun, WORKER_START_MS } from '#tests/support/send-log.ts';
 import { createTestApp, type Agent } from '#tests/support/test-app.ts';
 
 const THERMOSTAT = { opensF: 155, closesF: 130 };
@@ -17,7 +17,7 @@ let runId: string;
 beforeAll(async () => {
   booked = await bookVisit(owner, technician);
   runId = await makeRun(technician, booked.visit.id, cyclingLog());
-});
+}, WORKER_START_MS);
 
 async function octets(agent: Agent, path: string): Promise<Float64Array> {
   const answer = await agent.get(path).responseType('blob').expect(200);
@@ -81,7 +81,7 @@ test('the file comes back untouched, as a download and nothing else', async () =
 
   expect(Buffer.from(answer.body).toString('utf8')).toBe(cyclingLog());
   expect(answer.headers).toMatchObject({
-    'content-disposition': 'attachment; filename="exhaust.csv"',
+    'content-disposition': 'attachment; filename=exhaust.csv',
     'content-type': 'application/octet-stream',
     'x-content-type-options': 'nosniff',
     'cache-control': 'no-store',

@@ -3,28 +3,30 @@ import { readdir } from 'node:fs/promises';
 import { createServer, request as httpRequest, type IncomingMessage } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
-import { afterAll, beforeAll, expect, test } from 'vitest';
+import { afterAll, beforeAll, expect, test, vi } from 'vitest';
 import { bookVisit } from '#tests/support/booked-visit.ts';
 import { cyclingLog } from '#tests/support/cycling-log.ts';
-import { sendLog } from '#tests/support/send-log.ts';
+import { sendLog, WORKER_START_MS } from '#tests/support/send-log.ts';
 import { createTestApp, type Agent } from '#tests/support/test-app.ts';
 
 const BOUNDARY = 'fusekeeper-test';
 const MB = 1024 * 1024;
 
+vi.setConfig({ testTimeout: WORKER_START_MS });
+
 const app = await createTestApp();
 const owner = await app.agent('owner');
-const server = createServer(app.app).listen(0, '127.0.0.1');
+const server = createServer(app.app);
 let technician: Agent;
 let cookie: string;
 let visitId: string;
 
 beforeAll(async () => {
-  await once(server, 'listening');
+  await once(server.listen(0, '127.0.0.1'), 'listening');
   technician = await app.agent('technician');
   visitId = (await bookVisit(owner, technician)).visit.id;
   cookie = technician.cookie;
-});
+}, WORKER_START_MS);
 
 afterAll(() => {
   server.closeAllConnections();

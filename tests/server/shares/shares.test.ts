@@ -4,7 +4,7 @@ import { beforeAll, expect, test } from 'vitest';
 import { madeShareSchema, sharedRunSchema } from '#shared/schemas/shares.ts';
 import { bookVisit, THERMOSTAT_155 } from '#tests/support/booked-visit.ts';
 import { cyclingLog } from '#tests/support/cycling-log.ts';
-import { makeRun } from '#tests/support/send-log.ts';
+import { makeRun, WORKER_START_MS } from '#tests/support/send-log.ts';
 import { createTestApp, NOW, TEST_SHOP } from '#tests/support/test-app.ts';
 
 const DAY_MS = 86_400_000;
@@ -18,7 +18,7 @@ let runId: string;
 beforeAll(async () => {
   const { visit } = await bookVisit(owner, technician);
   runId = await makeRun(technician, visit.id, cyclingLog());
-});
+}, WORKER_START_MS);
 
 async function makeShare(days = 30) {
   const answer = await technician.post(`/api/runs/${runId}/shares`).send({ days }).expect(201);
