@@ -1,0 +1,65 @@
+import { resolve } from 'node:path';
+import { expect, test } from 'vitest';
+import { readEnv } from '#server/env.ts';
+
+test('with nothing set it runs on this machine only, at port 4870, with the demo', () => {
+  expect(readEnv({})).toEqual({
+    port: 4870,
+    host: '127.0.0.1',
+    dataDir: resolve('data'),
+    publicUrl: null,
+    development: false,
+    demo: true,
+    logLevel: 'info',
+    owner: { name: undefined, email: undefined, password: undefined },
+  });
+});
+
+test('every name is read', () => {
+  const env = readEnv({
+    PORT: '4871',
+    HOST: '::1',
+    DATA_DIR: '/srv/fusekeeper',
+    PUBLIC_URL: 'https://fusekeeper.example/',
+    NODE_ENV: 'development',
+    DEMO: 'no',
+    LOG_LEVEL: 'warn',
+    OWNER_NAME: 'Mae',
+  });
+
+  expect(env).toMatchObject({
+    port: 4871,
+    host: '::1',
+    dataDir: '/srv/fusekeeper',
+    development: true,
+    demo: false,
+    logLevel: 'warn',
+    owner: { name: 'Mae' },
+  });
+  expect(env.publicUrl?.origin).toBe('https://fusekeeper.example');
+});
+
+test('an empty value counts as not set', () => {
+  expect(readEnv({ PORT: '', DEMO: '', PUBLIC_URL: '' })).toMatchObject({
+    port: 4870,
+    demo: true,
+    publicUrl: null,
+  });
+});
+
+test('every bad name is told at once', () => {
+  const read = () =>
+    readEnv({
+      PORT: '70000',
+      HOST: 'my laptop',
+      DEMO: 'perhaps',
+      PUBLIC_URL: 'ftp://x',
+      NODE_ENV: 'x',
+    });
+
+  expect(read).toThrow(/PORT must be 0 to 65535/);
+  expect(read).toThrow(/HOST must be an IP address or localhost/);
+  expect(read).toThrow(/DEMO must be yes or no/);
+  expect(read).toThrow(/PUBLIC_URL must be an http or https address/);
+  expect(read).toThrow(/NODE_ENV must be development, production or test/);
+});
