@@ -45,9 +45,11 @@ export function runRoutes({ runs, pages, notes, readings, folders }: RunRoutePar
   router.get('/runs/:id/samples', async (req, res) => {
     const { channel } = validate(samplesSchema, req.query);
     const run = await runs.get(req.params.id);
+    // Refuses before a header is set.
+    const octets = readings.octets(run, channel);
     res.type('application/octet-stream');
     res.set('Content-Length', String(2 * run.samples * Float64Array.BYTES_PER_ELEMENT));
-    await pipeline(Readable.from(readings.octets(run, channel)), res);
+    await pipeline(Readable.from(octets), res);
   });
 
   router.get('/runs/:id/file', async (req, res) => {

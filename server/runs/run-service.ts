@@ -31,6 +31,7 @@ export type RunService = ReturnType<typeof createRunService>;
 export function createRunService({ db, worker, sources, folders, now }: RunParts) {
   const runs = createRunRepository(db);
   const samples = createSampleRepository(db);
+  const analyses = createAnalysisRepository(db);
 
   async function judgingOf(log: Pick<LogToImport, 'visitId' | 'conditions' | 'marks'>) {
     const { machine } = await sources.visitFacts(log.visitId);
@@ -96,11 +97,11 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
     const judged = rating ? judgedByAnother(machine, run.conditions.setting, rating) : own;
     const series = await readWholeRun(samples, run);
     const result = await worker.judge({ ...series, judging: judgingFor({ judged, ...said }) });
-    await createAnalysisRepository(db).insert({
+    await analyses.insert({
       ...result,
       id: randomUUID(),
       runId: id,
-      madeAtMs: now().getTime(),
+      madeAtMs: await laterThanAll(id),
       judgedBy: judged,
     });
     const details = { rating: judged?.name ?? 'none' };
@@ -113,6 +114,12 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
       subject: id,
       details,
     });
+  }
+
+  /** Now, or a moment after the newest result: which is the newest is told by time alone. */
+  async function laterThanAll(runId: string): Promise<number> {
+    const [newest] = await analyses.listHeads([runId]);
+    return Math.max(now().getTime(), (newest?.madeAtMs ?? 0) + 1);
   }
 
   /** The untouched file that a run came from. */
