@@ -58,6 +58,10 @@ const deskPages: RouteObject[] = [
     'machines/:id/parts/new',
   ),
   page(
+    async () => (await import('./pages/machine/remove-part-page.tsx')).RemovePartPage,
+    'machines/:id/parts/:partId/out',
+  ),
+  page(
     async () => (await import('./pages/machine/specify-page.tsx')).SpecifyPage,
     'machines/:id/specified/:setting',
   ),

@@ -7,6 +7,7 @@ import {
   type NewFittedPart,
   type NewMachine,
   type NewSpecifiedRating,
+  type RemovedPart,
 } from '#shared/schemas/homes.ts';
 import { runCardSchema } from '#shared/schemas/runs.ts';
 import { fetchJson, postJson, putJson } from './http.ts';
@@ -69,7 +70,7 @@ export function useFitPart(id: string) {
   );
 }
 
-export type PartRemoval = { partId: string; removedAtMs: number; removedWhy: string };
+type PartRemoval = RemovedPart & { partId: string };
 
 export function useRemovePart(id: string) {
   return useMachineChange(id, ({ partId, ...removal }: PartRemoval) =>

@@ -1,6 +1,8 @@
 import type { ReactNode } from 'react';
+import { DeskPage } from './frame.tsx';
 import { Key } from './key.tsx';
 import { Notice } from './notice.tsx';
+import { PageHeading } from './page-heading.tsx';
 
 /** Waiting is a sentence. */
 export function Waiting({ children }: { children: ReactNode }) {
@@ -21,5 +23,23 @@ export function Failed({ error, onRetry }: { error: Error; onRetry?: () => unkno
         </div>
       )}
     </Notice>
+  );
+}
+
+type Fetched = { isPending: boolean; error: Error | null; refetch: () => unknown };
+
+/** A whole desk page that waits for what it shows, or says why it cannot be shown. */
+export function UnfetchedPage({ noun, query }: { noun: string; query: Fetched }) {
+  return (
+    <DeskPage>
+      {query.error ? (
+        <>
+          <PageHeading>{`This ${noun} did not open`}</PageHeading>
+          <Failed error={query.error} onRetry={query.refetch} />
+        </>
+      ) : (
+        <Waiting>Fetching the {noun}…</Waiting>
+      )}
+    </DeskPage>
   );
 }

@@ -59,6 +59,7 @@ export function useCheckedForm<In extends FieldValues, Out>({
   return {
     register: form.register,
     setValue: form.setValue,
+    reset: form.reset,
     getValues: form.getValues,
     control: form.control,
     handleSubmit,

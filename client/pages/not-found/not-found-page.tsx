@@ -1,20 +1,5 @@
-import { useLocation } from 'react-router-dom';
-import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink } from '../../components/key.tsx';
-import { PageHeading } from '../../components/page-heading.tsx';
+import { NothingHere } from '../../components/nothing-here.tsx';
 
 export function NotFoundPage() {
-  const { pathname } = useLocation();
-  return (
-    <DeskPage>
-      <PageHeading>There is no such page</PageHeading>
-      <p className="max-w-read pt-3 pb-6 text-say">
-        Nothing stands at <span className="words break-all">{pathname}</span>. The address may be
-        mistyped, or what it named was taken away.
-      </p>
-      <KeyLink to="/" face="main">
-        Go to the first page
-      </KeyLink>
-    </DeskPage>
-  );
+  return <NothingHere />;
 }
