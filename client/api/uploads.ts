@@ -18,6 +18,8 @@ export function uploadQuery(id: string) {
     refetchInterval: ({ state }) =>
       state.data?.reading.state === 'reading' ? ASK_EVERY_MS : false,
     staleTime: Infinity,
+    // Once nobody looks at it, it is soon forgotten: the file may be gone.
+    gcTime: 2_000,
   });
 }
 
@@ -82,7 +84,6 @@ export function useChooseReading(id: string) {
 
 /** Throws the staged file away; one that is already gone is as good. */
 export function useDiscardUpload() {
-  const queryClient = useQueryClient();
   return useMutation({
     mutationFn: async (id: string) => {
       try {
@@ -91,7 +92,6 @@ export function useDiscardUpload() {
         if (!(error instanceof ApiError && error.status === 404)) throw error;
       }
     },
-    onSuccess: (_nothing, id) => queryClient.removeQueries(uploadQuery(id)),
   });
 }
 

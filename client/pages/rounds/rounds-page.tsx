@@ -47,7 +47,9 @@ function RoundsFrame({ heading, body }: { heading: string; body: React.ReactNode
 }
 
 function DayHeading({ children }: { children: string }) {
-  return <PageHeading className="py-2 max-[350px]:!text-[25px]">{children}</PageHeading>;
+  return (
+    <PageHeading className="py-2 !text-[27px] max-[350px]:!text-[24px]">{children}</PageHeading>
+  );
 }
 
 function Day({ rounds, nowMs }: { rounds: Rounds; nowMs: number }) {

@@ -1,10 +1,12 @@
 import { useState, type SubmitEvent } from 'react';
 import type { QuestionSubject } from '#shared/reading/log-reading.ts';
+import { temperatureUnitSchema } from '#shared/schemas/primitives.ts';
 import type { Upload } from '#shared/schemas/uploads.ts';
 import { useChooseReading } from '../../api/uploads.ts';
 import { ErrorSummary } from '../../components/error-summary.tsx';
 import { Key, Word } from '../../components/key.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
+import { unitWords } from '../../format/rating-words.ts';
 import { FirstRows } from './preview/first-rows.tsx';
 
 type Asked = Extract<Upload['reading'], { state: 'question' }>['question'];
@@ -22,6 +24,11 @@ const HEADINGS: Record<QuestionSubject, string> = {
   runs: 'Which of the runs is it?',
   encoding: 'How is the text written?',
 };
+
+function unitOf(answer: string) {
+  const unit = temperatureUnitSchema.safeParse(answer);
+  return unit.success ? unitWords(unit.data) : null;
+}
 
 /** The file can be read in more than one way: each answer with the first rows as they would be, the proposal first. */
 export function Question({ upload, question, onLeave }: QuestionProps) {
@@ -65,7 +72,7 @@ export function Question({ upload, question, onLeave }: QuestionProps) {
               <FirstRows
                 rows={option.preview.slice(0, 4)}
                 caption={`The first rows, read as ${option.label}`}
-                unit={null}
+                unit={question.about === 'unit' ? unitOf(option.answer) : null}
               />
             )}
           </div>

@@ -22,7 +22,11 @@ export function ColumnsTable({ columns, channel }: Pick<ReadPreview, 'columns' |
           <Td>{name === channel ? 'the exhaust' : ROLE_WORDS[role]}</Td>
           <Td>
             {unit ? unitWords(unit) : '–'}
-            {unitFrom && <span className="text-small text-print"> from {unitFrom}</span>}
+            {unitFrom && (
+              <span className="text-small text-print">
+                {unitFrom === 'answered' ? ', as answered' : ` from ${unitFrom}`}
+              </span>
+            )}
           </Td>
         </tr>
       ))}

@@ -11,6 +11,7 @@ type FirstRowsProps = {
 
 /** Rows of the file beside what was made of them: the time of the run, the temperature. */
 export function FirstRows({ rows, caption, unit }: FirstRowsProps) {
+  const decimals = decimalsOf(rows);
   return (
     <Table
       caption={caption}
@@ -37,7 +38,7 @@ export function FirstRows({ rows, caption, unit }: FirstRowsProps) {
             {timeS === null ? '–' : formatRunTime(timeS)}
           </Td>
           <Td figure className="font-semibold">
-            {temp === null ? '–' : shownTemp(temp)}
+            {temp === null ? '–' : temp.toFixed(decimals).replace('-', '−')}
           </Td>
         </tr>
       ))}
@@ -45,9 +46,13 @@ export function FirstRows({ rows, caption, unit }: FirstRowsProps) {
   );
 }
 
-/** As recorded, without digits that binary fractions make up. */
-function shownTemp(temp: number): string {
-  return String(Number(temp.toPrecision(12))).replace('-', '−');
+/** As many decimals as the finest reading shown has, at most three. */
+function decimalsOf(rows: FirstRowsProps['rows']): number {
+  const decimals = rows.map(({ temp }) => {
+    const text = temp === null ? '' : String(Number(temp.toPrecision(12)));
+    return text.includes('.') ? text.length - text.indexOf('.') - 1 : 0;
+  });
+  return Math.min(3, Math.max(0, ...decimals));
 }
 
 function Cells({ cells }: { cells: string[] }) {

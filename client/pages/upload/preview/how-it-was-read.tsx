@@ -7,11 +7,14 @@ import { FirstRows } from './first-rows.tsx';
 import { ReadingFacts } from './reading-facts.tsx';
 import { SetAside } from './set-aside.tsx';
 
+/** Enough to see the clock step and the temperature move. */
+const SHOWN_ROWS = 8;
+
 type HowItWasReadProps = { upload: Upload; preview: ReadPreview };
 
 export function HowItWasRead({ upload, preview }: HowItWasReadProps) {
   const { skippedCount, warnings } = preview;
-  const aside = skippedCount === 0 ? 'none' : `${skippedCount.toLocaleString('en-US')} rows`;
+  const aside = skippedCount === 1 ? '1 row' : `${skippedCount.toLocaleString('en-US')} rows`;
   return (
     <div className="grid content-start gap-9">
       <section aria-labelledby="as-read">
@@ -31,7 +34,7 @@ export function HowItWasRead({ upload, preview }: HowItWasReadProps) {
           First rows
         </SectionHead>
         <FirstRows
-          rows={preview.preview}
+          rows={preview.preview.slice(0, SHOWN_ROWS)}
           caption="The first rows as understood"
           unit={unitWords(preview.channelUnit)}
         />
@@ -43,7 +46,7 @@ export function HowItWasRead({ upload, preview }: HowItWasReadProps) {
         <ColumnsTable columns={preview.columns} channel={preview.channel} />
       </section>
       <section aria-labelledby="aside">
-        <SectionHead site id="aside" state={aside}>
+        <SectionHead site id="aside" state={skippedCount > 0 && aside}>
           {warnings.length > 0 ? 'Set aside and put right' : 'Set aside'}
         </SectionHead>
         <SetAside preview={preview} />

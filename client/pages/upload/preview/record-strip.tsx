@@ -28,13 +28,16 @@ export function RecordStrip({ preview, bands, unit, spans, onMove }: RecordStrip
   const kept = spans.filter((span) => span !== null);
   const found = `${analysis.cutOuts.length} cut-outs and ${analysis.resets.length} resets found`;
   return (
-    <div ref={element} className="relative touch-pan-y border-y border-print bg-strip">
+    <div
+      ref={element}
+      className="relative touch-pan-y overflow-x-clip border-y border-print bg-strip"
+    >
       <SmallStrip
         strip={stripOfRun({ analysis, bands, marks: [], notes: [] })}
         trace={trace}
         unit={unit}
         name={`The whole record, ${formatRunTime(durationS)} long, ${found}.`}
-        bandNames={bands && { opens: 'heat should stop', closes: 'heat should come back' }}
+        bandNames={bands && { opens: 'opens', closes: 'closes' }}
         widthPx={widthPx}
         heightPx={widthPx >= DESK_FROM_PX ? 340 : 260}
       />
@@ -98,6 +101,7 @@ function SpanEnds({ span, durationS, widthPx, onMove }: SpanEndsProps) {
       <SpanHandle
         {...place}
         name={`Start of ${label}`}
+        side="start"
         timeS={fromS}
         bounds={{ lowS: 0, highS: Math.max(toS - 1, 0) }}
         onMove={(timeS) => onMove('fromS', timeS)}
@@ -105,6 +109,7 @@ function SpanEnds({ span, durationS, widthPx, onMove }: SpanEndsProps) {
       <SpanHandle
         {...place}
         name={`End of ${label}`}
+        side="end"
         timeS={toS}
         bounds={{ lowS: fromS + 1, highS: durationS }}
         onMove={(timeS) => onMove('toS', timeS)}

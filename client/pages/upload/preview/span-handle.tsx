@@ -5,6 +5,8 @@ import { SMALL_STRIP_MARGINS, shareOf, timeAtPx } from './strip-place.ts';
 
 type SpanHandleProps = {
   name: string;
+  /** Its flag and most of its target lie inside the run: two runs that meet can then both be taken hold of. */
+  side: 'start' | 'end';
   timeS: number;
   bounds: { lowS: number; highS: number };
   durationS: number;
@@ -13,7 +15,15 @@ type SpanHandleProps = {
 };
 
 /** An end of a run on the strip: dragged with a finger, or a second at a time with the arrow keys. */
-export function SpanHandle({ name, timeS, bounds, durationS, widthPx, onMove }: SpanHandleProps) {
+export function SpanHandle({
+  name,
+  side,
+  timeS,
+  bounds,
+  durationS,
+  widthPx,
+  onMove,
+}: SpanHandleProps) {
   const handle = useRef<HTMLDivElement>(null);
 
   function handlePointer(event: PointerEvent<HTMLDivElement>) {
@@ -44,11 +54,15 @@ export function SpanHandle({ name, timeS, bounds, durationS, widthPx, onMove }: 
       onPointerDown={(event) => event.currentTarget.setPointerCapture(event.pointerId)}
       onPointerMove={handlePointer}
       onKeyDown={handleKey}
-      className="absolute -ml-6 w-12 cursor-ew-resize touch-none"
-      style={{ left: `${shareOf(timeS, durationS, widthPx) * 100}%`, top, bottom: bottom - 18 }}
+      className={`absolute w-12 cursor-ew-resize touch-none ${side === 'start' ? '-ml-3' : '-ml-9'}`}
+      style={{ left: `${shareOf(timeS, durationS, widthPx) * 100}%`, top, bottom }}
     >
-      <span className="absolute inset-y-0 left-1/2 -ml-px w-0.5 bg-ink" />
-      <span className="absolute bottom-0 left-1/2 -ml-[9px] h-[22px] w-[18px] rounded-key border-line border-ink bg-key" />
+      <span
+        className={`absolute inset-y-0 w-0.5 bg-ink ${side === 'start' ? 'left-[11px]' : 'right-[11px]'}`}
+      />
+      <span
+        className={`absolute bottom-0 h-7 w-5 border-line border-ink bg-key ${side === 'start' ? 'left-[11px]' : 'right-[11px]'}`}
+      />
     </div>
   );
 }
