@@ -9,6 +9,8 @@ export class ApiError extends Error {
   readonly code: string;
   /** Field name to what is wrong with it. */
   readonly fields: Record<string, string>;
+  /** The whole refusal: it may carry more than words. */
+  readonly answer: unknown;
 
   constructor(status: number, problem: Problem) {
     super(problem.message);
@@ -16,6 +18,7 @@ export class ApiError extends Error {
     this.status = status;
     this.code = problem.code;
     this.fields = problem.fields ?? {};
+    this.answer = problem;
   }
 }
 

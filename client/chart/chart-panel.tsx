@@ -164,7 +164,7 @@ function Readout({ state: { cursorS, view }, pyramid, unit, events, widthPx }: R
   return (
     <div className="fig flex min-h-touch min-w-[15ch] flex-1 items-center justify-end gap-3 text-[17px]">
       {cursorS === null ? (
-        <span className="text-small text-print">Point at the trace, or use the arrow keys.</span>
+        <span className="text-small text-print">Touch the trace, or point at it, to read it.</span>
       ) : (
         <span aria-hidden="true" className="flex items-baseline gap-3">
           <span className="text-print">{time}</span>

@@ -48,11 +48,21 @@ export function drawMarks(frame: Frame, points: Point[]): Shape[] {
     .filter((point) => isInView(frame, point.timeS))
     .sort((a, b) => a.timeS - b.timeS);
   const values = frame.compact ? [] : drawValues(frame, shown);
-  return [...shown.flatMap((point) => drawMark(frame, point)), ...values];
+  const r = markRadius(frame, shown);
+  return [...shown.flatMap((point) => drawMark(frame, point, r)), ...values];
 }
 
-function drawMark(frame: Frame, point: Point): Shape[] {
-  const r = frame.compact ? 5.2 : 6;
+const LEAST_R = 2.4;
+
+/** 6 px, on a phone 5.2; smaller where marks would stand on each other. */
+function markRadius(frame: Frame, shown: Point[]): number {
+  const xs = shown.map((point) => xOf(frame, point.timeS));
+  const apart = xs.slice(1).map((x, i) => x - xs[i]!);
+  const middle = apart.sort((a, b) => a - b)[Math.floor(apart.length / 2)] ?? Infinity;
+  return Math.max(LEAST_R, Math.min(frame.compact ? 5.2 : 6, middle / 2.2));
+}
+
+function drawMark(frame: Frame, point: Point, r: number): Shape[] {
   const x = xOf(frame, point.timeS);
   const y = yOf(frame, point.tempC);
   return [...drawWhisker(frame, point, x, r), ...drawCall(point.call, point.kind, { x, y, r })];

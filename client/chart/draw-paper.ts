@@ -116,7 +116,8 @@ export function nameHotSpan(frame: Frame, span: HotSpan): Shape[] {
   );
 }
 
-function boxOfSpan(frame: Frame, { fromS, toS }: HotSpan): Box | null {
+/** The paper that a span takes up; null where it is out of sight. */
+export function boxOfSpan(frame: Frame, { fromS, toS }: HotSpan): Box | null {
   const left = xOf(frame, Math.max(fromS, frame.fromS));
   const width = xOf(frame, Math.min(toS, frame.toS)) - left;
   if (width <= 0) return null;

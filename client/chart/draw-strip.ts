@@ -8,7 +8,7 @@ import { chooseGridSteps } from './grid-steps.ts';
 import type { Pyramid } from './pyramid.ts';
 import type { Shape } from './shapes.ts';
 import type { Strip } from './strip.ts';
-import { drawHotTrace, drawReadingDots, traceReach } from './trace-path.ts';
+import { drawHotTrace, drawReadingDots, obstaclesOn } from './trace-path.ts';
 
 /** What is printed: paper, stripes, ruling, wall, hatched spans. Laid down before the trace. */
 export function drawUnderTrace(frame: Frame, strip: Strip): Shape[] {
@@ -27,7 +27,7 @@ export function drawOverTrace(
   columns: number,
 ): Shape[] {
   const steps = chooseGridSteps(frame);
-  const notes = placeNotes(frame, strip.notes, traceReach(pyramid, frame));
+  const notes = placeNotes(frame, strip.notes, obstaclesOn(frame, strip, pyramid));
   return [
     ...strip.hotSpans.flatMap((span) => drawHotTrace(pyramid, frame, span, columns)),
     ...drawReadingDots(pyramid, frame),

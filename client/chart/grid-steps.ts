@@ -66,14 +66,20 @@ const DEGREE_LABELS = [5, 10, 20, 50, 100];
 
 /** Minor lines never fall closer than this. */
 const MINOR_APART_PX = 4;
+/** Rules finer than the paper's own ten seconds come only where they stand this far apart. */
+const FINE_APART_PX = 8;
+const PAPER_S = 10;
 const HOLE_APART_PX = 8;
 const FIGURE_HEIGHT_PX = 16;
+/** A phone's scale has half as many figures. */
+const COMPACT_FIGURE_HEIGHT_PX = 24;
 
 export function chooseGridSteps(frame: Frame): GridSteps {
   const pxPerS = frame.plot.width / (frame.toS - frame.fromS);
   const degreesPerK = frame.unit === 'F' ? 1.8 : 1;
   const pxPerDeg = frame.plot.height / ((frame.highC - frame.lowC) * degreesPerK);
-  const [minorS, majorS] = firstRule(TIME_RULES, pxPerS);
+  const figurePx = frame.compact ? COMPACT_FIGURE_HEIGHT_PX : FIGURE_HEIGHT_PX;
+  const [minorS, majorS] = firstRule(timeRulesAt(pxPerS), pxPerS);
   const [minorDeg, majorDeg] = firstRule(DEGREE_RULES[frame.unit], pxPerDeg);
   return {
     minorS,
@@ -82,13 +88,17 @@ export function chooseGridSteps(frame: Frame): GridSteps {
     holeS: firstWide(HOLES, (stepS) => stepS * pxPerS >= HOLE_APART_PX),
     minorDeg,
     majorDeg,
-    labelDeg: firstWide(DEGREE_LABELS, (step) => step * pxPerDeg >= FIGURE_HEIGHT_PX),
+    labelDeg: firstWide(DEGREE_LABELS, (step) => step * pxPerDeg >= figurePx),
   };
 }
 
 /** Steps under a minute are written m:ss, which takes more room. */
 function figureWidthPx(stepS: number): number {
   return stepS < MINUTE ? 46 : 28;
+}
+
+function timeRulesAt(pxPerS: number): readonly (readonly [number, number])[] {
+  return TIME_RULES.filter(([minorS]) => minorS >= PAPER_S || minorS * pxPerS >= FINE_APART_PX);
 }
 
 function firstRule(

@@ -9,6 +9,10 @@ export function readPaint(element: Element): Paint {
   return { colours };
 }
 
+const CHART_FONTS = ['400', '600', '700']
+  .map((weight) => `${weight} 14px 'FK Gothic'`)
+  .concat("400 14px 'FK Text'");
+
 /** Calls back whenever the tokens may have changed. Returns what ends it. */
 export function watchPaint(onChange: () => void): () => void {
   const themes = new MutationObserver(onChange);
@@ -16,7 +20,10 @@ export function watchPaint(onChange: () => void): () => void {
   const print = matchMedia('print');
   print.addEventListener('change', onChange);
   let isWatching = true;
-  void document.fonts.ready.then(() => isWatching && onChange());
+  // A canvas does not ask for its fonts early enough: they are fetched by name, then it is laid down again.
+  void Promise.all(CHART_FONTS.map((font) => document.fonts.load(font))).then(
+    () => isWatching && onChange(),
+  );
   return () => {
     isWatching = false;
     themes.disconnect();

@@ -46,9 +46,11 @@ export function scaleFor(
 ): { lowC: number; highC: number; unit: DisplayUnit } {
   const reach = reachOf(pyramid, 0, pyramid.tempsC.length) ?? { lowC: 20, highC: 70 };
   const printed = bands ? [bands.highLimitC, bands.closesC - bands.closesTolK] : [];
-  const roomAbove = unit === 'F' ? 12 : 7;
-  const step = unit === 'F' ? 4 : 2;
-  const high = fromCelsius(Math.max(reach.highC, ...printed), unit) + roomAbove;
+  const [roomAbove, roomOverTrace, step] = unit === 'F' ? [12, 8, 4] : [7, 4, 2];
+  const high = Math.max(
+    ...printed.map((tempC) => fromCelsius(tempC, unit) + roomAbove),
+    fromCelsius(reach.highC, unit) + roomOverTrace,
+  );
   const low = fromCelsius(Math.min(reach.lowC, ...printed), unit) - step;
   return {
     lowC: toCelsius(Math.floor(low / step) * step, unit),

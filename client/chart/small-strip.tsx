@@ -11,7 +11,7 @@ import { frameOn, scaleFor, type Sheet } from './sheet.ts';
 import { words, type Shape } from './shapes.ts';
 import type { Bands, Strip } from './strip.ts';
 import { SvgShapes } from './svg-shapes.tsx';
-import { drawHotTrace, drawReadingDots, tracePath, traceReach } from './trace-path.ts';
+import { drawHotTrace, drawReadingDots, obstaclesOn, tracePath, traceReach } from './trace-path.ts';
 
 type SmallStripProps = {
   strip: Strip;
@@ -66,7 +66,7 @@ function drawSmallStrip(
   const steps = chooseGridSteps(frame);
   const columns = Math.round(frame.plot.width);
   const trace = tracePath(pyramid, frame, columns);
-  const notes = placeNotes(frame, strip.notes, traceReach(pyramid, frame));
+  const notes = placeNotes(frame, strip.notes, obstaclesOn(frame, strip, pyramid));
   return [
     ...drawPaper(frame, strip.bands, withoutMinor(steps)),
     ...(strip.bands ? drawWall(frame, strip.bands.highLimitC) : []),
@@ -90,6 +90,9 @@ function withoutMinor(steps: GridSteps): GridSteps {
   return { ...steps, minorS: steps.majorS, minorDeg: steps.majorDeg };
 }
 
+/** Room for a mark that stands on the trace. */
+const MARK_PX = 7;
+
 /** The upper stripe is named above it, the lower one below it, at the side where the trace leaves room. */
 function nameBands(
   frame: Frame,
@@ -102,10 +105,11 @@ function nameBands(
   const place = (text: string, y: number): Shape => {
     const widthPx = text.length * 7;
     const isFree = (fromX: number) => {
-      const met = reach(fromX, fromX + widthPx);
-      return !met || met.top > y + 4 || met.foot < y - 12;
+      const met = reach(fromX - MARK_PX, fromX + widthPx + MARK_PX);
+      return !met || met.top > y + 4 + MARK_PX || met.foot < y - 12 - MARK_PX;
     };
-    const fromRight = [0, 0.25, 0.5].map((share) => right - widthPx - share * frame.plot.width);
+    const spare = frame.plot.width - widthPx - 16;
+    const fromRight = [0, 0.25, 0.5, 0.75, 1].map((share) => right - widthPx - share * spare);
     const x = (fromRight.find(isFree) ?? right - widthPx) + widthPx;
     return words(text, { x, y }, { weight: 600, stretch: 'normal', align: 'right', haloPx: 4 });
   };

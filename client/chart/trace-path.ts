@@ -8,8 +8,9 @@ import {
   type Pyramid,
 } from './pyramid.ts';
 import { PEN_UP, type Shape } from './shapes.ts';
-import type { HotSpan, Span } from './strip.ts';
-import type { TraceReach } from './draw-notes.ts';
+import type { HotSpan, Span, Strip } from './strip.ts';
+import type { Obstacles, TraceReach } from './draw-notes.ts';
+import { boxOfSpan } from './draw-paper.ts';
 
 /** Readings closer than this are drawn by what their column reaches. */
 const READINGS_PER_COLUMN = 2;
@@ -111,4 +112,14 @@ export function traceReach(pyramid: Pyramid, frame: Frame): TraceReach {
     const reach = reachOf(pyramid, index(fromX), index(toX));
     return reach && { top: yOf(frame, reach.highC), foot: yOf(frame, reach.lowC) };
   };
+}
+
+/** What notes keep clear of. */
+export function obstaclesOn(frame: Frame, strip: Strip, pyramid: Pyramid): Obstacles {
+  const { left, width } = frame.plot;
+  const walls = strip.bands
+    ? [{ left, width, top: yOf(frame, strip.bands.highLimitC) - 8, height: 9 }]
+    : [];
+  const spans = strip.hotSpans.flatMap((span) => boxOfSpan(frame, span) ?? []);
+  return { reach: traceReach(pyramid, frame), hatched: [...walls, ...spans] };
 }

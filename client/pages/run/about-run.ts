@@ -9,7 +9,7 @@ export function aboutOf(run: RunPage, unit: DisplayUnit): About {
   return { unit, judgedBy: run.analysis.judgedBy, fuel: run.machine.fuel };
 }
 
-/** "opens 155 ± 5, closes 130 ± 5 °F", as judged. */
+/** "opens 155 ± 5, closes 130 ± 5", in the reader’s unit. */
 export function judgedWords(judgedBy: JudgedBy, unit: DisplayUnit): string {
   const band = (midC: number, tolK: number) =>
     formatRated(midC, unit).replace(
@@ -17,7 +17,7 @@ export function judgedWords(judgedBy: JudgedBy, unit: DisplayUnit): string {
       `\u00a0±\u00a0${plainStep(fromKelvinStep(tolK, unit))}`,
     );
   const { opensC, opensTolK, closesC, closesTolK } = judgedBy;
-  return `opens ${band(opensC, opensTolK)}, closes ${band(closesC, closesTolK)}\u00a0°${unit}`;
+  return `opens ${band(opensC, opensTolK)}, closes ${band(closesC, closesTolK)}`;
 }
 
 function plainStep(step: number): string {

@@ -11,16 +11,16 @@ export function AfterStop({ run, about }: { run: RunPage; about: About }) {
   return (
     <section
       aria-labelledby="after-stop"
-      className="mx-4 mb-5 border-t-bar border-b border-stop py-3 desk:mx-12 desk:mb-6"
+      className="mx-4 mb-5 border-t-bar border-b border-stop pt-2.5 pb-2 desk:mx-12"
     >
       <h2 id="after-stop" className="font-gothic text-section text-stop">
         In the next ten minutes
       </h2>
-      <ol className="gap-x-14 pt-1 desk:columns-2">
+      <ol className="gap-x-10 pt-1 desk:grid desk:grid-cols-2 wide:grid-cols-3">
         {steps.map((step, i) => (
-          <li key={step} className="grid break-inside-avoid grid-cols-[28px_minmax(0,1fr)] py-1.5">
+          <li key={step} className="grid grid-cols-[26px_minmax(0,1fr)] py-1">
             <span className="fig text-[18px] font-semibold text-print">{i + 1}</span>
-            <span className="text-[16px] leading-[1.4]">{step}</span>
+            <span className="text-[16px] leading-[1.35]">{step}</span>
           </li>
         ))}
       </ol>

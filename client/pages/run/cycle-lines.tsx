@@ -10,7 +10,9 @@ export function CycleLines({ rows, unit }: CyclesView) {
       <Th>No.</Th>
       <Th>Cut-out, °{unit}</Th>
       <Th>Reset, °{unit}</Th>
-      <Th figure>On / off, s</Th>
+      <Th figure className="whitespace-nowrap">
+        On / off, s
+      </Th>
     </>
   );
   return (

@@ -1,16 +1,18 @@
 import { zodResolver } from '@hookform/resolvers/zod';
-import { useEffect, useMemo } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 import { newNoteSchema, type NewNote, type RunPage } from '#shared/schemas/runs.ts';
 import { fromCelsius, toCelsius, type DisplayUnit } from '#shared/units.ts';
 import { formatMoment } from '#shared/wording/format.ts';
-import { useAddNote, useChangeNote } from '../../api/runs.ts';
+import { useAddNote, useChangeNote, useRemoveNote } from '../../api/runs.ts';
 import type { PickedMoment } from '../../chart/chart-panel.tsx';
 import { nearestReading, type Pyramid } from '../../chart/pyramid.ts';
 import { ErrorSummary } from '../../components/error-summary.tsx';
 import { Cells, TextField } from '../../components/field.tsx';
 import { Key, Word } from '../../components/key.tsx';
+import { Slip } from '../../components/slip.tsx';
+import { Failed } from '../../components/waiting.tsx';
 import { problemsOf } from '../../forms/use-checked-form.ts';
 import { readNumber } from '../../forms/typed-number.ts';
 import { readMoment } from './moment.ts';
@@ -130,12 +132,41 @@ export function NoteForm(props: NoteFormProps) {
           {...form.register('text')}
         />
       </Cells>
-      <div className="flex gap-2 pt-3">
+      <div className="flex flex-wrap items-center gap-x-5 gap-y-2 pt-3">
         <Key type="submit" face="main" disabled={isSaving}>
           {isSaving ? 'Keeping…' : 'Keep the note'}
         </Key>
-        <Word onClick={onDone}>Do not keep it</Word>
+        <Word onClick={onDone}>
+          {writing.noteId === null ? 'Do not keep it' : 'Leave it as it was'}
+        </Word>
+        {writing.noteId !== null && <RemoveNote {...props} noteId={writing.noteId} />}
       </div>
     </form>
+  );
+}
+
+function RemoveNote({ run, noteId, onDone }: NoteFormProps & { noteId: string }) {
+  const remove = useRemoveNote(run.id);
+  const [isAsked, setIsAsked] = useState(false);
+  return (
+    <>
+      <Word className="ml-auto" onClick={() => setIsAsked(true)}>
+        Remove it
+      </Word>
+      {remove.isError && <Failed error={remove.error} />}
+      {isAsked && (
+        <Slip
+          question="Remove this note?"
+          doer="Remove"
+          isBusy={remove.isPending}
+          onDo={() =>
+            remove.mutate(noteId, { onSuccess: onDone, onSettled: () => setIsAsked(false) })
+          }
+          onBack={() => setIsAsked(false)}
+        >
+          <p>It goes from the chart. Links already sent keep it.</p>
+        </Slip>
+      )}
+    </>
   );
 }

@@ -2,7 +2,7 @@ import { Link } from 'react-router-dom';
 import type { RunPage } from '#shared/schemas/runs.ts';
 import { fromKelvinStep, type DisplayUnit } from '#shared/units.ts';
 import type { About } from '#shared/wording/finding-words.ts';
-import { formatSpan, formatStep } from '#shared/wording/format.ts';
+import { formatStep } from '#shared/wording/format.ts';
 import { wordNotJudged } from '#shared/wording/word-call.ts';
 import { wordOutcome } from '#shared/wording/word-outcome.ts';
 import { Fact, Facts } from '../../components/facts.tsx';
@@ -21,26 +21,15 @@ export function TitleBlock({ run, about, zone }: TitleBlockProps) {
   const worded = headline && wordOutcome(analysis.outcome, headline, about);
   const day = longDateWords(run.startedAtMs, zone);
   return (
-    <header className="grid gap-4 px-4 pt-3.5 pb-4 desk:grid-cols-[minmax(0,1fr)_auto] desk:items-end desk:gap-14 desk:px-12 desk:pt-[22px] desk:pb-5">
-      <div>
-        <p className="lab">
-          <Link
-            to={`/jobs/${run.job.id}`}
-            className="inline-flex min-h-touch items-center desk:min-h-0"
-          >
-            Job {run.job.number}
-          </Link>{' '}
-          ·{' '}
-          <Link
-            to={`/visits/${run.visitId}`}
-            className="inline-flex min-h-touch items-center desk:min-h-0"
-          >
-            visit of {day}
-          </Link>{' '}
-          · {run.label}
-        </p>
+    <header className="gap-x-14 px-4 pt-3.5 pb-4 desk:grid desk:grid-cols-[minmax(320px,1fr)_auto] desk:items-end desk:px-12 desk:pt-[22px] desk:pb-5">
+      <p className="lab col-span-2 pb-1">
+        <PlaceLink to={`/jobs/${run.job.id}`}>Job {run.job.number}</PlaceLink> ·{' '}
+        <PlaceLink to={`/visits/${run.visitId}`}>visit of {day}</PlaceLink> · {run.label}, at{' '}
+        {timeWords(run.startedAtMs, zone)} · {conditionWords(run)}
+      </p>
+      <div className="pb-4 desk:pb-0">
         <PageHeading
-          className="max-w-[22ch]"
+          className="max-w-[24ch]"
           title={`${worded?.heading ?? 'Run'}, job ${run.job.number}`}
         >
           {worded?.heading ?? 'Nothing found'}
@@ -50,9 +39,22 @@ export function TitleBlock({ run, about, zone }: TitleBlockProps) {
           <p className="words pt-1 text-[16px]">{wordNotJudged(analysis.notJudged)}</p>
         )}
       </div>
-      <RunFacts run={run} unit={about.unit} at={timeWords(run.startedAtMs, zone)} />
+      <RunFacts run={run} unit={about.unit} />
     </header>
   );
+}
+
+/** A link inside a line of text whose target is as tall as a finger. */
+function PlaceLink({ to, children }: { to: string; children: React.ReactNode }) {
+  return (
+    <Link to={to} className="relative -my-[15px] inline-block py-[15px]">
+      {children}
+    </Link>
+  );
+}
+
+function conditionWords({ conditions }: RunPage): string {
+  return `duct ${conditions.duct}, ${conditions.load === 'empty' ? 'empty drum' : 'damp load'}, ${conditions.setting} heat`;
 }
 
 const SIGNS = { stop: StopSign, proven: DoneSign, 'not-proven': NoteSign };
@@ -78,9 +80,8 @@ function Outcome({
   );
 }
 
-function RunFacts({ run, unit, at }: { run: RunPage; unit: DisplayUnit; at: string }) {
+function RunFacts({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
   const { machine, customer, home, conditions, probe } = run;
-  const { judgedBy } = run.analysis;
   const reach = uncertaintyReach(pointsOf(run));
   return (
     <Facts>
@@ -92,10 +93,7 @@ function RunFacts({ run, unit, at }: { run: RunPage; unit: DisplayUnit; at: stri
         {customer.name}
         <Line>{home.address}</Line>
       </Fact>
-      <Fact name={run.fitted.length > 0 ? 'Fitted' : 'Specified'}>
-        {run.fitted[0]?.name ?? judgedBy?.name ?? 'not known'}
-        <Line>{judgedBy ? `judged: ${judgedWords(judgedBy, unit)}` : 'no rating to judge by'}</Line>
-      </Fact>
+      <RatedFact run={run} unit={unit} />
       <Fact name="Probe">
         {[probe?.name ?? 'not named', conditions.placement].join(', ')}
         <Line>
@@ -104,13 +102,21 @@ function RunFacts({ run, unit, at }: { run: RunPage; unit: DisplayUnit; at: stri
             : `${run.samples.toLocaleString('en-US')} readings`}
         </Line>
       </Fact>
-      <Fact name="Run">
-        at {at}, {formatSpan(run.durationS)} long
-        <Line>
-          duct {conditions.duct}, {conditions.load} drum, {conditions.setting}
-        </Line>
-      </Fact>
     </Facts>
+  );
+}
+
+/** What it was judged by; and what is fitted, where that is known and another thing. */
+function RatedFact({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
+  const { judgedBy } = run.analysis;
+  const fitted = run.fitted.find(({ kind }) => kind === 'cycling-thermostat');
+  const isSame = fitted !== undefined && fitted.id === judgedBy?.ratingId;
+  return (
+    <Fact name={isSame ? 'Fitted' : 'Judged by'}>
+      {judgedBy?.name ?? 'no rating known'}
+      {judgedBy && <Line>{judgedWords(judgedBy, unit)}</Line>}
+      {fitted && !isSame && <Line>fitted: {fitted.name}</Line>}
+    </Fact>
   );
 }
 

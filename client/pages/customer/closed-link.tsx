@@ -1,0 +1,34 @@
+import type { ShopToReach } from '../../api/shared-run.ts';
+import { PageHeading } from '../../components/page-heading.tsx';
+import { ThemeWord } from '../../components/theme-word.tsx';
+import { Phone } from './reach-shop.tsx';
+
+/** A mistyped link, one that is out of date and one that was taken back look the same. */
+export function ClosedLink({ shop, message }: { shop: ShopToReach; message: string }) {
+  return (
+    <main id="main" className="mx-auto max-w-letter px-5 pt-3 pb-10">
+      <div className="flex min-h-14 items-center justify-between border-b-bar border-ink">
+        <p className="font-gothic text-[20px] font-semibold font-stretch-[108%]">{shop.name}</p>
+        <ThemeWord />
+      </div>
+      <PageHeading className="pt-8">This link does not open</PageHeading>
+      <p className="max-w-read pt-3 text-lead">{message}</p>
+      <p className="max-w-read pt-3 text-lead">
+        Ask us for a new one: call <Phone number={shop.phone} />
+        {shop.email && (
+          <>
+            {' '}
+            or write to{' '}
+            <a
+              href={`mailto:${shop.email}`}
+              className="relative -my-[15px] inline-block py-[15px] break-all"
+            >
+              {shop.email}
+            </a>
+          </>
+        )}
+        .
+      </p>
+    </main>
+  );
+}
