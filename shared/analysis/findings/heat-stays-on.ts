@@ -2,13 +2,16 @@ import type { Evidence, Finding } from '../analysis.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
-import { median, quantile } from '../statistics/quantile.ts';
 import { firstCrossing, marksWithin, spanOf, totalU } from './trace.ts';
 
 /** Clean off-times for which a fall may hang above the reset band. */
 const HANG_TIMES = 3;
-/** A fall at equal temperature that takes this many times the run's clean ones keeps some heat. */
-const SLOW_TIMES = 1.6;
+/** A fall at equal temperature that takes this many times the run's cleanest keeps some heat … */
+const SLOW_TIMES = 1.7;
+/** … if it takes this much longer too, so that a short one is no matter of a second, s. */
+const LEAST_EXTRA_S = 12;
+/** A pause in the readings of more than this share of a fall may hide a turn. */
+const HIDING_SHARE = 0.2;
 /** Least span over which two falls are compared, K (7 °F). */
 const LEAST_SPAN_K = 7 / 1.8;
 /** Peaks further apart leave the drum unequally hot, and their falls do not compare, K (5 °F). */
@@ -17,6 +20,10 @@ const ALIKE_PEAKS_K = 5 / 1.8;
 const SETTLED_S = 120;
 /** Within this of its asymptote a leg has levelled off, K (3 °F). */
 const LEVEL_K = 3 / 1.8;
+/** A rise slower than this before its knee was level already, K/s (2 °F a minute). */
+const RISING_K_PER_S = 2 / 1.8 / 60;
+/** A fall needs this many readings between the two levels for its time to be known. */
+const LEAST_READINGS = 3;
 
 /**
  * The thermostat opened and some heat stays on: the exhaust hangs above the reset band, falls too slowly, or levels
@@ -33,7 +40,7 @@ export function findHeatStaysOn(facts: RunFacts): Finding | null {
   if (!rating) return null;
   for (const leg of facts.legs) {
     if (leg.kind === 'heating') {
-      const level = levelsInBand(leg, facts, rating);
+      const level = levelsInBand(leg, facts, rating) ?? risesAgain(leg, facts, rating);
       if (level) return level;
     } else if (leg.from.turnedBy === 'machine' && !isDisturbed(leg, facts)) {
       const found =
@@ -46,10 +53,13 @@ export function findHeatStaysOn(facts: RunFacts): Finding | null {
 
 /** A door or a machine turned off changes the fall; that is no fault. */
 function isDisturbed(leg: RunLeg, facts: RunFacts): boolean {
-  return (
-    leg.hasGap ||
-    marksWithin(facts, spanOf(leg), ['heat-off', 'stopped', 'door', 'duct-off']).length > 0
+  const { fromS, toS } = spanOf(leg);
+  const hidden = facts.gaps.some(
+    (gap) =>
+      gap.fromS < toS && gap.toS > fromS && gap.toS - gap.fromS > HIDING_SHARE * (toS - fromS),
   );
+  const marks = marksWithin(facts, { fromS, toS }, ['heat-off', 'stopped', 'door', 'duct-off']);
+  return hidden || marks.length > 0;
 }
 
 function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | null {
@@ -59,14 +69,17 @@ function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | null {
   const span = spanOf(leg);
   const leftS = firstCrossing(facts, span, lowC, 'down') ?? span.toS;
   const hangS = leftS - span.fromS;
-  if (hangS <= HANG_TIMES * usualOffS) return null;
+  if (hangS <= Math.max(HANG_TIMES * usualOffS, usualOffS + 2 * LEAST_EXTRA_S)) return null;
   return toFinding(leg, facts, { how: 'hangs', hangS, usualOffS });
 }
 
-/** Median of the run's other complete falls; with none, from the heating leg before. */
+/**
+ * The off-time of the run's cleanest fall from a like peak: once a coil is grounded most falls may be slow, so that a
+ * median would not be a clean one. With none, from the heating leg before.
+ */
 function usualOff(leg: RunLeg, facts: RunFacts, rating: Rating): number | null {
-  const others = completeFalls(facts).filter((other) => other !== leg);
-  if (others.length > 0) return median(others.map(({ from, to }) => to.timeS - from.timeS));
+  const others = completeFalls(facts).filter((other) => other !== leg && isAlike(leg, other));
+  if (others.length > 0) return Math.min(...others.map(({ from, to }) => to.timeS - from.timeS));
   const heating = facts.legs[facts.legs.indexOf(leg) - 1];
   const { roomC } = facts;
   if (!heating?.fit || roomC === null || roomC >= rating.closesC) return null;
@@ -80,36 +93,41 @@ function completeFalls({ legs }: RunFacts): RunLeg[] {
   );
 }
 
+function isAlike(leg: RunLeg, other: RunLeg): boolean {
+  return Math.abs(leg.from.tempC - other.from.tempC) <= ALIKE_PEAKS_K;
+}
+
 function fallsSlowly(leg: RunLeg, facts: RunFacts): Finding | null {
   const others = facts.legs.filter(
     (other) =>
       other !== leg &&
       other.kind === 'cooling' &&
       other.from.turnedBy === 'machine' &&
+      isAlike(leg, other) &&
       !isDisturbed(other, facts),
   );
-  const rates = others.flatMap((other) => comparedFalls(leg, other, facts));
-  if (rates.length === 0) return null;
-  const times = quantile(
-    rates.map(({ times }) => times),
-    0.5,
+  const compared = others.flatMap((other) => [
+    ...comparedFalls(leg, other, facts),
+    ...comparedWholes(leg, other),
+  ]);
+  const cleanest = compared.reduce<(typeof compared)[number] | null>(
+    (best, one) => (best && best.times >= one.times ? best : one),
+    null,
   );
-  const leastExtraS = Math.min(...rates.map(({ extraS }) => extraS));
   // Crossings of a coarse record are known to about half its spacing each.
-  if (times < SLOW_TIMES || leastExtraS < 1.5 * facts.spacingS) return null;
-  const first = rates[0]!;
+  const leastExtraS = Math.max(LEAST_EXTRA_S, 2 * facts.spacingS);
+  if (!cleanest || cleanest.times < SLOW_TIMES || cleanest.extraS < leastExtraS) return null;
   return toFinding(leg, facts, {
     how: 'falls-slowly',
-    fallRateKPerS: first.spanK / first.ownS,
-    usualRateKPerS: (first.spanK / first.ownS) * times,
-    shareOfUsualRate: 1 / times,
-    atC: first.middleC,
+    fallRateKPerS: cleanest.spanK / cleanest.ownS,
+    usualRateKPerS: (cleanest.spanK / cleanest.ownS) * cleanest.times,
+    shareOfUsualRate: 1 / cleanest.times,
+    atC: cleanest.middleC,
   });
 }
 
 /** How much longer a fall takes than another through the span that both pass clear of their corners. */
 function comparedFalls(leg: RunLeg, other: RunLeg, facts: RunFacts) {
-  if (Math.abs(leg.from.tempC - other.from.tempC) > ALIKE_PEAKS_K) return [];
   const highC = Math.min(leg.from.tempC, other.from.tempC);
   const lowC = Math.max(leg.to.tempC, other.to.tempC);
   const topC = highC - 0.2 * (highC - lowC);
@@ -117,11 +135,22 @@ function comparedFalls(leg: RunLeg, other: RunLeg, facts: RunFacts) {
   if (topC - footC < LEAST_SPAN_K) return [];
   const ownS = fallTime(leg, facts, topC, footC);
   const otherS = fallTime(other, facts, topC, footC);
-  if (ownS === null || otherS === null || otherS <= 0) return [];
+  if (ownS === null || otherS === null || otherS < LEAST_READINGS * facts.spacingS) return [];
   const spanK = topC - footC;
   return [
     { times: ownS / otherS, extraS: ownS - otherS, ownS, spanK, middleC: (topC + footC) / 2 },
   ];
+}
+
+/** The same of two whole falls between like turns: the turns are located better than a coarse record crosses levels. */
+function comparedWholes(leg: RunLeg, other: RunLeg) {
+  const whole = leg.to.turnedBy === 'machine' && other.to.turnedBy === 'machine';
+  if (!whole || Math.abs(leg.to.tempC - other.to.tempC) > ALIKE_PEAKS_K) return [];
+  const ownS = leg.to.timeS - leg.from.timeS;
+  const otherS = other.to.timeS - other.from.timeS;
+  const spanK = leg.from.tempC - leg.to.tempC;
+  const middleC = (leg.from.tempC + leg.to.tempC) / 2;
+  return [{ times: ownS / otherS, extraS: ownS - otherS, ownS, spanK, middleC }];
 }
 
 function fallTime(leg: RunLeg, facts: RunFacts, topC: number, footC: number): number | null {
@@ -147,9 +176,22 @@ function levelsInBand(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | n
   const { lowC, highC, highEndC } = bandOf('cut-out', rating);
   const uK = totalU(facts, to);
   const inBand = knee.tempC + uK >= lowC && knee.tempC - uK <= highC;
-  const slowed = knee.slopeAfterKPerS < 0.5 * knee.slopeBeforeKPerS;
+  const slowed =
+    knee.slopeBeforeKPerS > RISING_K_PER_S && knee.slopeAfterKPerS < 0.5 * knee.slopeBeforeKPerS;
   const level = fit.asymptoteC - to.tempC < LEVEL_K && to.tempC < highEndC;
   if (!inBand || !slowed || !level || to.timeS - knee.timeS < SETTLED_S) return null;
+  return toFinding(leg, facts, { how: 'levels-off' });
+}
+
+/** After a cut-out the exhaust turned up again well above any reset, and stays: heat that no reset brought back. */
+function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | null {
+  const { from, to } = leg;
+  if (from.turnedBy !== 'machine' || to.turnedBy !== 'end' || leg.hasGap) return null;
+  const ownC = facts.resets.filter(({ timeS }) => timeS < from.timeS).map(({ tempC }) => tempC);
+  const highestResetC = Math.max(bandOf('reset', rating).highC, ...ownC);
+  const above = from.tempC - totalU(facts, from) > highestResetC + ALIKE_PEAKS_K;
+  if (!above || to.timeS - from.timeS < SETTLED_S) return null;
+  if (to.tempC > bandOf('cut-out', rating).highEndC) return null;
   return toFinding(leg, facts, { how: 'levels-off' });
 }
 

@@ -1,0 +1,21 @@
+/**
+ * `npm run bench` runs every bench, `npm run bench -- accuracy 5` one of them with its own arguments.
+ * A bench is a folder or file here that exports `bench(args)` and prints its table.
+ */
+const BENCHES: Record<string, () => Promise<{ bench: (args: string[]) => void | Promise<void> }>> =
+  {
+    accuracy: () => import('./accuracy/accuracy.ts'),
+  };
+
+async function run([asked, ...args]: string[]): Promise<void> {
+  for (const name of asked === undefined ? Object.keys(BENCHES) : [asked]) {
+    const load = BENCHES[name];
+    if (!load) throw new Error(`no bench "${name}"; there are ${Object.keys(BENCHES).join(', ')}`);
+    const { bench } = await load();
+    await bench(args);
+  }
+}
+
+await run(process.argv.slice(2));
+
+export {};
