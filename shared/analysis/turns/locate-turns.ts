@@ -21,6 +21,7 @@ import {
   type LegShape,
   type SolvedLegs,
 } from './lagged-legs.ts';
+import { locateOneByOne, type Lesson } from './locate-one-by-one.ts';
 import { planWindows, type FitWindow } from './plan-windows.ts';
 
 /** A turn as located: expanded uncertainties, k = 2. */
@@ -48,6 +49,9 @@ const LEAST_NOISE_SHARE = 0.1;
 /** A switch instant less certain than this share of the leg after it is not shown by the record. */
 const MOST_SWITCH_U = 0.35;
 
+/** Beyond this many turns only some are fitted jointly; the others one by one, with what those taught. */
+const MANY_TURNS = 60;
+
 /**
  * Locates turns by fitting lagged first-order legs through all of them: the temperature and time of the
  * noise-free extreme, and where the slope broke before it.
@@ -66,17 +70,33 @@ export function locateTurns(
   noiseK: number,
 ): (LocatedTurn | null)[] {
   const edgesS = [startS, ...turns.map((turn) => turn.timeS), endS];
-  const located: (LocatedTurn | null)[] = [];
+  const windows = planWindows(edgesS);
+  const located = new Array<LocatedTurn | null>(turns.length).fill(null);
+  const isMany = turns.length > MANY_TURNS && windows.length > 4;
+  const jointly = isMany ? spreadOut(windows.length) : windows.map((_, i) => i);
+  const lessons: Lesson[] = [];
   let shared: Float64Array | null = null;
-  for (const window of planWindows(edgesS)) {
+  for (const i of jointly) {
+    const window = windows[i]!;
     const problem = buildProblem(view, turns, window, noiseK, shared);
-    const fit: FittedLegs | null = problem && fitLegs(problem);
+    const fit: FittedLegs | null = problem && fitLegs(problem.task);
     for (let turn = window.readFrom; turn < window.readTo; turn++) {
-      located.push(fit && readTurn(fit, turn - window.from, turns[turn - 1]!.kind));
+      located[turn - 1] = fit && readTurn(fit, turn - window.from, turns[turn - 1]!.kind);
     }
-    if (fit && window.to - window.from > 2) shared = fit.parameters.slice(0, SHARED);
+    if (!fit || !problem || window.to - window.from <= 2) continue;
+    if (!isMany) shared = fit.parameters.slice(0, SHARED);
+    lessons.push({ window: i, fit, valueNoiseK: fit.noiseK * Math.sqrt(problem.averaged) });
+  }
+  if (isMany && lessons.length > 0) {
+    locateOneByOne(view, turns, edgesS, windows, lessons, located);
   }
   return located;
+}
+
+/** The first windows, two inside and the last: what changes over a long record shows. */
+function spreadOut(count: number): number[] {
+  const places = [0, 1, Math.floor(count / 3), Math.floor((2 * count) / 3), count - 1];
+  return [...new Set(places)];
 }
 
 function buildProblem(
@@ -85,7 +105,7 @@ function buildProblem(
   window: FitWindow,
   noiseK: number,
   shared: Float64Array | null,
-): LegProblem | null {
+): { task: LegProblem; averaged: number } | null {
   const own = turns.slice(window.from - 1, window.to - 1);
   const values = gather(view, window, own.length + 1);
   if (values.timesS.length < 2 * own.length + 3) return null;
@@ -135,13 +155,9 @@ function buildProblem(
   swings.forEach((swing, leg) => {
     looseness[placeOfRamp(shape, leg)] = RAMP_SHARE * Math.max(swing, 0.3 * greatK);
   });
-  return {
-    shape,
-    ...values,
-    start,
-    looseness,
-    leastNoiseK: Math.max((LEAST_NOISE_SHARE * noiseK) / Math.sqrt(values.usual), 1e-3),
-  };
+  const { timesS, tempsC, weights, averaged } = values;
+  const leastNoiseK = Math.max((LEAST_NOISE_SHARE * noiseK) / Math.sqrt(averaged), 1e-3);
+  return { task: { shape, timesS, tempsC, weights, start, looseness, leastNoiseK }, averaged };
 }
 
 /** The window's values, averaged where there are more than a leg needs. */
@@ -170,7 +186,7 @@ function gather(view: BinnedView, window: FitWindow, legs: number) {
     timesS: Float64Array.from(timesS),
     tempsC: Float64Array.from(tempsC),
     weights: Float64Array.from(weights),
-    usual: each,
+    averaged: each,
   };
 }
 
