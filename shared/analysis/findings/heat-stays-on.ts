@@ -2,7 +2,8 @@ import type { Evidence, Finding } from '../analysis.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
-import { firstCrossing, marksWithin, spanOf, totalU } from './trace.ts';
+import { median } from '../statistics/quantile.ts';
+import { firstCrossing, marksWithin, spanOf, spanWithTail, totalU } from './trace.ts';
 
 /** Clean off-times for which a fall may hang above the reset band. */
 const HANG_TIMES = 3;
@@ -40,7 +41,10 @@ export function findHeatStaysOn(facts: RunFacts): Finding | null {
   if (!rating) return null;
   for (const leg of facts.legs) {
     if (leg.kind === 'heating') {
-      const level = levelsInBand(leg, facts, rating) ?? risesAgain(leg, facts, rating);
+      const level =
+        levelsInBand(leg, facts, rating) ??
+        risesAgain(leg, facts, rating) ??
+        staysAtTop(leg, facts, rating);
       if (level) return level;
     } else if (leg.from.turnedBy === 'machine' && !isDisturbed(leg, facts)) {
       const found =
@@ -66,7 +70,7 @@ function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | null {
   const { lowC } = bandOf('reset', rating);
   const usualOffS = usualOff(leg, facts, rating);
   if (usualOffS === null || leg.from.tempC <= lowC) return null;
-  const span = spanOf(leg);
+  const span = spanWithTail(leg, facts);
   const leftS = firstCrossing(facts, span, lowC, 'down') ?? span.toS;
   const hangS = leftS - span.fromS;
   if (hangS <= Math.max(HANG_TIMES * usualOffS, usualOffS + 2 * LEAST_EXTRA_S)) return null;
@@ -160,10 +164,9 @@ function fallTime(leg: RunLeg, facts: RunFacts, topC: number, footC: number): nu
 }
 
 function levelsOff(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | null {
-  const { fit, from, to } = leg;
+  const { fit, to } = leg;
   if (!fit || to.turnedBy !== 'end') return null;
-  const lastedS = to.timeS - from.timeS;
-  if (lastedS < Math.max(SETTLED_S, fit.tauS)) return null;
+  if (lasted(leg, facts) < Math.max(SETTLED_S, fit.tauS)) return null;
   const lowestC = fit.asymptoteC - 2 * fit.asymptoteErrorK - totalU(facts, to);
   if (lowestC <= bandOf('reset', rating).lowC) return null;
   return toFinding(leg, facts, { how: 'levels-off' });
@@ -179,7 +182,8 @@ function levelsInBand(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | n
   const slowed =
     knee.slopeBeforeKPerS > RISING_K_PER_S && knee.slopeAfterKPerS < 0.5 * knee.slopeBeforeKPerS;
   const level = fit.asymptoteC - to.tempC < LEVEL_K && to.tempC < highEndC;
-  if (!inBand || !slowed || !level || to.timeS - knee.timeS < SETTLED_S) return null;
+  if (!inBand || !slowed || !level || spanWithTail(leg, facts).toS - knee.timeS < SETTLED_S)
+    return null;
   return toFinding(leg, facts, { how: 'levels-off' });
 }
 
@@ -190,16 +194,34 @@ function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | nul
   const ownC = facts.resets.filter(({ timeS }) => timeS < from.timeS).map(({ tempC }) => tempC);
   const highestResetC = Math.max(bandOf('reset', rating).highC, ...ownC);
   const above = from.tempC - totalU(facts, from) > highestResetC + ALIKE_PEAKS_K;
-  if (!above || to.timeS - from.timeS < SETTLED_S) return null;
+  if (!above || lasted(leg, facts) < SETTLED_S) return null;
   if (to.tempC > bandOf('cut-out', rating).highEndC) return null;
   return toFinding(leg, facts, { how: 'levels-off' });
 }
 
-function toFinding(leg: RunLeg, { roomC }: RunFacts, seen: Evidence): Finding {
+/** The last rise reached the machine's own cut-outs and stayed there, under the allowance, with none. */
+function staysAtTop(leg: RunLeg, facts: RunFacts, rating: Rating): Finding | null {
+  const { to } = leg;
+  const own = facts.cutOuts.filter(({ timeS }) => timeS < leg.to.timeS);
+  if (own.length === 0 || to.turnedBy !== 'end' || leg.hasGap) return null;
+  const ownC = median(own.map(({ tempC }) => tempC));
+  const span = spanWithTail(leg, facts);
+  const reachedS = firstCrossing(facts, span, ownC, 'up');
+  if (reachedS === null || span.toS - reachedS < SETTLED_S) return null;
+  if (to.tempC > bandOf('cut-out', rating).highEndC) return null;
+  return toFinding(leg, facts, { how: 'levels-off' });
+}
+
+/** How long a leg lasted, a level stretch after it included, s. */
+function lasted(leg: RunLeg, facts: RunFacts): number {
+  const { fromS, toS } = spanWithTail(leg, facts);
+  return toS - fromS;
+}
+
+function toFinding(leg: RunLeg, facts: RunFacts, seen: Evidence): Finding {
   return {
     code: 'heat-stays-on',
-    fromS: leg.from.timeS,
-    toS: leg.to.timeS,
+    ...spanWithTail(leg, facts),
     evidence: {
       hangS: null,
       usualOffS: null,
@@ -210,7 +232,7 @@ function toFinding(leg: RunLeg, { roomC }: RunFacts, seen: Evidence): Finding {
       ...seen,
       asymptoteC: leg.fit?.asymptoteC ?? null,
       asymptoteUK: leg.fit ? 2 * leg.fit.asymptoteErrorK : null,
-      roomC,
+      roomC: facts.roomC,
     },
   };
 }

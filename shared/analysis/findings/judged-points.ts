@@ -2,6 +2,12 @@ import type { Point } from '../analysis.ts';
 import type { RunFacts } from '../run-facts.ts';
 import { totalUncertainty } from '../judge-point.ts';
 
+/**
+ * How far sound points differ anyway, expanded, K (2 °F). Points known to better than this weigh alike in a mean, and
+ * one that the record hardly shows does not spoil it.
+ */
+const OWN_SPREAD_K = 2 / 1.8;
+
 /** Judged points of a kind taken together. */
 export type JudgedPoints = {
   points: Point[];
@@ -16,10 +22,13 @@ export type JudgedPoints = {
 export function judgedPoints(facts: RunFacts, kind: Point['kind']): JudgedPoints | null {
   const points = (kind === 'cut-out' ? facts.cutOuts : facts.resets).filter(({ judged }) => judged);
   if (points.length === 0) return null;
-  const meanUK = Math.sqrt(points.reduce((sum, { uK }) => sum + uK * uK, 0)) / points.length;
+  const weights = points.map(({ uK }) => 1 / (uK * uK + OWN_SPREAD_K * OWN_SPREAD_K));
+  const total = weights.reduce((sum, weight) => sum + weight, 0);
+  const shares = weights.map((weight) => weight / total);
+  const meanUK = Math.sqrt(points.reduce((sum, { uK }, i) => sum + (shares[i]! * uK) ** 2, 0));
   return {
     points,
-    meanC: mean(points.map(({ tempC }) => tempC)),
+    meanC: points.reduce((sum, { tempC }, i) => sum + shares[i]! * tempC, 0),
     meanUK,
     meanUTotalK: totalUncertainty(meanUK, facts.input.probe),
   };

@@ -66,3 +66,12 @@ export function marksWithin(
 export function spanOf({ from, to }: RunLeg): { fromS: number; toS: number } {
   return { fromS: from.timeS, toS: to.timeS };
 }
+
+/**
+ * The span of a leg with what the record holds after it: the last extreme lies where the exhaust stopped moving by a
+ * swing, and a level stretch may follow.
+ */
+export function spanWithTail(leg: RunLeg, { series }: RunFacts): { fromS: number; toS: number } {
+  const lastS = series.timesS.at(-1) ?? leg.to.timeS;
+  return { fromS: leg.from.timeS, toS: leg.to.turnedBy === 'end' ? lastS : leg.to.timeS };
+}
