@@ -114,7 +114,6 @@ export const routes: RouteObject[] = [
     ErrorBoundary: RouteError,
     children: [
       page(async () => (await import('./pages/sign-in/sign-in-page.tsx')).SignInPage, 'sign-in'),
-      page(async () => (await import('./pages/customer/customer-page.tsx')).CustomerPage, 'shared'),
       {
         lazy: { Component: async () => (await import('./pages/frame/signed-in.tsx')).SignedIn },
         ErrorBoundary: RouteError,

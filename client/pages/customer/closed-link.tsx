@@ -1,6 +1,6 @@
 import type { ShopToReach } from '../../api/shared-run.ts';
-import { PageHeading } from '../../components/page-heading.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
+import { CustomerHeading } from './customer-heading.tsx';
 import { Phone } from './reach-shop.tsx';
 
 /** A mistyped link, one that is out of date and one that was taken back look the same. */
@@ -11,7 +11,9 @@ export function ClosedLink({ shop, message }: { shop: ShopToReach; message: stri
         <p className="font-gothic text-[20px] font-semibold font-stretch-[108%]">{shop.name}</p>
         <ThemeWord />
       </div>
-      <PageHeading className="pt-8">This link does not open</PageHeading>
+      <div className="pt-6">
+        <CustomerHeading shop={shop.name}>This link does not open</CustomerHeading>
+      </div>
       <p className="max-w-read pt-3 text-lead">{message}</p>
       <p className="max-w-read pt-3 text-lead">
         Ask us for a new one: call <Phone number={shop.phone} />

@@ -1,20 +1,24 @@
 import { useQuery } from '@tanstack/react-query';
-import { useLocation } from 'react-router-dom';
 import { shopToReach, sharedRunQuery } from '../../api/shared-run.ts';
-import { Failed, Waiting } from '../../components/waiting.tsx';
+import { Notice } from '../../components/notice.tsx';
 import { ClosedLink } from './closed-link.tsx';
+import { CustomerHeading } from './customer-heading.tsx';
+import { CustomerKey } from './customer-key.tsx';
 import { CustomerSheet } from './customer-sheet.tsx';
+import { useFragment } from './use-fragment.ts';
 
 /** What the customer sees behind a link. The link's token stands after the #, which no server is ever sent. */
 export function CustomerPage() {
-  const token = useLocation().hash.slice(1);
+  const token = useFragment();
   // A page without a token asks too: the answer says how to reach the shop.
   const shared = useQuery(sharedRunQuery(token === '' ? 'none' : token));
 
   if (shared.isPending) {
     return (
       <main className="mx-auto max-w-letter px-5">
-        <Waiting>Opening…</Waiting>
+        <p role="status" className="words py-6 text-[18px] text-print">
+          Opening…
+        </p>
       </main>
     );
   }
@@ -23,8 +27,9 @@ export function CustomerPage() {
     if (shop) return <ClosedLink shop={shop} message={shared.error.message} />;
     return (
       <main className="mx-auto max-w-letter px-5">
-        <h1 className="pt-6 font-serif text-page">The page did not open</h1>
-        <Failed error={shared.error} onRetry={shared.refetch} />
+        <CustomerHeading shop="Fusekeeper">The page did not open</CustomerHeading>
+        <Notice kind="stop" role="alert" head={shared.error.message} className="my-6" />
+        <CustomerKey onPress={() => void shared.refetch()}>Try again</CustomerKey>
       </main>
     );
   }

@@ -1,13 +1,13 @@
 import type { SharedRun } from '#shared/schemas/shares.ts';
 import { wordForCustomer, type WordedForCustomer } from '#shared/wording/word-for-customer.ts';
 import { formatStep } from '#shared/wording/format.ts';
-import { Key } from '../../components/key.tsx';
-import { PageHeading } from '../../components/page-heading.tsx';
 import { DoneSign, NoteSign, StopSign } from '../../components/signs.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { quoted } from '../../format/job-words.ts';
 import { longDateWords } from '../../format/when.ts';
 import { CustomerChart } from './customer-chart.tsx';
+import { CustomerHeading } from './customer-heading.tsx';
+import { CustomerKey } from './customer-key.tsx';
 import { Phone } from './reach-shop.tsx';
 
 /** One run for the person whose machine it is; one sheet of paper when printed. */
@@ -20,9 +20,7 @@ export function CustomerSheet({ shared }: { shared: SharedRun }) {
       className="mx-auto max-w-letter px-5 pb-12 print:max-w-none print:p-0 print:text-[13px]"
     >
       <ShopHead shared={shared} />
-      <PageHeading className="pt-2 desk:text-page-desk print:text-[27px]">
-        {worded.heading}
-      </PageHeading>
+      <CustomerHeading shop={shared.shop.name}>{worded.heading}</CustomerHeading>
       <SafeTonight safe={worded.safeTonight} />
       <div className="grid gap-2 text-lead print:gap-1 print:text-[14px] print:leading-[1.4]">
         {shared.complaint && <p>You told us: {quoted(shared.complaint)}</p>}
@@ -35,9 +33,7 @@ export function CustomerSheet({ shared }: { shared: SharedRun }) {
       </div>
       <FootNotes shared={shared} />
       <div className="grid gap-2 pt-6 desk:flex print:hidden">
-        <Key size="site" onClick={() => window.print()}>
-          Print or save as PDF
-        </Key>
+        <CustomerKey onPress={() => window.print()}>Print or save as PDF</CustomerKey>
       </div>
     </main>
   );
