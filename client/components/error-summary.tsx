@@ -20,6 +20,16 @@ function goToField(event: React.MouseEvent, name: string) {
   control?.focus({ preventScroll: true });
 }
 
+const IN_TITLE = 'Error: ';
+
+/** Puts "Error: " before the window's title; what it gives back takes it off again. */
+function sayInTitle() {
+  if (!document.title.startsWith(IN_TITLE)) document.title = `${IN_TITLE}${document.title}`;
+  return () => {
+    if (document.title.startsWith(IN_TITLE)) document.title = document.title.slice(IN_TITLE.length);
+  };
+}
+
 /**
  * What stops a form, above its heading, with the same words as at the fields. It takes the focus each time
  * `attempt` changes while there is something in it.
@@ -30,6 +40,7 @@ export function ErrorSummary({ problems, attempt }: { problems: FormProblem[]; a
   useEffect(() => {
     if (isShown) summary.current?.focus();
   }, [isShown, attempt]);
+  useEffect(() => (isShown ? sayInTitle() : undefined), [isShown]);
 
   if (!isShown) return null;
   return (

@@ -1,9 +1,27 @@
 import type { ReactNode } from 'react';
-import { Link, NavLink } from 'react-router-dom';
+import { Link, useLocation } from 'react-router-dom';
 import { FuseMark } from './signs.tsx';
 import { ThemeWord } from './theme-word.tsx';
 
-export type Place = { to: string; name: string };
+/** A place of the application; `covers` names the addresses that belong to it beside its own. */
+export type Place = { to: string; name: string; covers?: string[] };
+
+function isUnder(pathname: string, to: string) {
+  return pathname === to || pathname.startsWith(`${to}/`);
+}
+
+/** Which place an address belongs to; undefined for one of none. */
+export function placeOf(pathname: string, places: Place[]): Place | undefined {
+  return places.find(({ to, covers = [] }) =>
+    [to, ...covers].some((address) => isUnder(pathname, address)),
+  );
+}
+
+/** "page" on the place itself, "true" on what belongs to it. */
+function currentWord(pathname: string, place: Place, current: Place | undefined) {
+  if (place.to !== current?.to) return undefined;
+  return pathname === place.to ? 'page' : 'true';
+}
 
 export function SkipLink() {
   return (
@@ -13,16 +31,17 @@ export function SkipLink() {
   );
 }
 
-function DeskPlace({ to, name }: Place) {
+function DeskPlace({ place, places }: { place: Place; places: Place[] }) {
+  const { pathname } = useLocation();
+  const current = currentWord(pathname, place, placeOf(pathname, places));
   return (
-    <NavLink
-      to={to}
-      className={({ isActive }) =>
-        `relative flex items-center px-4 font-gothic text-[17px] leading-none font-stretch-[98%] no-underline ${isActive ? 'font-bold text-ink after:absolute after:inset-x-4 after:-bottom-px after:h-[5px] after:bg-ink' : 'font-medium text-print'}`
-      }
+    <Link
+      to={place.to}
+      aria-current={current}
+      className={`relative flex items-center px-4 font-gothic text-[17px] leading-none font-stretch-[98%] no-underline ${current ? 'font-bold text-ink after:absolute after:inset-x-4 after:-bottom-px after:h-[5px] after:bg-ink' : 'font-medium text-print'}`}
     >
-      {name}
-    </NavLink>
+      {place.name}
+    </Link>
   );
 }
 
@@ -49,7 +68,7 @@ export function DeskHead({
       </Link>
       <nav aria-label="Main" className="hidden desk:flex">
         {places.map((place) => (
-          <DeskPlace key={place.to} {...place} />
+          <DeskPlace key={place.to} place={place} places={places} />
         ))}
       </nav>
       <div className="ml-auto flex items-center gap-5">
@@ -66,30 +85,34 @@ export function DeskHead({
 }
 
 const PHONE_PLACES: Place[] = [
-  { to: '/rounds', name: 'Rounds' },
-  { to: '/jobs', name: 'Jobs' },
-  { to: '/homes', name: 'Homes' },
-  { to: '/more', name: 'More' },
+  { to: '/rounds', name: 'Rounds', covers: ['/visits'] },
+  { to: '/jobs', name: 'Jobs', covers: ['/runs'] },
+  { to: '/homes', name: 'Homes', covers: ['/machines', '/customers'] },
+  { to: '/more', name: 'More', covers: ['/ratings', '/probes', '/shop', '/account'] },
 ];
 
-/** Phone: four keys on the deck. Pages without a key of their own stand under More. */
-export function PhoneTabs({ isMore = false }: { isMore?: boolean }) {
+/** Phone: four keys on the deck. */
+export function PhoneTabs() {
+  const { pathname } = useLocation();
+  const here = placeOf(pathname, PHONE_PLACES);
   return (
     <nav
-      aria-label="Main, phone"
+      aria-label="Main"
       className="sticky bottom-0 z-10 grid grid-cols-4 gap-2 border-t-bar border-ink bg-deck px-3 pt-2.5 pb-[max(14px,env(safe-area-inset-bottom))] desk:hidden print:hidden"
     >
-      {PHONE_PLACES.map(({ to, name }) => (
-        <NavLink
-          key={to}
-          to={to}
-          className={({ isActive }) =>
-            `grid min-h-14 place-items-center rounded-key border-line font-gothic text-press leading-none font-stretch-[96%] no-underline ${isActive || (isMore && to === '/more') ? 'border-ink bg-ink text-paper' : 'border-print bg-key'}`
-          }
-        >
-          {name}
-        </NavLink>
-      ))}
+      {PHONE_PLACES.map((place) => {
+        const current = currentWord(pathname, place, here);
+        return (
+          <Link
+            key={place.to}
+            to={place.to}
+            aria-current={current}
+            className={`grid min-h-14 place-items-center rounded-key border-line font-gothic text-press leading-none font-stretch-[96%] no-underline ${current ? 'border-ink bg-ink text-paper' : 'border-print bg-key'}`}
+          >
+            {place.name}
+          </Link>
+        );
+      })}
     </nav>
   );
 }

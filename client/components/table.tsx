@@ -46,7 +46,7 @@ export function Td({
 }: TdHTMLAttributes<HTMLTableCellElement> & Side) {
   return (
     <td
-      className={`border-b border-hair py-[9px] pr-3 align-top last:pr-0 ${figure ? 'fig text-right' : ''} ${className}`}
+      className={`border-b border-hair py-[9px] pr-3 align-middle last:pr-0 ${figure ? 'fig text-right' : ''} ${className}`}
       {...td}
     />
   );

@@ -25,7 +25,8 @@ export function useMachineForm(
   save: (machine: NewMachine) => Promise<unknown>,
 ) {
   const defaultValues = { ...BLANK, ...machine };
-  return useCheckedForm({ schema: newMachineSchema, defaultValues, save });
+  const figures = { ratedVolts: 'the volts', ratedWatts: 'the watts' };
+  return useCheckedForm({ schema: newMachineSchema, defaultValues, save, figures });
 }
 
 const FUEL_OPTIONS = FUELS.map((fuel) => ({ value: fuel, words: fuel }));

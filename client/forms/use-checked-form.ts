@@ -19,6 +19,8 @@ type CheckedFormOptions<In extends FieldValues, Out> = {
   save: (values: Out) => Promise<unknown>;
   /** Where a field is called otherwise by the server: its name there to its name here. */
   fieldNames?: Record<string, string>;
+  /** What a figure is, so that "Enter a number" says of what: "the temperature it opens at". */
+  figures?: Partial<Record<string, string>>;
 };
 
 /**
@@ -30,6 +32,7 @@ export function useCheckedForm<In extends FieldValues, Out>({
   defaultValues,
   save,
   fieldNames = {},
+  figures = {},
 }: CheckedFormOptions<In, Out>) {
   const form = useForm<In, unknown, Out>({
     resolver: zodResolver(schema),
@@ -56,6 +59,7 @@ export function useCheckedForm<In extends FieldValues, Out>({
     () => setRefusal(null),
   );
 
+  const problems = problemsOf(errors, refusal).map((problem) => sayOfWhat(problem, figures));
   return {
     register: form.register,
     setValue: form.setValue,
@@ -65,9 +69,9 @@ export function useCheckedForm<In extends FieldValues, Out>({
     handleSubmit,
     isSaving: isSubmitting,
     attempt: submitCount,
-    problems: problemsOf(errors, refusal),
+    problems,
     /** What is wrong with a field, in words. */
-    fault: (name: Path<In>) => messageAt(errors, name),
+    fault: (name: Path<In>) => problems.find((problem) => problem.name === name)?.message,
   };
 }
 
@@ -94,6 +98,10 @@ function listFaults(errors: FieldErrors, prefix: string): FormProblem[] {
   });
 }
 
-function messageAt(errors: FieldErrors, name: string): string | undefined {
-  return problemsOf(errors, null).find((problem) => problem.name === name)?.message;
+const NO_NUMBER = 'Enter a number';
+
+function sayOfWhat(problem: FormProblem, figures: Partial<Record<string, string>>): FormProblem {
+  const figure = problem.name === null ? undefined : figures[problem.name];
+  if (problem.message !== NO_NUMBER || figure === undefined) return problem;
+  return { ...problem, message: `Enter ${figure} as a number` };
 }

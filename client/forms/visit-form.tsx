@@ -63,7 +63,7 @@ export function VisitCells({ form }: { form: FormPart<keyof TypedVisit> }) {
       <TextField label="From" type="time" step={300} {...register('from')} error={fault('from')} />
       <TextField label="To" type="time" step={300} {...register('to')} error={fault('to')} />
       <TextAreaField
-        label="For the technician: what to bring, what to know"
+        label="What to bring, what to know"
         {...register('notes')}
         error={fault('notes')}
         rows={2}

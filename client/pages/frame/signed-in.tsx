@@ -3,21 +3,10 @@ import { Navigate, Outlet, useLocation, useMatches } from 'react-router-dom';
 import type { Session } from '#shared/schemas/people.ts';
 import { isSignedOut } from '../../api/query-client.ts';
 import { sessionQuery } from '../../api/session.ts';
-import { DeskHead, PhoneTabs, SkipLink, type Place } from '../../components/frame.tsx';
+import { DeskHead, PhoneTabs, SkipLink } from '../../components/frame.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
+import { placesFor } from './places-for.ts';
 import { SignInAgain } from './sign-in-again.tsx';
-
-const PLACES: Place[] = [
-  { to: '/rounds', name: 'Rounds' },
-  { to: '/jobs', name: 'Jobs' },
-  { to: '/homes', name: 'Homes' },
-  { to: '/ratings', name: 'Ratings' },
-];
-
-/** The head of the desk names only what the role may open. */
-function placesOf({ person }: Session): Place[] {
-  return person.role === 'owner' ? [...PLACES, { to: '/shop', name: 'Shop' }] : PLACES;
-}
 
 function whoOf({ person }: Session) {
   return person.role === 'technician' ? person.name : `${person.name}, ${person.role}`;
@@ -57,18 +46,15 @@ export function SignedIn() {
   );
 }
 
-const OWN_KEY = /^\/(rounds|jobs|homes|more)(\/|$)/;
-
 function Frame({ session, isSite }: { session: Session; isSite: boolean }) {
-  const { pathname } = useLocation();
   return (
     <div className="flex min-h-dvh flex-col">
       <SkipLink />
-      <DeskHead places={placesOf(session)} who={whoOf(session)} isSite={isSite} />
+      <DeskHead places={placesFor(session.person.role)} who={whoOf(session)} isSite={isSite} />
       <div className="flex-1">
         <Outlet context={session} />
       </div>
-      {!isSite && <PhoneTabs isMore={!OWN_KEY.test(pathname)} />}
+      {!isSite && <PhoneTabs />}
       <SignInAgain email={session.person.email} />
     </div>
   );

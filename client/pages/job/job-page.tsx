@@ -68,6 +68,9 @@ function JobSheet({ job }: { job: Job }) {
   );
 }
 
+/** A link among facts: as high as a finger, without parting the lines. */
+const IN_LINE = '-my-3 inline-flex min-h-touch items-center desk:-my-2 desk:min-h-10';
+
 function countWords(count: number) {
   return count === 1 ? '1 visit' : `${count} visits`;
 }
@@ -98,10 +101,7 @@ function TitleBlock({ job, zone }: { job: Job; zone: string }) {
             )}
           </Fact>
           <Fact name="Where">
-            <Link
-              to={`/homes/${home.id}`}
-              className="inline-flex min-h-touch items-center desk:min-h-10"
-            >
+            <Link to={`/homes/${home.id}`} className={IN_LINE}>
               {home.address}
             </Link>
             {home.town && (
@@ -112,10 +112,7 @@ function TitleBlock({ job, zone }: { job: Job; zone: string }) {
             )}
           </Fact>
           <Fact name="Machine">
-            <Link
-              to={`/machines/${machine.id}`}
-              className="inline-flex min-h-touch items-center desk:min-h-10"
-            >
+            <Link to={`/machines/${machine.id}`} className={IN_LINE}>
               {machineWords(machine)}
             </Link>
             {machine.serial && (
@@ -132,7 +129,7 @@ function TitleBlock({ job, zone }: { job: Job; zone: string }) {
           <CallbackNotice
             head={`Callback, ${daysBetween(callsBack.takenAtMs, job.takenAtMs, zone)} days`}
           >
-            <Link to={`/jobs/${callsBack.id}`} className="word px-0">
+            <Link to={`/jobs/${callsBack.id}`} className="word">
               Job {callsBack.number}, taken {dateWords(callsBack.takenAtMs, zone, nowMs)}
             </Link>
           </CallbackNotice>
@@ -144,10 +141,7 @@ function TitleBlock({ job, zone }: { job: Job; zone: string }) {
 
 function PhoneLink({ phone }: { phone: string }) {
   return (
-    <a
-      href={`tel:${phone.replaceAll(/[^+\d]/g, '')}`}
-      className="fig inline-flex min-h-touch items-center desk:min-h-10"
-    >
+    <a href={`tel:${phone.replaceAll(/[^+\d]/g, '')}`} className={`fig ${IN_LINE}`}>
       {phone}
     </a>
   );

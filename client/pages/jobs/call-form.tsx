@@ -82,8 +82,7 @@ export function CallForm({ machine }: { machine: Machine }) {
                 <option value="">No, this is a new complaint</option>
                 {earlier.map((job) => (
                   <option key={job.id} value={job.id}>
-                    {job.number}, {dateWords(job.takenAtMs, zone, nowMs)},{' '}
-                    {quoted(job.complaint)}
+                    {job.number}, {dateWords(job.takenAtMs, zone, nowMs)}, {quoted(job.complaint)}
                   </option>
                 ))}
               </SelectField>

@@ -54,7 +54,11 @@ function Seek({ filter, onChange, mayPickTechnician }: SeekProps) {
   return (
     <search>
       <Cells
-        className={`grid-cols-2 ${mayPickTechnician ? 'sm:grid-cols-3 wide:grid-cols-[minmax(0,1fr)_160px_180px_150px]' : 'wide:grid-cols-[minmax(0,1fr)_160px_150px]'}`}
+        className={
+          mayPickTechnician
+            ? 'grid-cols-3 wide:grid-cols-[minmax(0,1fr)_160px_180px_150px]'
+            : 'grid-cols-2 wide:grid-cols-[minmax(0,1fr)_160px_150px]'
+        }
       >
         <FindCell find={filter.find} onChange={(find) => onChange('find', find)} />
         <SelectField
@@ -83,7 +87,6 @@ function Seek({ filter, onChange, mayPickTechnician }: SeekProps) {
           tick="only"
           checked={filter.callbacks === 'yes'}
           onChange={(event) => onChange('callbacks', event.target.checked ? 'yes' : '')}
-          className={mayPickTechnician ? 'col-span-2 sm:col-span-1' : ''}
         />
       </Cells>
     </search>

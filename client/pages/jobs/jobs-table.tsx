@@ -77,7 +77,7 @@ function JobRow({ job, zone }: { job: JobListItem; zone: string }) {
   const { callsBack, lastRun } = job;
   return (
     <tr
-      className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:text-[16.5px] wide:leading-[1.28] wide:*:py-[11px] ${callsBack ? CALLBACK_RULE : ''}`}
+      className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:text-[16.5px] wide:leading-[1.28] wide:*:py-[11px] wide:*:align-top ${callsBack ? CALLBACK_RULE : ''}`}
     >
       <Td className={`fig text-[19px] font-semibold ${PLAIN}`}>
         <Link

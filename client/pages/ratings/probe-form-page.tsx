@@ -60,6 +60,11 @@ function useProbeForm(probe: StoredProbe | null) {
     schema: typedProbeSchema,
     defaultValues: typedProbe(probe, unit, zone),
     fieldNames: { calibratedAtMs: 'calibratedOn' },
+    figures: {
+      accuracy: 'the accuracy',
+      responseS: 'the response time',
+      calibrationU: 'its uncertainty',
+    },
     save: async ({ calibratedOn, ...changed }) => {
       const calibratedAtMs = calibratedOn === '' ? null : instantAt(calibratedOn, '12:00', zone);
       await saveProbe.mutateAsync({ ...changed, calibratedAtMs });

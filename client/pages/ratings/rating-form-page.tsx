@@ -47,6 +47,15 @@ function blankRating(unit: 'F' | 'C'): TypedRating {
   };
 }
 
+const FIGURES = {
+  opens: 'the temperature it opens at',
+  opensTol: 'how far from that it may open',
+  closes: 'the temperature it closes at',
+  closesTol: 'how far from that it may close',
+  overshoot: 'how far the air may run over',
+  undershoot: 'how far the air may run under',
+};
+
 type RatingFormProps = { id: string | null; title: string; rating: TypedRating };
 
 function RatingForm({ id, title, rating }: RatingFormProps) {
@@ -56,6 +65,7 @@ function RatingForm({ id, title, rating }: RatingFormProps) {
     schema: newRatingSchema,
     // An empty figure is null until something stands in its cell; the schema then asks for it.
     defaultValues: rating as NewRating,
+    figures: FIGURES,
     save: async (changed) => {
       await saveRating.mutateAsync(changed);
       await navigate('/ratings');

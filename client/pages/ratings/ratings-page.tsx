@@ -90,16 +90,16 @@ function RatingRow({ rating, mayChange }: { rating: StoredRating; mayChange: boo
   const closes = rating.closes !== null && band(rating.closes, rating.closesTol ?? 0);
   return (
     <tr className="max-desk:grid max-desk:grid-cols-2 max-desk:gap-x-4 max-desk:border-b max-desk:border-hair max-desk:py-2">
-      <Td className={`py-0 text-[18px] font-semibold max-desk:col-span-2 ${CELL}`}>
+      <Td className={`text-[18px] font-semibold max-desk:col-span-2 ${CELL}`}>
         {mayChange ? (
           <Link
             to={`/ratings/${rating.id}`}
-            className="inline-flex min-h-touch items-center desk:min-h-[42px]"
+            className="inline-flex min-h-touch items-center desk:-my-2 desk:min-h-10"
           >
             {rating.name}
           </Link>
         ) : (
-          <span className="inline-flex min-h-[42px] items-center">{rating.name}</span>
+          <span className="inline-flex items-center">{rating.name}</span>
         )}
       </Td>
       <Td className={`max-desk:col-span-2 max-desk:text-print ${CELL}`}>
