@@ -107,7 +107,7 @@ export const SOUND_STORIES: SampleStory[] = [
     machine: { disc: { opensC: fahrenheit(159.9), closesC: fahrenheit(132), lagS: 6 } },
     method: { spacingS: 5, step: 1, noiseK: 0.2 },
     probe: { accuracyF: 4, responseS: 3 },
-    layout: { clock: 'month-first', header: ['Time', 'Vent temperature, F'], digits: 0 },
+    layout: { clock: 'month-first', header: ['Time', 'Vent temperature F'], digits: 0 },
     headline: 'too-close',
     outcome: 'not-proven',
   }),
