@@ -3,6 +3,7 @@ import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 import { createApp } from './app.ts';
+import { seedDemo } from './demo/seed-demo.ts';
 import { clientFiles, clientFromSource } from './http/client-files.ts';
 import { migrate, openDatabase } from './db.ts';
 import { readEnv } from './env.ts';
@@ -30,15 +31,19 @@ async function start(): Promise<void> {
   const server = createServer({ headersTimeout: HEADERS_MS, requestTimeout: REQUEST_MS });
   const pages = env.development ? await clientFromSource(server) : clientFiles();
   const { dataDir, publicUrl, development } = env;
-  server.on(
-    'request',
-    createApp({ db, dataDir, now, workers, publicUrl, secrets, logger, pages, development }),
-  );
+  const parts = { db, dataDir, now, workers, publicUrl, secrets, logger, pages, development };
+  const tokens = env.demo ? await seedDemo(parts) : null;
+  server.on('request', createApp(parts));
 
   server.listen(env.port, env.host);
   // Rejects where the port is taken.
   await once(server, 'listening');
-  process.stdout.write(`Fusekeeper is at ${publicUrl?.href ?? localUrl(server.address())}\n`);
+  const url = publicUrl?.origin ?? localUrl(server.address());
+  process.stdout.write(`Fusekeeper is at ${url}\n`);
+  // Told at the first start and never again: only a hash of it is kept.
+  for (const token of tokens ?? []) {
+    process.stdout.write(`A customer of the demo shop opens ${url}/shared#${token}\n`);
+  }
   const close = () => {
     setTimeout(() => server.closeAllConnections(), CLOSING_MS).unref();
     server.close(() => {
