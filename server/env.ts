@@ -53,3 +53,8 @@ export function readEnv(from: NodeJS.ProcessEnv = process.env) {
     owner: { name: env.OWNER_NAME, email: env.OWNER_EMAIL, password: env.OWNER_PASSWORD },
   };
 }
+
+/** Where the caller of a command stands: npm runs it in the project's folder and keeps the caller's here. */
+export function callerFolder(from: NodeJS.ProcessEnv = process.env): string {
+  return from.INIT_CWD ?? process.cwd();
+}

@@ -1,5 +1,6 @@
 import { writeSync } from 'node:fs';
 import { resolve } from 'node:path';
+import { callerFolder } from '#server/env.ts';
 import { analyseFile } from './analyse-file.ts';
 import { FlagError, parseFlags, type AnalyseFlags } from './analyse-flags.ts';
 import { readMarks } from './analyse-marks.ts';
@@ -7,15 +8,13 @@ import { readMarks } from './analyse-marks.ts';
 const STDOUT = 1;
 const WRONG_FLAGS = 2;
 
-// npm runs a script in the project's folder and keeps the caller's here
-const callerFolder = process.env.INIT_CWD ?? process.cwd();
-
 process.exitCode = main(process.argv.slice(2));
 
 function main(args: string[]): number {
   try {
     const flags = parseFlags(args);
-    const marks = flags.marksFile === null ? [] : readMarks(resolve(callerFolder, flags.marksFile));
+    const marks =
+      flags.marksFile === null ? [] : readMarks(resolve(callerFolder(), flags.marksFile));
     return printAll(flags, marks);
   } catch (error) {
     if (!(error instanceof FlagError)) throw error;
@@ -27,7 +26,7 @@ function main(args: string[]): number {
 function printAll(flags: AnalyseFlags, marks: ReturnType<typeof readMarks>): number {
   let failed = false;
   for (const file of flags.files) {
-    const line = analyseFile(resolve(callerFolder, file), file, flags, marks);
+    const line = analyseFile(resolve(callerFolder(), file), file, flags, marks);
     failed ||= 'error' in line;
     print(`${JSON.stringify(line)}\n`);
   }

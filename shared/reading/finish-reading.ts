@@ -1,4 +1,4 @@
-import { toCelsius, type TemperatureUnit } from '../units.ts';
+import { toCelsius, toKelvinStep, type TemperatureUnit } from '../units.ts';
 import type {
   LogChannel,
   LogColumn,
@@ -14,6 +14,9 @@ import { chooseChannel } from './tidy/choose-channel.ts';
 import { askScale, isPlausible, scaleDivisor } from './tidy/choose-scale.ts';
 import { askUnit, rangeOf } from './tidy/choose-unit.ts';
 import { findSentinels } from './tidy/drop-sentinels.ts';
+
+/** 0.2 °F: two roundings to a tenth. */
+const TWIN_K = toKelvinStep(0.2, 'F');
 
 /** The run's own readings, chosen, with a unit, and free of what stands for "no reading". */
 export type FinishedChannel = {
@@ -34,10 +37,11 @@ export type FinishResult =
 export function finishReading(
   store: RowStore,
   columns: LogColumn[],
+  hasNames: boolean,
   options: ReadOptions,
 ): FinishResult {
   const answers = options.answers ?? {};
-  const choice = chooseChannel(store, columns, options.channel ?? answers.channel);
+  const choice = chooseChannel(store, columns, options.channel ?? answers.channel, hasNames);
   if (choice.kind === 'question') return choice;
   if (choice.kind === 'unknown') {
     const say = columns.map(({ name }) => name).join(', ');
@@ -62,6 +66,7 @@ export function finishReading(
       warning('channel-chosen', { column: column.name, say: choice.others.join(', ') }),
     );
   }
+  warnings.push(...disagreements(store, columns, place));
   const temps = store.temps[place]!.slice(0, store.count);
   const others = otherChannels(store, columns, place, unit);
   return {
@@ -114,11 +119,35 @@ function scale(
     const warnings = divisor > 1 ? [warning('scaled', { say: `${answer} of a degree` })] : [];
     return { kind: 'scaled', warnings };
   }
-  const question = answer === undefined ? askScale(lowest, highest, unit) : null;
+  const question = answer === undefined ? askScale(temps, lowest, highest, unit) : null;
   if (question) return { kind: 'question', question };
   const at = temps.findIndex((temp) => !isPlausible(temp, unit));
   const where = { row: store.rows[at]!, column: column.name, value: String(temps[at]) };
   return { kind: 'problem', problem: problem('out-of-range', where) };
+}
+
+/** The same probe in two units must say the same, but for rounding. */
+function disagreements(store: RowStore, columns: LogColumn[], place: number): ReadWarning[] {
+  const own = columns[place]!;
+  return columns.flatMap((column, other) => {
+    const isTwin = column.unit !== own.unit && bareName(column) === bareName(own);
+    if (!isTwin || !column.unit || !own.unit) return [];
+    for (let i = 0; i < store.count; i++) {
+      const a = toCelsius(store.temps[place]![i]!, own.unit);
+      const b = toCelsius(store.temps[other]![i]!, column.unit);
+      if (Math.abs(a - b) <= TWIN_K || Number.isNaN(b)) continue;
+      const say = `${own.name} and ${column.name}`;
+      return [warning('channels-disagree', { row: store.rows[i]!, say })];
+    }
+    return [];
+  });
+}
+
+function bareName({ name }: LogColumn): string {
+  return name
+    .replace(/[([]?\s*[°º]?\s*\b[FCK]\b\s*[)\]]?$/i, '')
+    .trim()
+    .toLowerCase();
 }
 
 function otherChannels(

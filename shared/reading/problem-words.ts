@@ -150,7 +150,10 @@ export const WARNING_WORDS = {
     `${say === 1 ? '1 row' : `${say} rows`} could not be read, the first is row ${row}.`,
   gap: ({ row, say }) => `Nothing was recorded for ${say} before row ${row}.`,
   'more-gaps': ({ say }) => `${say} more gaps.`,
-  'header-repeated': ({ row, say }) => `The header comes again ${say} times, first in row ${row}.`,
+  'header-repeated': ({ row, say }) =>
+    say === 1
+      ? `The header comes again once, in row ${row}.`
+      : `The header comes again ${say} times, first in row ${row}.`,
   'units-converted': ({ row, value }) =>
     `Readings in another unit were converted to °${value}, the first in row ${row}.`,
   'channels-disagree': ({ row, say }) => `${say} should agree and do not, first in row ${row}.`,

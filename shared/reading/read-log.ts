@@ -1,5 +1,5 @@
 import { plain } from './cells/parse-number.ts';
-import { DATE_ORDER_ANSWERS, orderAnswer, orderWords } from './clock/date-order.ts';
+import { orderAnswer, orderWords } from './clock/date-order.ts';
 import { TICKS_PER_S, type DateOrder } from './clock/parse-stamp.ts';
 import { finishReading, inCelsius, type FinishedChannel } from './finish-reading.ts';
 import { detectLayout } from './layout/detect-layout.ts';
@@ -154,7 +154,7 @@ function readWhole(file: File, layout: Layout, early: ReadWarning[]): WholeRead 
   if (rows.kind === 'problem') return refused(rows.problem, 0);
   const { store, facts } = rows;
   const unread = store.unread.count;
-  const bad = refuseRows(store, layout);
+  const bad = refuseRows(store, layout) ?? refuseMixedUnits(facts, layout);
   if (bad) return refused(bad, unread);
   const warnings = [...textWarnings(text), ...early, ...endWarnings(file, layout, store)];
   const ordered = orderTimes(store, layout.clock, options.answers ?? {});
@@ -163,7 +163,7 @@ function readWhole(file: File, layout: Layout, early: ReadWarning[]): WholeRead 
   }
   const readRowCount = store.count + store.unread.count + store.passedOver.count;
   const columns = layout.tempColumns.map((index) => layout.columns[index]!);
-  const finished = finishReading(store, columns, options);
+  const finished = finishReading(store, columns, layout.header !== null, options);
   if (finished.kind === 'problem') return refused(finished.problem, unread);
   if (finished.kind === 'question') {
     return { outcome: askWith(file, finished.question, layout.columns), unread };
@@ -190,6 +190,13 @@ function refuseRows(store: RowStore, layout: Layout): ReadProblem | null {
   return total < MIN_READINGS
     ? problem('too-few-readings', { say: total, row: layout.firstRow })
     : null;
+}
+
+/** Some cells say another unit, and some none: which one those have is not known. */
+function refuseMixedUnits({ convertedRow, bareRow }: RowFacts, layout: Layout): ReadProblem | null {
+  if (convertedRow === null || bareRow === null) return null;
+  const column = layout.columns.find(({ unitFrom }) => unitFrom === 'cells');
+  return column ? problem('mixed-units', { row: convertedRow, column: column.name }) : null;
 }
 
 function textWarnings({ guessedUtf16, nulTail }: LogText): ReadWarning[] {
@@ -328,5 +335,3 @@ function channelColumn({ columns, tempColumns }: Layout, channel: string | undef
   const named = columns.find(({ name }) => channel !== undefined && plain(name) === plain(channel));
   return named?.index ?? tempColumns[0]!;
 }
-
-export { DATE_ORDER_ANSWERS };

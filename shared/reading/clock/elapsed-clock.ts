@@ -133,24 +133,27 @@ export function rowsClock(input: ClockInput, counter: SampleColumn | undefined):
   return { kind: 'clock', clock, words, orders: [], warnings: [warning('interval-used', { say })] };
 }
 
-const INTERVAL_LINE =
-  /(interval|sampl\w*\s*(rate|time|period|every)?|logg\w*\s*(rate|period|every)|period|rate|takt)\b[^0-9]*?(\d+):(\d{2})(?::(\d{2}))?|(interval|sampl\w*|logg\w*|period|rate|every|takt)[^0-9]*?(\d+(?:[.,]\d+)?)\s*[,;\t ]*\s*(ms|s|sec|secs|seconds?|min|minutes?|h|hours?)?\b/i;
+const INTERVAL_WORD = /interval|sampl|logg\w*\s*(?:rate|period|every)|period|rate\b|every|takt/i;
+const INTERVAL_CLOCK = /(\d+):(\d{2})(?::(\d{2}))?/;
+const INTERVAL_NUMBER =
+  /(\d+(?:[.,]\d+)?)[\s,;]*(ms|s|sec|secs|seconds?|min|minutes?|h|hours?)?(?![a-z\d])/i;
 
 /** The time between readings that was answered or stands above the table; null where neither. */
-export function intervalTicksOf({ answers, preamble }: ClockInput): number | null {
+function intervalTicksOf({ answers, preamble }: ClockInput): number | null {
   const answered = Number(answers.interval);
   if (answered > 0) return Math.round(answered * TICKS_PER_S);
   for (const line of preamble) {
-    const match = INTERVAL_LINE.exec(line);
-    if (!match) continue;
-    if (match[3]) {
-      const [a, b, c] = [Number(match[3]), Number(match[4]), match[5]];
-      return (c === undefined ? a * 60 + b : a * 3600 + b * 60 + Number(c)) * TICKS_PER_S;
+    if (!INTERVAL_WORD.test(line)) continue;
+    const clock = INTERVAL_CLOCK.exec(line);
+    if (clock) {
+      const [first, second, third] = [Number(clock[1]), Number(clock[2]), clock[3]];
+      const seconds = third ? first * 3600 + second * 60 + Number(third) : first * 60 + second;
+      return seconds * TICKS_PER_S;
     }
-    const value = Number(match[7]!.replace(',', '.'));
-    const unit = match[8] ?? /\((ms|s|sec|min|h)\)/i.exec(line)?.[1];
-    if (!unit || value <= 0) continue;
-    return value * UNIT_TICKS[unitOfTitle(unit) ?? 'seconds']!;
+    const number = INTERVAL_NUMBER.exec(line);
+    const unit = number?.[2] ?? /[([]\s*(ms|s|sec|min|h)\s*[)\]]/i.exec(line)?.[1];
+    const value = Number(number?.[1]?.replace(',', '.'));
+    if (unit && value > 0) return value * UNIT_TICKS[unitOfTitle(unit) ?? 'seconds']!;
   }
   return null;
 }

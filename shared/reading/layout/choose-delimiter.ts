@@ -4,6 +4,9 @@ import { cellKind, isTyped, type CellKind } from './cell-kind.ts';
 /** The order in which equal candidates win. */
 const CANDIDATES: Delimiter[] = [';', '\t', ',', '|', ' '];
 
+/** What lines with one number count against lines with two. */
+const WEAK = 0.01;
+
 export type SplitLine = { cells: string[]; kinds: CellKind[] };
 export type DelimiterChoice = { delimiter: Delimiter; width: number; lines: SplitLine[] };
 
@@ -34,12 +37,26 @@ export function splitLine(line: string, delimiter: Delimiter): SplitLine {
   return { cells, kinds: cells.map(cellKind) };
 }
 
+/**
+ * Lines with two numbers or times are readings; where there are none, those with one may be. A preamble
+ * of "Setting 12, 4" has one, however long it is.
+ */
+export function likelyReadings(lines: SplitLine[]): SplitLine[] {
+  const strong = lines.filter(({ kinds }) => {
+    const typed = kinds.filter((kind) => isTyped(kind) || kind === 'open').length;
+    return typed > 1 && kinds.some(isTyped);
+  });
+  return strong.length >= Math.max(2, lines.length * 0.03) ? strong : lines;
+}
+
 function scoreLines(lines: SplitLine[]): { score: number; width: number } {
   const scores = new Map<number, number>();
-  for (const line of lines) {
+  const likely = likelyReadings(lines);
+  const weight = likely === lines ? WEAK : 1;
+  for (const line of likely) {
     const quality = lineQuality(line);
     const width = line.cells.length;
-    if (quality > 0) scores.set(width, (scores.get(width) ?? 0) + quality);
+    if (quality > 0) scores.set(width, (scores.get(width) ?? 0) + quality * weight);
   }
   let best = { score: 0, width: 0 };
   for (const [width, score] of scores) {

@@ -56,7 +56,10 @@ function planRows(sample: SampleLines, table: Table, known: Understood): LayoutR
     clock: clock.clock,
     clockWords: clock.words,
     tempColumns,
-    cellSuffix: suffixOf(table.columns[tempColumns[0]!]!),
+    cellSuffix: suffixOf(
+      table.columns[tempColumns[0]!]!,
+      tempColumns.map((i) => columns[i]!.unit),
+    ),
     neededCells: neededCells(table, names.length),
     header: table.header,
     firstRow: first.row,
@@ -173,10 +176,12 @@ function isCounting(values: number[]): boolean {
   return byOne > values.length * 0.9;
 }
 
-/** What nearly every cell has after its number, so that the quick way can read past it. */
-function suffixOf({ cells }: SampleColumn): string {
-  const suffix = /\d(\s*[^\d\s.,][^\d]*)$/.exec(cells.find((cell) => cell !== '') ?? '')?.[1] ?? '';
-  return cells.filter((cell) => cell.endsWith(suffix)).length > cells.length * 0.5 ? suffix : '';
+/** The unit that follows the number in cells, so that the quick way reads past it, and only past it. */
+function suffixOf({ cells }: SampleColumn, units: LogColumn['unit'][]): string {
+  const said = cells.find((cell) => CELL_UNIT.test(plain(cell)) && /\d/.test(cell)) ?? '';
+  const match = CELL_UNIT.exec(plain(said));
+  if (!match || units.some((unit) => unit !== cellUnit(match))) return '';
+  return /\d(\s*[^\d\s.,][^\d]*)$/.exec(said)?.[1] ?? '';
 }
 
 /** Cells that a row must have: all but the last columns of words, or of nothing. */

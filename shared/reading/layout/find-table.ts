@@ -1,7 +1,8 @@
 import { findUnit } from '../cells/find-unit.ts';
+import { isOpenWord } from '../cells/parse-number.ts';
 import { splitCells, type Delimiter } from '../text/split-cells.ts';
 import { isTyped, type CellKind } from './cell-kind.ts';
-import type { DelimiterChoice, SplitLine } from './choose-delimiter.ts';
+import { likelyReadings, type DelimiterChoice, type SplitLine } from './choose-delimiter.ts';
 
 /** One column's cells in the sampled rows of readings, in file order. */
 export type SampleColumn = {
@@ -38,7 +39,7 @@ export function findTable(
   headCount: number,
 ): Table | null {
   const { lines, width, delimiter } = choice;
-  const kinds = columnKinds(lines, width);
+  const kinds = columnKinds(likelyReadings(lines), width);
   const fits = lines.map((line) => fitsKinds(line, kinds));
   const firstLine = firstOf(fits, headCount);
   if (firstLine < 0) return null;
@@ -75,10 +76,11 @@ function fitsKinds({ kinds }: SplitLine, columns: CellKind[]): boolean {
   let typed = 0;
   for (const [i, column] of columns.entries()) {
     const kind = kinds[i]!;
-    if (isTyped(kind)) typed++;
+    if (isTyped(kind) || kind === 'open') typed++;
     if (isTyped(column) && kind !== column && kind !== 'empty' && kind !== 'open') return false;
   }
-  return typed > 0 && (columns.length === 1 || typed > 1 || columns.filter(isTyped).length < 2);
+  const isOne = columns.length === 1 || columns.filter(isTyped).length < 2;
+  return kinds.some(isTyped) && (isOne || typed > 1);
 }
 
 /** A lone line that looks right above the table is preamble: most of what follows must fit too. */
@@ -142,7 +144,7 @@ function headerCells(line: string, { delimiter, width }: DelimiterChoice): strin
   if (/^sep=.\s*$/i.test(line)) return null;
   let { cells } = splitCells(line.replace(/^\s*#\s*/, ''), delimiter);
   if (delimiter === ' ' && cells.length !== width) cells = line.trim().split(/\s{2,}|\t+/);
-  const words = cells.filter((cell) => /[^\d\s.,:;/+-]/.test(cell)).length;
+  const words = cells.filter((cell) => /[^\d\s.,:;/+-]/.test(cell) && !isOpenWord(cell)).length;
   const filled = cells.filter((cell) => cell !== '').length;
   if (words === 0 || words < filled * 0.5) return null;
   if (width === 1) return cells.length === 1 && !/[:=]/.test(line) ? cells : null;

@@ -139,6 +139,7 @@ function nextHighByte(bytes: Uint8Array, from: number): number {
     if (bytes[at]! > 127) return at;
     at++;
   }
+  if (at >= n) return n;
   const words = new Int32Array(bytes.buffer, bytes.byteOffset + at, (n - at) >> 2);
   let word = 0;
   while (word < words.length && (words[word]! & 0x80808080) === 0) word++;

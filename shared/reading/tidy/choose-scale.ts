@@ -23,8 +23,12 @@ export function isPlausible(temp: number, unit: TemperatureUnit): boolean {
   return tempF >= COLDEST_F && tempF <= HOTTEST_F;
 }
 
-/** Asked where most readings lie beyond reason as they stand; null where no scale makes sense of them. */
+/**
+ * Asked where readings lie beyond reason and are whole numbers, as raw parts of a degree are; null where
+ * no scale makes sense of them.
+ */
 export function askScale(
+  temps: Float64Array,
   lowest: number,
   highest: number,
   unit: TemperatureUnit,
@@ -33,7 +37,7 @@ export function askScale(
     ({ divisor }) =>
       divisor > 1 && isPlausible(highest / divisor, unit) && isPlausible(lowest / divisor, unit),
   );
-  if (likely.length === 0) return null;
+  if (likely.length === 0 || !temps.every(Number.isInteger)) return null;
   return {
     about: 'scale',
     message: `The readings run from ${lowest} to ${highest}, which no exhaust does. Are they parts of a degree?`,

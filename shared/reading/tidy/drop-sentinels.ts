@@ -1,4 +1,5 @@
-import { toKelvinStep, type TemperatureUnit } from '../../units.ts';
+import { fromKelvinStep, toKelvinStep, type TemperatureUnit } from '../../units.ts';
+import { isPlausible } from './choose-scale.ts';
 
 /**
  * Numbers that loggers and sensors write for "no reading" (common practice): all nines, ends of 16-bit
@@ -18,54 +19,88 @@ const NEIGHBOURS = 20_000;
 
 export type Sentinel = { place: number; value: number };
 
+/** Where more readings than this share are impossible, they are in another unit or scale. */
+const MOST_IMPOSSIBLE = 0.2;
+
 /**
  * Places of readings that stand for "no reading": a known number, alone or in a run of its own, that
- * jumps away from the readings before and after. 85.0 in the middle of a plausible curve is a reading.
+ * jumps away from the readings before and after, or any number that no probe can read among many that
+ * one can. 85.0 in the middle of a plausible curve is a reading.
  *
  * @param temps readings in `unit`, finite
  */
 export function findSentinels(temps: Float64Array, unit: TemperatureUnit): Sentinel[] {
   const found: Sentinel[] = [];
   const stepK = Math.max(STANDS_OUT_K, STANDS_OUT_STEPS * toKelvinStep(medianMove(temps), unit));
+  const step = fromKelvinStep(stepK, unit);
+  const odd = oddValues(temps, unit, step);
+  if (odd.impossible > temps.length * MOST_IMPOSSIBLE) return [];
+  for (const { from, to } of odd.runs) {
+    if (!standsOut(temps, from, to, unit, step)) continue;
+    for (let place = from; place < to; place++) found.push({ place, value: temps[place]! });
+  }
+  return found.length < temps.length ? found : [];
+}
+
+type Run = { from: number; to: number };
+
+/** Runs of one value that is known for "no reading" or impossible, each begun by a jump. */
+function oddValues(
+  temps: Float64Array,
+  unit: TemperatureUnit,
+  step: number,
+): { runs: Run[]; impossible: number } {
+  const runs: Run[] = [];
+  let impossible = 0;
   let i = 0;
   while (i < temps.length) {
     const value = temps[i]!;
-    const isJump = i === 0 || toKelvinStep(Math.abs(value - temps[i - 1]!), unit) >= stepK;
-    if (!isJump || !KNOWN.has(value)) {
+    const isJump = i === 0 || Math.abs(value - temps[i - 1]!) >= step;
+    if (!isJump || !isOdd(value, unit)) {
       i++;
       continue;
     }
     let to = i + 1;
     while (to < temps.length && temps[to] === value) to++;
-    if (standsOut(temps, i, to, (k) => toKelvinStep(k, unit) >= stepK)) {
-      for (let place = i; place < to; place++) found.push({ place, value });
-    }
+    if (!KNOWN.has(value)) impossible += to - i;
+    runs.push({ from: i, to });
     i = to;
   }
-  return found.length < temps.length ? found : [];
+  return { runs, impossible };
+}
+
+function isOdd(value: number, unit: TemperatureUnit): boolean {
+  return KNOWN.has(value) || !isPlausible(value, unit);
 }
 
 function standsOut(
   temps: Float64Array,
   from: number,
   to: number,
-  isFar: (step: number) => boolean,
+  unit: TemperatureUnit,
+  step: number,
 ): boolean {
   const value = temps[from]!;
-  const before = nearest(temps, from - 1, -1);
-  const after = nearest(temps, to, 1);
+  const before = nearest(temps, from - 1, -1, unit);
+  const after = nearest(temps, to, 1, unit);
   if (before === null && after === null) return false;
-  const farBefore = before === null || isFar(Math.abs(before - value));
-  const farAfter = after === null || isFar(Math.abs(after - value));
+  if (!isPlausible(value, unit)) return true;
+  const farBefore = before === null || Math.abs(before - value) >= step;
+  const farAfter = after === null || Math.abs(after - value) >= step;
   if (!farBefore || !farAfter) return false;
   // a jump up and a jump on up is a fast rise, not an isolated reading
   return before === null || after === null || before > value === after > value;
 }
 
-/** The nearest reading that is not itself a known number. */
-function nearest(temps: Float64Array, from: number, step: 1 | -1): number | null {
-  for (let i = from; i >= 0 && i < temps.length; i += step) {
-    if (!KNOWN.has(temps[i]!)) return temps[i]!;
+/** The nearest reading that is not odd itself. */
+function nearest(
+  temps: Float64Array,
+  from: number,
+  direction: 1 | -1,
+  unit: TemperatureUnit,
+): number | null {
+  for (let i = from; i >= 0 && i < temps.length; i += direction) {
+    if (!isOdd(temps[i]!, unit)) return temps[i]!;
   }
   return null;
 }

@@ -1,3 +1,4 @@
+import { TICKS_PER_DAY, TICKS_PER_S } from '../clock/parse-stamp.ts';
 import type { Clock } from '../layout/layout.ts';
 import type { Answers, ReadWarning } from '../log-reading.ts';
 import { warning } from '../problem-words.ts';
@@ -35,12 +36,14 @@ export function orderTimes(store: RowStore, clock: Clock, answers: Answers): Ord
   return { kind: 'ordered', warnings };
 }
 
-/** No step back, none of nought, none over 300 days. */
+/** No step back, none of nought, and none that a change of the clock's setting makes. */
 function isRising({ ticks, count }: RowStore): boolean {
-  const most = 300 * 86_400e6;
+  const hour = 3600 * TICKS_PER_S;
+  const most = 300 * TICKS_PER_DAY;
   for (let i = 1; i < count; i++) {
     const step = ticks[i]! - ticks[i - 1]!;
     if (!(step > 0 && step < most)) return false;
+    if (step > hour && step < 2 * hour) return false;
   }
   return true;
 }

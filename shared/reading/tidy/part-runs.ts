@@ -15,6 +15,8 @@ const MIN_JUMP_TICKS = 60 * TICKS_PER_S;
 /** A clock that jumps back further than this many steps has started again; less is a straggler. */
 const JUMP_STEPS = 20;
 const MIN_ROWS = 3;
+/** Sorting one run leaves it as smooth as it was; this much rougher, and it was two. */
+const ROUGHER = 1.5;
 /** More parts than this are stragglers after all. */
 const MOST_RUNS = 50;
 
@@ -37,8 +39,8 @@ export function partRuns(store: RowStore, clock: Clock, answers: Answers): PartR
     spans = findSpans(store);
   }
   const isAbsolute = clock.kind === 'stamp' || clock.kind === 'date-time' || clock.kind === 'unix';
-  if (spans.length === 1 || (isAbsolute && !overlap(store, spans)))
-    return { kind: 'parted', warnings };
+  const isOneRun = isAbsolute && (!overlap(store, spans) || !isRougherSorted(store));
+  if (spans.length === 1 || isOneRun) return { kind: 'parted', warnings };
   const chosen = spans[Number(answers.runs) - 1];
   if (!chosen) return { kind: 'question', question: askRun(store, spans) };
   dropSpans(
@@ -87,6 +89,23 @@ function overlap({ ticks }: RowStore, spans: Span[]): boolean {
   const times = spans.map(({ from, to }) => ({ first: ticks[from]!, last: ticks[to - 1]! }));
   times.sort((a, b) => a.first - b.first);
   return times.some(({ first }, k) => k > 0 && first <= times[k - 1]!.last);
+}
+
+/** Two runs laid into each other jump to and fro; one run that was written in pieces does not. */
+function isRougherSorted({ ticks, temps, count }: RowStore): boolean {
+  const column = temps[0];
+  if (!column) return false;
+  const order = Array.from({ length: count }, (_, i) => i).filter((i) => !Number.isNaN(column[i]));
+  const asWritten = roughness(column, order);
+  order.sort((a, b) => ticks[a]! - ticks[b]! || a - b);
+  return roughness(column, order) > ROUGHER * asWritten;
+}
+
+function roughness(column: Float64Array, order: number[]): number {
+  let sum = 0;
+  for (let i = 1; i < order.length; i++)
+    sum += Math.abs(column[order[i]!]! - column[order[i - 1]!]!);
+  return sum;
 }
 
 function dropSpans(store: RowStore, spans: Span[], why: string): void {
