@@ -35,13 +35,21 @@ async function goTo(page: Page, place: string): Promise<void> {
     .click();
 }
 
+/** The page with this heading stands: what is typed from here on goes into it. */
+async function opened(page: Page, heading: string): Promise<void> {
+  await expect(page.getByRole('heading', { name: heading, exact: true })).toBeVisible();
+}
+
 async function addTechnician(page: Page): Promise<void> {
   await goTo(page, 'Shop');
   await page.getByRole('link', { name: 'Add a person' }).click();
-  await page.getByLabel('Name').fill('Pell Arden');
-  await page.getByLabel('E-mail, which they sign in with').fill('pell@tessford.example');
-  await page.getByRole('group', { name: 'Role' }).getByLabel('technician').check();
-  await page.getByLabel('First password').fill('kettle orchard 12');
+  await opened(page, 'Add a person');
+  await page.getByLabel('Name', { exact: true }).fill('Pell Arden');
+  await page
+    .getByLabel('E-mail, which they sign in with', { exact: true })
+    .fill('pell@tessford.example');
+  await page.getByRole('group', { name: 'Role' }).getByLabel('technician', { exact: true }).check();
+  await page.getByLabel('First password', { exact: true }).fill('kettle orchard 12');
   await page.getByRole('button', { name: 'Add the person' }).click();
   await expect(page.getByText('Pell Arden')).toBeVisible();
 }
@@ -49,18 +57,20 @@ async function addTechnician(page: Page): Promise<void> {
 async function addRatingAndProbe(page: Page): Promise<void> {
   await goTo(page, 'Ratings');
   await page.getByRole('link', { name: 'Add a rating' }).click();
-  await page.getByLabel('Name or part number').fill('HL-155-25');
-  await page.getByLabel('Opens, °F').fill('155');
-  await page.getByLabel('Closes, °F').fill('165');
+  await opened(page, 'New rating');
+  await page.getByLabel('Name or part number', { exact: true }).fill('HL-155-25');
+  await page.getByLabel('Opens, °F', { exact: true }).fill('155');
+  await page.getByLabel('Closes, °F', { exact: true }).fill('165');
   await page.getByRole('button', { name: 'Save the rating' }).click();
   await expect(page.getByRole('alert')).toContainText('Enter a temperature below the one it opens');
-  await page.getByLabel('Closes, °F').fill('130');
+  await page.getByLabel('Closes, °F', { exact: true }).fill('130');
   await page.getByRole('button', { name: 'Save the rating' }).click();
   await expect(page.getByRole('link', { name: 'HL-155-25' })).toBeVisible();
 
   await page.getByRole('link', { name: 'Add a probe' }).click();
-  await page.getByLabel('Name').fill('Probe 1');
-  await page.getByLabel('Accuracy, ±').fill('2');
+  await opened(page, 'New probe');
+  await page.getByLabel('Name', { exact: true }).fill('Probe 1');
+  await page.getByLabel('Accuracy, ±', { exact: true }).fill('2');
   await page.getByRole('button', { name: 'Save the probe' }).click();
   await expect(page.getByText('Probe 1')).toBeVisible();
 }
@@ -69,17 +79,20 @@ async function addRatingAndProbe(page: Page): Promise<void> {
 async function takeFirstCall(page: Page): Promise<void> {
   await goTo(page, 'Jobs');
   await page.getByRole('link', { name: 'Take the first call' }).click();
-  await page.getByLabel('Name').fill('Corin Hale');
-  await page.getByLabel('Phone').fill('555-0177');
+  await opened(page, 'Take a call');
+  await page.getByLabel('Name', { exact: true }).fill('Corin Hale');
+  await page.getByLabel('Phone', { exact: true }).fill('555-0177');
   await page.getByRole('button', { name: 'Add the customer' }).click();
-  await page.getByLabel('Address').fill('7 Mill Steps');
+  await page.getByLabel('Address', { exact: true }).fill('7 Mill Steps');
   await page.getByRole('button', { name: 'Add the home' }).click();
-  await page.getByLabel('Make').fill('Vesper');
-  await page.getByLabel('Model').fill('V5');
+  await page.getByLabel('Make', { exact: true }).fill('Vesper');
+  await page.getByLabel('Model', { exact: true }).fill('V5');
   await page.getByRole('button', { name: 'Add the machine' }).click();
-  await page.getByLabel('Complaint, in the customer’s words').fill('Stone cold since Sunday.');
-  await page.getByLabel('Technician').selectOption('Pell Arden');
-  await page.getByLabel('From').fill('08:00');
+  await page
+    .getByLabel('Complaint, in the customer’s words', { exact: true })
+    .fill('Stone cold since Sunday.');
+  await page.getByLabel('Technician', { exact: true }).selectOption('Pell Arden');
+  await page.getByLabel('From', { exact: true }).fill('08:00');
   await page.getByLabel('To', { exact: true }).fill('09:30');
   await page.getByRole('button', { name: 'Take the call' }).click();
   await expect(page.getByRole('heading', { name: '“Stone cold since Sunday.”' })).toBeVisible();
@@ -90,8 +103,8 @@ test('from an empty shop the owner adds all that a run needs by form, and walks 
 }) => {
   await makeOwner();
   await page.goto('/');
-  await page.getByLabel('E-mail').fill(OWNER.email);
-  await page.getByLabel('Password').fill(OWNER.password);
+  await page.getByLabel('E-mail', { exact: true }).fill(OWNER.email);
+  await page.getByLabel('Password', { exact: true }).fill(OWNER.password);
   await page.getByRole('button', { name: 'Sign in' }).click();
   await expect(page.getByText('No job yet.')).toBeVisible();
 
@@ -101,7 +114,9 @@ test('from an empty shop the owner adds all that a run needs by form, and walks 
 
   await page.getByRole('link', { name: 'Vesper V5, electric' }).click();
   await page.getByRole('link', { name: 'Set what it should have on high heat' }).click();
-  await page.getByLabel('Thermostat, or thermistor set-point').selectOption({ index: 1 });
+  await page
+    .getByLabel('Thermostat, or thermistor set-point', { exact: true })
+    .selectOption({ index: 1 });
   await page.getByRole('button', { name: 'Save what it should have' }).click();
   await expect(page.getByText('opens 155 ± 5, closes 130 ± 5 °F').first()).toBeVisible();
 
@@ -110,7 +125,7 @@ test('from an empty shop the owner adds all that a run needs by form, and walks 
   await page.getByRole('link', { name: 'Corin Hale', exact: true }).click();
   await page.getByRole('link', { name: 'Upload a probe file' }).click();
   const log = asFile('outlet.csv', plainLog(cyclingReadings(1100)));
-  await page.getByLabel('Probe file').setInputFiles(log);
+  await page.getByLabel('Probe file', { exact: true }).setInputFiles(log);
   await sayHowItWasMade(page, /^Probe 1/);
   await page.getByRole('button', { name: 'Accept and judge' }).click();
 
