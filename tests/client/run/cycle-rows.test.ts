@@ -38,6 +38,13 @@ describe('cycles as rows', () => {
     expect(last).toMatchObject({ reset: null, offS: null });
   });
 
+  test('a cut-out whose reset was not seen does not borrow the next one', () => {
+    const [first, second] = cycleRowsOf(analysisOf([278, 423], [468]));
+
+    expect(first).toMatchObject({ reset: null, offS: null });
+    expect(second).toMatchObject({ offS: 45 });
+  });
+
   test('heat that kept coming is a row of its own, without a cut-out', () => {
     const last = cycleRowsOf(analysisOf([278], [638], 715)).at(-1);
 
