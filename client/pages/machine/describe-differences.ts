@@ -4,8 +4,8 @@ import { fromCelsius, toCelsius } from '#shared/units.ts';
 import { ratedWords, unitWords } from '../../format/rating-words.ts';
 
 const CYCLING = ['cycling-thermostat', 'thermistor'];
-/** Figures this near are the same figure in another unit. */
-const SAME = 0.06;
+/** A tenth of a degree: as near as a figure rounded in the other unit comes to itself. */
+const SAME = 0.1;
 
 /**
  * Where a part that is in the machine differs from what the machine is specified to have, in words.
