@@ -236,7 +236,6 @@ export const EVERYDAY_JOBS: DemoJob[] = [
     machine: 'dowd',
     taken: { day: -6, at: '13:15' },
     complaint: 'No heat.',
-    callsBack: 'loose',
     state: 'waiting-for-part',
     visits: [
       {

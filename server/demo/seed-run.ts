@@ -26,7 +26,7 @@ export async function seedRun(stage: DemoStage, at: RunAtVisit): Promise<string 
   await copyFile(sampleLogUrl(run.log), path);
 
   clock.setTo(startedAtMs + 25 * MINUTE_MS);
-  const [runId] = await runs.runs.importRuns(by, {
+  const importing = runs.runs.importRuns(by, {
     id,
     path,
     fileName: run.log,
@@ -37,6 +37,9 @@ export async function seedRun(stage: DemoStage, at: RunAtVisit): Promise<string 
     marks: log.marks,
     spans: [{ fromS: 0, toS: Infinity, label: run.label }],
     startedAtMs,
+  });
+  const [runId] = await importing.catch((error: unknown) => {
+    throw new Error(`the demo's ${run.log} cannot be taken in`, { cause: error });
   });
   const made = needed(runId, run.log);
   for (const note of run.notes ?? []) await seedNote(stage, at, made, note);

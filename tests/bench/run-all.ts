@@ -5,6 +5,7 @@
 const BENCHES: Record<string, () => Promise<{ bench: (args: string[]) => void | Promise<void> }>> =
   {
     accuracy: () => import('./accuracy/accuracy.ts'),
+    server: () => import('./server/server.ts'),
   };
 
 async function run([asked, ...args]: string[]): Promise<void> {
