@@ -21,6 +21,7 @@ test('a technician signs in, uploads a probe’s file on a visit and reads the v
   );
   await stop.getByRole('link', { name: 'Rosalind Peake', exact: true }).click();
 
+  await expect(page.getByText('not ticked yet')).toBeVisible();
   for (const caution of await page.getByRole('checkbox').all()) await caution.check();
   await expect(page.getByText(/^ticked \d/)).toBeVisible();
 
