@@ -8,12 +8,12 @@ import { fieldId } from '#client/components/field.tsx';
 test('a form’s faults are listed by field, and a refusal of the whole stands last', () => {
   const errors: FieldErrors = {
     name: { type: 'custom', message: 'Enter a name' },
-    spans: [{ label: { type: 'custom', message: 'Enter a name for the run' } }],
+    span: { label: { type: 'custom', message: 'Enter a name for the run' } },
   };
 
   expect(problemsOf(errors, 'The shop’s server does not answer.')).toEqual([
     { name: 'name', message: 'Enter a name' },
-    { name: 'spans.0.label', message: 'Enter a name for the run' },
+    { name: 'span.label', message: 'Enter a name for the run' },
     { name: null, message: 'The shop’s server does not answer.' },
   ]);
 });
