@@ -11,7 +11,8 @@ export function sessionRoutes(sessions: SessionService, shop: ShopService, cooki
   const router = Router();
 
   router.post('/session', async (req, res) => {
-    const { person, token, expiresAtMs } = await sessions.signIn(validate(signInSchema, req.body));
+    const asked = validate(signInSchema, req.body);
+    const { person, token, expiresAtMs } = await sessions.signIn(asked, cookie.read(req));
     cookie.write(res, token, expiresAtMs);
     res.json({ person, shop: await shop.get() } satisfies Session);
   });

@@ -61,27 +61,30 @@ export function createSessionService(parts: SessionParts) {
     return { token, expiresAtMs };
   }
 
-  return {
-    open,
+  /** Who holds this token now; undefined when it is not ours, ended, too old, or theirs no more. */
+  async function find(token: string): Promise<SignedIn | undefined> {
+    const nowMs = now().getTime();
+    const claims = readToken(token, tokenKey, nowMs);
+    const found = claims && (await sessions.find(claims.sessionId));
+    if (!claims || !found || found.person.id !== claims.userId) return undefined;
+    const { session, person } = found;
+    if (person.disabledAtMs !== null || !isLive(session, nowMs)) return undefined;
+    if (nowMs - session.seenAtMs >= SEEN_EVERY_MS) await sessions.setSeenAt(session.id, nowMs);
+    return { person, sessionId: session.id };
+  }
 
-    async signIn(asked: SignIn) {
+  return {
+    /** `oldToken`: what the browser held until now; it gives way, so that no session is left behind. */
+    async signIn(asked: SignIn, oldToken: string | undefined) {
       const person = await checkPassword(asked);
+      const old = oldToken === undefined ? undefined : await find(oldToken);
+      if (old) await sessions.end(old.sessionId, now().getTime());
       const opened = await open(person);
       await audit({ userId: person.id, event: 'authn_login_success', subject: 'session' });
       return { person, ...opened };
     },
 
-    /** Who holds this token now; undefined when it is not ours, ended, too old, or theirs no more. */
-    async find(token: string): Promise<SignedIn | undefined> {
-      const nowMs = now().getTime();
-      const claims = readToken(token, tokenKey, nowMs);
-      const found = claims && (await sessions.find(claims.sessionId));
-      if (!claims || !found || found.person.id !== claims.userId) return undefined;
-      const { session, person } = found;
-      if (person.disabledAtMs !== null || !isLive(session, nowMs)) return undefined;
-      if (nowMs - session.seenAtMs >= SEEN_EVERY_MS) await sessions.setSeenAt(session.id, nowMs);
-      return { person, sessionId: session.id };
-    },
+    find,
 
     async signOut({ person, sessionId }: SignedIn): Promise<void> {
       await sessions.end(sessionId, now().getTime());

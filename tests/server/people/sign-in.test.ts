@@ -190,6 +190,14 @@ test('signing out ends the session at once, for a copy of its cookie too', async
   expect((await seen(cookie)).status).toBe(401);
 });
 
+test('signing in anew ends the session that the browser had', async () => {
+  const person = await app.agent('office');
+
+  await person.post('/api/session').send({ email: EMAIL, password: PASSWORD }).expect(200);
+
+  expect((await seen(person.cookie)).status).toBe(401);
+});
+
 test('disabling somebody ends what they have open; enabling does not bring it back', async () => {
   const person = await app.agent('technician');
   await person.get('/api/session').expect(200);
