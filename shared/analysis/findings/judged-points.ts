@@ -1,12 +1,17 @@
 import type { Point } from '../analysis.ts';
 import type { RunFacts } from '../run-facts.ts';
 import { totalUncertainty } from '../judge-point.ts';
+import { median } from '../statistics/quantile.ts';
 
 /**
  * How far sound points differ anyway, expanded, K (2 °F). Points known to better than this weigh alike in a mean, and
  * one that the record hardly shows does not spoil it.
  */
 const OWN_SPREAD_K = 2 / 1.8;
+
+/** A point this many times less certain than the usual one, and than this many K (4 °F), is hardly shown. */
+const HARDLY_TIMES = 4;
+const HARDLY_SHOWN_K = 4 / 1.8;
 
 /** Judged points of a kind taken together. */
 export type JudgedPoints = {
@@ -20,8 +25,9 @@ export type JudgedPoints = {
 
 /** The judged cut-outs or resets of a run, or null where there is none. */
 export function judgedPoints(facts: RunFacts, kind: Point['kind']): JudgedPoints | null {
-  const points = (kind === 'cut-out' ? facts.cutOuts : facts.resets).filter(({ judged }) => judged);
-  if (points.length === 0) return null;
+  const all = (kind === 'cut-out' ? facts.cutOuts : facts.resets).filter(({ judged }) => judged);
+  if (all.length === 0) return null;
+  const points = shownPoints(all);
   const weights = points.map(({ uK }) => 1 / (uK * uK + OWN_SPREAD_K * OWN_SPREAD_K));
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const shares = weights.map((weight) => weight / total);
@@ -32,6 +38,12 @@ export function judgedPoints(facts: RunFacts, kind: Point['kind']): JudgedPoints
     meanUK,
     meanUTotalK: totalUncertainty(meanUK, facts.input.probe),
   };
+}
+
+/** Without those that the record hardly shows: far less certain than the others, and than a few degrees. */
+function shownPoints(points: Point[]): Point[] {
+  const usualUK = median(points.map(({ uK }) => uK));
+  return points.filter(({ uK }) => uK <= Math.max(HARDLY_TIMES * usualUK, HARDLY_SHOWN_K));
 }
 
 /** Arithmetic mean of at least one value. */

@@ -6,6 +6,8 @@ import { firstCrossing, marksWithin, spanOf, temperatureAt, totalU } from './tra
 
 /** A leg must pass cut-outs that the machine makes up there by itself by this much to be another thing, K (3 °F). */
 const BEYOND_OWN_K = 3 / 1.8;
+/** A record this coarse is one of single readings, and two of them up there are no noise, s. */
+const COARSE_S = 5;
 /** Within this of its asymptote a leg has levelled off, K (2 °F). */
 const LEVEL_K = 2 / 1.8;
 
@@ -31,11 +33,23 @@ function runsAway(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   if (leg.kind !== 'heating') return false;
   const { highEndC } = bandOf('cut-out', rating);
   if (to.tempC >= rating.highLimitC) return true;
-  const uK = totalU(facts, to);
-  if (to.tempC - uK <= highEndC) return false;
+  const uK = Math.min(totalU(facts, to), totalU(facts, { uK: 2 * facts.noiseK }));
+  if (to.tempC - uK <= highEndC && !staysAbove(leg, facts, highEndC)) return false;
   const ownC = cutOutsUpThere(facts, to, highEndC);
   if (to.turnedBy === 'machine') return ownC.length === 0 && !comesBack(facts, to);
   return to.tempC > Math.max(-Infinity, ...ownC) + BEYOND_OWN_K + uK;
+}
+
+/** By hand a peak may be badly located while the readings themselves leave no doubt. */
+function staysAbove(leg: RunLeg, facts: RunFacts, highEndC: number): boolean {
+  const { timesS, tempsC } = facts.series;
+  if (facts.spacingS < COARSE_S) return false;
+  const sureC = highEndC + totalU(facts, { uK: facts.roundingK });
+  const { fromS, toS } = spanOf(leg);
+  const above = tempsC.filter(
+    (tempC, i) => timesS[i]! > fromS && timesS[i]! <= toS && tempC > sureC,
+  );
+  return above.length >= 2;
 }
 
 /** Where the machine cut out by itself above band and allowance: hot, but it does cut out. */

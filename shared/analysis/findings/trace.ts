@@ -5,6 +5,9 @@ import { totalUncertainty } from '../judge-point.ts';
 /** A mark is tapped a little after the fact, s. */
 const TAPPED_LATE_S = 3;
 
+/** A pause in the readings of more than this share of a leg may hide a turn. */
+const HIDING_SHARE = 0.2;
+
 /** Expanded uncertainty of an extreme with the probe's part, K. */
 export function totalU({ input }: RunFacts, { uK }: Pick<Extreme, 'uK'>): number {
   return totalUncertainty(uK, input.probe);
@@ -74,4 +77,26 @@ export function spanOf({ from, to }: RunLeg): { fromS: number; toS: number } {
 export function spanWithTail(leg: RunLeg, { series }: RunFacts): { fromS: number; toS: number } {
   const lastS = series.timesS.at(-1) ?? leg.to.timeS;
   return { fromS: leg.from.timeS, toS: leg.to.turnedBy === 'end' ? lastS : leg.to.timeS };
+}
+
+/** How long a leg lasted, a level stretch after it included, s. */
+export function lasted(leg: RunLeg, facts: RunFacts): number {
+  const { fromS, toS } = spanWithTail(leg, facts);
+  return toS - fromS;
+}
+
+/** A door or a machine turned off changes the fall; that is no fault. */
+export function isDisturbed(leg: RunLeg, facts: RunFacts): boolean {
+  const { fromS, toS } = spanOf(leg);
+  const marks = marksWithin(facts, { fromS, toS }, ['heat-off', 'stopped', 'door', 'duct-off']);
+  return hidesTurn(leg, facts) || marks.length > 0;
+}
+
+/** Whether a pause in the readings is long enough, beside its leg, to hide a turn. */
+export function hidesTurn(leg: RunLeg, facts: RunFacts): boolean {
+  const { fromS, toS } = spanWithTail(leg, facts);
+  return facts.gaps.some(
+    (gap) =>
+      gap.fromS < toS && gap.toS > fromS && gap.toS - gap.fromS > HIDING_SHARE * (toS - fromS),
+  );
 }

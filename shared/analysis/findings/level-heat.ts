@@ -1,0 +1,84 @@
+import { fitResponse } from '../fit-response.ts';
+import { bandOf } from '../judge-point.ts';
+import type { Rating } from '../rating.ts';
+import type { RunFacts, RunLeg } from '../run-facts.ts';
+import { median } from '../statistics/quantile.ts';
+import { ALIKE_PEAKS_K } from './slow-fall.ts';
+import { firstCrossing, hidesTurn, lasted, spanWithTail, totalU } from './trace.ts';
+
+/** How long the exhaust must stay level before it is not just slow to turn, s. */
+export const SETTLED_S = 120;
+/** A rise that stops this far short of where it was heading has lost heat on the way, K (12 °F). */
+const SHORT_OF_K = 12 / 1.8;
+
+/** Whether the last rise went level under the allowance though the thermostat must have opened. */
+export function staysLevel(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
+  return (
+    levelsInBand(leg, facts, rating) ||
+    risesAgain(leg, facts, rating) ||
+    staysAtTop(leg, facts, rating)
+  );
+}
+
+/**
+ * The rise bends in the opens band and levels off under the allowance: opened, with part of the heat left on. What the
+ * rise before the band was heading for tells a bend from a weak heater that levels off there by itself.
+ */
+function levelsInBand(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
+  if (leg.to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
+  const { lowC, highEndC } = bandOf('cut-out', rating);
+  const span = spanWithTail(leg, facts);
+  const bandS = firstCrossing(facts, span, lowC, 'up');
+  if (bandS === null || span.toS - bandS < SETTLED_S) return false;
+  const tail = rangeWithin(facts, { fromS: bandS, toS: span.toS });
+  if (!tail || tail.lowestC < bandOf('reset', rating).highC || tail.highestC > highEndC)
+    return false;
+  const headingC = headingBefore(facts, { fromS: span.fromS, toS: bandS });
+  if (headingC === null || headingC < tail.highestC + SHORT_OF_K) return false;
+  return true;
+}
+
+/** Lower bound of the asymptote that a rise was heading for, its first third left out, °C. */
+function headingBefore(facts: RunFacts, { fromS, toS }: { fromS: number; toS: number }) {
+  const { timesS, tempsC } = facts.binned;
+  const first = timesS.findIndex((timeS) => timeS >= fromS + (toS - fromS) / 3);
+  const past = timesS.findIndex((timeS) => timeS > toS);
+  if (first < 0 || past < 0) return null;
+  const fit = fitResponse(timesS.slice(first, past), tempsC.slice(first, past));
+  return fit && fit.asymptoteC - 3 * fit.asymptoteErrorK;
+}
+
+function rangeWithin(facts: RunFacts, { fromS, toS }: { fromS: number; toS: number }) {
+  const { timesS, smoothC } = facts.binned;
+  const within = smoothC.filter((_, i) => timesS[i]! >= fromS && timesS[i]! <= toS);
+  if (within.length === 0) return null;
+  return {
+    lowestC: within.reduce((low, tempC) => Math.min(low, tempC), Infinity),
+    highestC: within.reduce((high, tempC) => Math.max(high, tempC), -Infinity),
+  };
+}
+
+/** After a cut-out the exhaust turned up again well above any reset, and stays: heat that no reset brought back. */
+function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
+  const { from, to } = leg;
+  if (from.turnedBy !== 'machine' || to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
+  const ownC = facts.resets.filter(({ timeS }) => timeS < from.timeS).map(({ tempC }) => tempC);
+  const highestResetC = Math.max(bandOf('reset', rating).highC, ...ownC);
+  const above = from.tempC - totalU(facts, from) > highestResetC + ALIKE_PEAKS_K;
+  if (!above || lasted(leg, facts) < SETTLED_S) return false;
+  if (to.tempC > bandOf('cut-out', rating).highEndC) return false;
+  return true;
+}
+
+/** The last rise reached the machine's own cut-outs and stayed there, under the allowance, with none. */
+function staysAtTop(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
+  const { to } = leg;
+  const own = facts.cutOuts.filter(({ timeS }) => timeS < leg.to.timeS);
+  if (own.length === 0 || to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
+  const ownC = median(own.map(({ tempC }) => tempC));
+  const span = spanWithTail(leg, facts);
+  const reachedS = firstCrossing(facts, span, ownC, 'up');
+  if (reachedS === null || span.toS - reachedS < SETTLED_S) return false;
+  if (to.tempC > bandOf('cut-out', rating).highEndC) return false;
+  return true;
+}

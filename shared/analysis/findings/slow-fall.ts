@@ -1,0 +1,85 @@
+import type { Evidence } from '../analysis.ts';
+import type { RunFacts, RunLeg } from '../run-facts.ts';
+import { firstCrossing, isDisturbed, spanOf } from './trace.ts';
+
+/** A fall at equal temperature that takes this many times the run's cleanest keeps some heat … */
+const SLOW_TIMES = 1.7;
+/** … if it takes this much longer too, so that a short one is no matter of a second, s. */
+export const LEAST_EXTRA_S = 12;
+/** Least span over which two falls are compared, K (7 °F). */
+const LEAST_SPAN_K = 7 / 1.8;
+/** Peaks further apart leave the drum unequally hot, and their falls do not compare, K (5 °F). */
+export const ALIKE_PEAKS_K = 5 / 1.8;
+/** A fall needs this many readings between the two levels for its time to be known. */
+const LEAST_READINGS = 3;
+
+/** Whether two falls start from peaks so near each other that they compare. */
+export function isAlike(leg: RunLeg, other: RunLeg): boolean {
+  return Math.abs(leg.from.tempC - other.from.tempC) <= ALIKE_PEAKS_K;
+}
+
+/**
+ * Evidence that a fall is slow at equal temperature against the run's cleanest one from a like peak; null where it is
+ * not, or where none compares.
+ */
+export function slowFall(leg: RunLeg, facts: RunFacts): Evidence | null {
+  const others = facts.legs.filter(
+    (other) =>
+      other !== leg &&
+      other.kind === 'cooling' &&
+      other.from.turnedBy === 'machine' &&
+      isAlike(leg, other) &&
+      !isDisturbed(other, facts),
+  );
+  const compared = others.flatMap((other) => [
+    ...comparedFalls(leg, other, facts),
+    ...comparedWholes(leg, other),
+  ]);
+  const cleanest = compared.reduce<(typeof compared)[number] | null>(
+    (best, one) => (best && best.times >= one.times ? best : one),
+    null,
+  );
+  // Crossings of a coarse record are known to about half its spacing each.
+  const leastExtraS = Math.max(LEAST_EXTRA_S, 2 * facts.spacingS);
+  if (!cleanest || cleanest.times < SLOW_TIMES || cleanest.extraS < leastExtraS) return null;
+  return {
+    how: 'falls-slowly',
+    fallRateKPerS: cleanest.spanK / cleanest.ownS,
+    usualRateKPerS: (cleanest.spanK / cleanest.ownS) * cleanest.times,
+    shareOfUsualRate: 1 / cleanest.times,
+    atC: cleanest.middleC,
+  };
+}
+
+/** How much longer a fall takes than another through the span that both pass clear of their corners. */
+function comparedFalls(leg: RunLeg, other: RunLeg, facts: RunFacts) {
+  const highC = Math.min(leg.from.tempC, other.from.tempC);
+  const lowC = Math.max(leg.to.tempC, other.to.tempC);
+  const topC = highC - 0.2 * (highC - lowC);
+  const footC = lowC + 0.2 * (highC - lowC);
+  if (topC - footC < LEAST_SPAN_K) return [];
+  const ownS = fallTime(leg, facts, topC, footC);
+  const otherS = fallTime(other, facts, topC, footC);
+  if (ownS === null || otherS === null || otherS < LEAST_READINGS * facts.spacingS) return [];
+  const spanK = topC - footC;
+  return [
+    { times: ownS / otherS, extraS: ownS - otherS, ownS, spanK, middleC: (topC + footC) / 2 },
+  ];
+}
+
+/** The same of two whole falls between like turns: the turns are located better than a coarse record crosses levels. */
+function comparedWholes(leg: RunLeg, other: RunLeg) {
+  const whole = leg.to.turnedBy === 'machine' && other.to.turnedBy === 'machine';
+  if (!whole || Math.abs(leg.to.tempC - other.to.tempC) > ALIKE_PEAKS_K) return [];
+  const ownS = leg.to.timeS - leg.from.timeS;
+  const otherS = other.to.timeS - other.from.timeS;
+  const spanK = leg.from.tempC - leg.to.tempC;
+  const middleC = (leg.from.tempC + leg.to.tempC) / 2;
+  return [{ times: ownS / otherS, extraS: ownS - otherS, ownS, spanK, middleC }];
+}
+
+function fallTime(leg: RunLeg, facts: RunFacts, topC: number, footC: number): number | null {
+  const fromS = firstCrossing(facts, spanOf(leg), topC, 'down');
+  const toS = firstCrossing(facts, spanOf(leg), footC, 'down');
+  return fromS === null || toS === null ? null : toS - fromS;
+}
