@@ -4,7 +4,7 @@ import { fTail } from './statistics/student-t.ts';
 import { firstAtOrAfter } from './first-at-or-after.ts';
 
 /** Values looked at; the rest is averaged. */
-const VALUES = 160;
+const VALUES = 120;
 const LEAST_VALUES = 14;
 /** Places tried for the knee, and the share of the leg left at either end of it. */
 const PLACES = 40;
@@ -34,15 +34,16 @@ export function findKnee(
   const { x, y } = gather(view, fromS, toS);
   const n = x.length;
   if (n < LEAST_VALUES) return null;
-  const one = leastSquares(x, y, null);
+  const sums = sumMoments(x, y);
+  const one = leastSquares(sums, null);
   if (!one) return null;
   let best: { place: number; fit: Fit } | null = null;
   for (let i = 0; i <= PLACES; i++) {
     const place = MARGIN + ((1 - 2 * MARGIN) * i) / PLACES;
-    const fit = leastSquares(x, y, place);
+    const fit = leastSquares(sums, place);
     if (fit && (!best || fit.squares < best.fit.squares)) best = { place, fit };
   }
-  if (!best || n < 8) return null;
+  if (!best) return null;
   const { place, fit } = best;
   const degrees = n - 6;
   const floor = Math.max(fit.squares / degrees, 0.1 * noiseK * noiseK);
@@ -55,7 +56,7 @@ export function findKnee(
   const lengthS = toS - fromS;
   return {
     timeS: fromS + place * lengthS,
-    tempC: valueAt(fit, place),
+    tempC: meanOf(y) + valueAt(fit, place),
     slopeBeforeKPerS: slopes.before / lengthS,
     slopeAfterKPerS: slopes.after / lengthS,
     pValue,
@@ -65,34 +66,59 @@ export function findKnee(
 /** Coefficients of 1, x, x², x³ and, with a knee, of the ramp after it; x from 0 to 1 along the leg. */
 type Fit = { coefficients: Float64Array; squares: number };
 
-function leastSquares(x: Float64Array, y: Float64Array, place: number | null): Fit | null {
+/** Powers of (x − ½) that moments go up to, and the columns of a row of them: those, y times the first five, y². */
+const POWERS = 7;
+const COLUMNS = POWERS + 5 + 1;
+
+/** Moments of the values from each on to the last: row i sums values i … n − 1. */
+type Moments = { x: Float64Array; table: Float64Array };
+
+function sumMoments(x: Float64Array, y: Float64Array): Moments {
+  const n = x.length;
+  const table = new Float64Array((n + 1) * COLUMNS);
+  const meanY = meanOf(y);
+  for (let i = n - 1; i >= 0; i--) {
+    const at = i * COLUMNS;
+    for (let c = 0; c < COLUMNS; c++) table[at + c] = table[at + COLUMNS + c]!;
+    const value = y[i]! - meanY;
+    let power = 1;
+    for (let k = 0; k < POWERS; k++) {
+      table[at + k]! += power;
+      if (k < 5) table[at + POWERS + k]! += value * power;
+      power *= x[i]! - 0.5;
+    }
+    table[at + COLUMNS - 1]! += value * value;
+  }
+  return { x, table };
+}
+
+/** A cubic, or with a place a cubic and a ramp from there on, from the moments alone. */
+function leastSquares({ x, table }: Moments, place: number | null): Fit | null {
   const p = place === null ? 4 : 5;
   const matrix = new Float64Array(p * p);
   const right = new Float64Array(p);
-  const terms = new Float64Array(5);
-  const fill = (at: number) => {
-    terms[0] = 1;
-    for (let j = 1; j < 4; j++) terms[j] = terms[j - 1]! * (at - 0.5);
-    terms[4] = place === null ? 0 : Math.max(0, at - place);
-  };
-  for (let i = 0; i < x.length; i++) {
-    fill(x[i]!);
-    for (let a = 0; a < p; a++) {
-      for (let b = 0; b <= a; b++) matrix[a * p + b]! += terms[a]! * terms[b]!;
-      right[a]! += terms[a]! * y[i]!;
-    }
+  for (let a = 0; a < 4; a++) {
+    for (let b = 0; b <= a; b++) matrix[a * p + b] = table[a + b]!;
+    right[a] = table[POWERS + a]!;
+  }
+  if (place !== null) {
+    const at = firstAtOrAfter(x, place) * COLUMNS;
+    const knee = place - 0.5;
+    const after = (column: number) => table[at + column + 1]! - knee * table[at + column]!;
+    for (let b = 0; b < 4; b++) matrix[4 * p + b] = after(b);
+    matrix[4 * p + 4] = after(1) - knee * after(0);
+    right[4] = after(POWERS);
   }
   const factor = choleskyFactor(matrix, p);
   if (!factor) return null;
   const coefficients = choleskySolve(factor, right, p);
-  let squares = 0;
-  for (let i = 0; i < x.length; i++) {
-    fill(x[i]!);
-    let off = y[i]!;
-    for (let a = 0; a < p; a++) off -= coefficients[a]! * terms[a]!;
-    squares += off * off;
-  }
-  return { coefficients, squares };
+  let squares = table[COLUMNS - 1]!;
+  for (let a = 0; a < p; a++) squares -= coefficients[a]! * right[a]!;
+  return { coefficients, squares: Math.max(0, squares) };
+}
+
+function meanOf(values: Float64Array): number {
+  return values.reduce((sum, value) => sum + value, 0) / values.length;
 }
 
 function slopesAt({ coefficients: c }: Fit, place: number) {

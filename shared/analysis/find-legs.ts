@@ -9,6 +9,10 @@ const CORNER = 0.15;
 const COLD_CORNER = 0.3;
 /** Left out before a turn whose switch instant is not known. */
 const LAST_CORNER = 0.08;
+/** A record with more legs than this has its legs fitted to fewer values each. */
+const MANY_LEGS = 200;
+const FEW_VALUES = 48;
+const MOST_VALUES = 400;
 
 /**
  * The stretches between extremes, each fitted as a first-order response clear of the corners at its ends.
@@ -22,6 +26,8 @@ export function findLegs(
   rating: Rating | null,
   noiseK: number,
 ): RunLeg[] {
+  const most = extremes.length > MANY_LEGS ? FEW_VALUES : MOST_VALUES;
+  const lastTauS = new Map<string, number | null>();
   return extremes.slice(1).map((to, i) => {
     const from = extremes[i]!;
     const kind = to.kind === 'peak' ? 'heating' : 'cooling';
@@ -31,11 +37,13 @@ export function findLegs(
     const startS = from.timeS + corner * lengthS;
     const isEnd = to.turnedBy === 'end';
     const endS = isEnd ? to.timeS : (to.switched?.timeS ?? to.timeS - LAST_CORNER * lengthS);
+    const fit = fitLeg(view.timesS, view.tempsC, startS, endS, lastTauS.get(kind) ?? null, most);
+    lastTauS.set(kind, fit && fit.tauS);
     return {
       kind,
       from,
       to,
-      fit: fitLeg(view.timesS, view.tempsC, startS, endS),
+      fit,
       knee: kind === 'heating' ? findKnee(view, startS, endS, noiseK) : null,
       fromCold,
       hasGap: gaps.some((gap) => gap.fromS < to.timeS && gap.toS > from.timeS),

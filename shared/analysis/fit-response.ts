@@ -19,12 +19,14 @@ export type ResponseFit = {
   degrees: number;
 };
 
-/** How the fit is held: `startC` fixed at t0, or free (null). */
-export type ResponseHold = { startC: number | null };
+/** How the fit is held: `startC` fixed at t0, or free (null); and a τ to try first, which saves the search where it serves. */
+export type ResponseHold = { startC: number | null; guessTauS: number | null };
 
 /** τ is looked for between a tenth of the usual spacing and this many spans; past that a leg shows no curvature. */
 const MOST_SPANS = 40;
 const PLACES = 48;
+/** A fit from a guess is believed when it ends within this many e-folds of it. */
+const NEAR_GUESS = 0.7;
 
 /**
  * Least-squares fit of a first-order response by variable projection: for a given τ the other parameters are linear,
@@ -42,11 +44,14 @@ export function fitResponse(
   timesS: ArrayLike<number>,
   tempsC: ArrayLike<number>,
   fromS = timesS[0] ?? 0,
-  hold: ResponseHold = { startC: null },
+  hold: ResponseHold = { startC: null, guessTauS: null },
 ): ResponseFit | null {
   const n = timesS.length;
   const parameters = hold.startC === null ? 3 : 2;
   if (n < parameters + 1) return null;
+  const nearGuess = hold.guessTauS && polish(timesS, tempsC, fromS, hold.guessTauS, hold.startC);
+  if (nearGuess && Math.abs(Math.log(nearGuess.tauS / hold.guessTauS!)) < NEAR_GUESS)
+    return nearGuess;
   const spanS = timesS[n - 1]! - timesS[0]!;
   const lowest = Math.log((0.1 * spanS) / n);
   const highest = Math.log(MOST_SPANS * spanS);
@@ -64,6 +69,7 @@ export function fitLeg(
   tempsC: Float64Array,
   fromS: number,
   toS: number,
+  guessTauS: number | null = null,
   most = 400,
 ): LegFit | null {
   const from = firstAtOrAfter(timesS, fromS);
@@ -81,7 +87,7 @@ export function fitLeg(
       temps[k]! += tempsC[i]! / (last - first);
     }
   }
-  const fit = fitResponse(times, temps);
+  const fit = fitResponse(times, temps, times[0], { startC: null, guessTauS });
   if (!fit) return null;
   const { asymptoteC, asymptoteErrorK, tauS, tauErrorS, startC, covarianceKS } = fit;
   const part = { asymptoteC, asymptoteErrorK, tauS, tauErrorS, startC, covarianceKS };
@@ -101,16 +107,19 @@ function project(
 ): Projection {
   const n = timesS.length;
   // T = A·(1 − e) + T0·e, e = exp(−t/τ): a line in e. Centred, since e hardly varies where τ is long.
+  const decays = new Float64Array(n);
   let meanE = 0;
   let meanT = 0;
   for (let i = 0; i < n; i++) {
-    meanE += Math.exp((fromS - timesS[i]!) / tauS) / n;
+    const e = Math.exp((fromS - timesS[i]!) / tauS);
+    decays[i] = e;
+    meanE += e / n;
     meanT += tempsC[i]! / n;
   }
   let ee = 0;
   let et = 0;
   for (let i = 0; i < n; i++) {
-    const e = Math.exp((fromS - timesS[i]!) / tauS);
+    const e = decays[i]!;
     const a = heldC === null ? e - meanE : 1 - e;
     ee += a * a;
     et += a * (tempsC[i]! - (heldC ?? meanT));
@@ -120,8 +129,7 @@ function project(
   const startC = heldC ?? asymptoteC + slope;
   let squares = 0;
   for (let i = 0; i < n; i++) {
-    const e = Math.exp((fromS - timesS[i]!) / tauS);
-    const off = tempsC[i]! - (asymptoteC + (startC - asymptoteC) * e);
+    const off = tempsC[i]! - (asymptoteC + (startC - asymptoteC) * decays[i]!);
     squares += off * off;
   }
   return { asymptoteC, startC, squares: Number.isFinite(squares) ? squares : Infinity };
@@ -169,7 +177,8 @@ function polish(
     const next = tauS + Math.max(-0.5 * tauS, Math.min(tauS, step));
     const tried = project(timesS, tempsC, fromS, next, heldC);
     if (!(tried.squares <= best.squares)) break;
-    const done = Math.abs(next - tauS) < 1e-13 * tauS;
+    const done =
+      Math.abs(next - tauS) < 1e-12 * tauS || best.squares - tried.squares < 1e-13 * best.squares;
     tauS = next;
     best = tried;
     if (done) break;

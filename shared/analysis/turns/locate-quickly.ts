@@ -29,8 +29,8 @@ export type QuickTask = {
 };
 
 const UNKNOWNS = CURVES + 1;
-const ROUNDS = 4;
-const MOST_VALUES = 90;
+const ROUNDS = 3;
+const MOST_VALUES = 60;
 
 /**
  * Locates one turn by a local fit of its known shape: five coefficients and the switch time, by Gauss–Newton.
@@ -60,7 +60,7 @@ export function locateQuickly(view: BinnedView, task: QuickTask): QuickTurn | nu
     const most = (task.endS - task.startS) / 8;
     const shift = Math.max(-most, Math.min(most, step[CURVES]!));
     switchS += shift;
-    if (round > 0 && Math.abs(shift) < 0.01 * shape.stepS) break;
+    if (round > 0 && Math.abs(shift) < shape.stepS) break;
   }
   if (!solution || !factor || switchS <= task.startS || switchS >= task.endS) return null;
   return readOff(task, switchS, solution, factor);
