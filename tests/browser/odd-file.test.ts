@@ -44,10 +44,10 @@ test('a file in an odd layout is refused with row and remedy, another is asked a
   await expect(page.getByLabel('Where the probe sat')).toHaveValue('In the duct');
 
   await page.getByRole('button', { name: 'Split into 2 runs' }).click();
-  const end = page.getByRole('slider', { name: 'End of Run 2' });
+  const end = page.getByRole('slider', { name: /^End of / }).last();
   await end.press('ArrowLeft');
   await expect(end).toHaveAttribute('aria-valuetext', '46:39');
-  await expect(page.getByLabel('To').nth(1)).toHaveValue('46:39');
+  await expect(page.getByLabel('To', { exact: true }).last()).toHaveValue('46:39');
 
   await sayHowItWasMade(page, /^K2/);
   await page.getByRole('button', { name: 'Add a mark' }).click();
@@ -58,6 +58,7 @@ test('a file in an odd layout is refused with row and remedy, another is asked a
   await page.getByRole('button', { name: 'Accept 2 runs' }).click();
 
   await expect(page).toHaveURL(/\/visits\/[0-9a-f-]{36}#runs$/);
-  await expect(page.getByRole('link', { name: /^Run 1/ })).toBeVisible();
-  await expect(page.getByRole('link', { name: /^Run 2/ })).toBeVisible();
+  const runs = page.getByRole('region', { name: 'Runs' }).getByRole('link', { name: /^Run \d/ });
+  await expect(runs.filter({ hasText: 'proven' })).not.toHaveCount(0);
+  expect(await runs.count()).toBeGreaterThanOrEqual(2);
 });

@@ -125,7 +125,12 @@ export const test = base.extend<Fixtures, WorkerFixtures>({
   anotherBrowser: async ({ browser, watch, baseURL }, use) => {
     const opened: BrowserContext[] = [];
     await use(async (options = {}) => {
-      const context = await browser.newContext({ ...(baseURL && { baseURL }), ...options });
+      const context = await browser.newContext({
+        ...(baseURL && { baseURL }),
+        // Else it would be the signed-in person's once more.
+        storageState: { cookies: [], origins: [] },
+        ...options,
+      });
       opened.push(context);
       await watch.over(context);
       return context.newPage();
