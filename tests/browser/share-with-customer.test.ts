@@ -33,7 +33,7 @@ test('a technician shares a run, the customer reads and prints it, and a revoked
   expect(inside.status()).toBe(401);
 
   await page.reload();
-  await expect(page.getByText(/^Opened /)).toBeVisible();
+  await expect(page.getByText(/^Opened today/)).toBeVisible();
   await page.getByRole('button', { name: 'Take back' }).first().click();
   const slip = page.getByRole('dialog', { name: 'Take this link back?' });
   await slip.getByRole('button', { name: 'Take back' }).click();
