@@ -35,10 +35,12 @@ export function findFindings(facts: RunFacts): Finding[] {
 
 function findHeatFaults(facts: RunFacts): Finding[] {
   const limitCycling = findLimitCycling(facts);
-  const runaway = findRunaway(facts);
-  // Short bursts fall as the housing does, and a runaway has not opened for a fall to be judged.
+  const lost = findHeatLost(facts);
+  // Short bursts fall as the housing does, not as the drum: their falls say nothing of heat left on.
   const staysOn = limitCycling ? null : findHeatStaysOn(facts);
-  return [runaway, staysOn, findHeatLost(facts), limitCycling].filter((found) => found !== null);
+  // A fall that goes on to the room kept no heat, however slow: a machine that stopped moves no air.
+  const kept = staysOn && lost && staysOn.fromS === lost.fromS ? null : staysOn;
+  return [findRunaway(facts), kept, lost, limitCycling].filter((found) => found !== null);
 }
 
 /** What the thermostat's own points say; nothing where a limit cuts before it, or where the probe hides them. */

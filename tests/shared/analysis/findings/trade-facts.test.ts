@@ -1,0 +1,110 @@
+import { describe, expect, test } from 'vitest';
+import type { Mark } from '#shared/analysis/series.ts';
+import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
+import { toCelsius } from '#shared/units.ts';
+import { codesOf, cool, cycles, heat, judge, readRun } from './build-run.ts';
+
+/** Figures of this file: common practice for a thermostat that opens at about 155 °F and closes at about 130. */
+
+const offAt = (timeS: number): Mark => ({ timeS, kind: 'heat-off' });
+
+describe('a hand-timed record, every 12 s in whole degrees', () => {
+  test('cut-outs at 155 and returns at 130 are in band and proven', () => {
+    const analysis = judge(readRun([...cycles([155, 155, 155, 155]), heat(140, 40)]));
+
+    expect(codesOf(analysis)).toEqual(['in-band']);
+    expect(analysis.outcome).toBe('proven');
+  });
+
+  test('a peak near 165 among good ones is still overshoot, not a runaway', () => {
+    const analysis = judge(readRun([...cycles([155, 156, 164, 155]), heat(140, 40)]));
+
+    expect(codesOf(analysis)).not.toContain('runaway');
+    expect(analysis.cutOuts.map(({ call }) => call)).not.toContain('outside');
+    expect(analysis.outcome).not.toBe('stop');
+  });
+
+  test('on from cold through 175, 180 and 190, heat off by hand: a runaway, stop', () => {
+    const analysis = judge(readRun([heat(190, 600, 230), cool(120, 150)]), { marks: [offAt(600)] });
+
+    expect(analysis.findings[0]).toMatchObject({
+      code: 'runaway',
+      evidence: { ended: 'by-hand', afterTrip: null, cutOutsBefore: 0, limitAtS: null },
+    });
+    expect(analysis.outcome).toBe('stop');
+  });
+
+  test('three good rounds and then on through 180: the thermostat had opened before', () => {
+    const stretches = [...cycles([155, 156, 157]), heat(186, 250, 220), cool(125, 120)];
+    const offS = 270 + 45 + 90 + 45 + 90 + 45 + 250;
+
+    const analysis = judge(readRun(stretches), { marks: [offAt(offS)] });
+
+    expect(analysis.findings[0]).toMatchObject({
+      code: 'runaway',
+      evidence: { afterTrip: true, cutOutsBefore: 3 },
+    });
+    expect(analysis.outcome).toBe('stop');
+  });
+
+  test('a click heard at 155 on a rise that goes on says that the thermostat opened', () => {
+    const click: Mark = { timeS: 330, kind: 'click' };
+    const series = readRun([heat(155, 330, 220), heat(187, 270, 220), cool(125, 120)]);
+
+    const analysis = judge(series, { marks: [click, offAt(600)] });
+
+    expect(analysis.findings[0]).toMatchObject({
+      code: 'runaway',
+      evidence: { afterTrip: true, clickAtS: 330 },
+    });
+  });
+
+  test('still on its way at 176 when the record ends is a runaway too', () => {
+    const analysis = judge(readRun([heat(176, 480, 215)]));
+
+    expect(analysis.findings[0]).toMatchObject({
+      code: 'runaway',
+      evidence: { ended: 'record-ends' },
+    });
+  });
+
+  test('passing the high limit of 196 is told with its moment', () => {
+    const analysis = judge(readRun([heat(200, 700, 230), cool(150, 60)]), { marks: [offAt(700)] });
+    const { limitAtS } = analysis.findings[0]?.evidence ?? {};
+
+    // By hand from the curve: 230 − 158·exp(−t/τ) with τ = 700/ln(158/30) reaches 196 at t = τ·ln(158/34).
+    expect(limitAtS).toBeCloseTo((700 * Math.log(158 / 34)) / Math.log(158 / 30), -1);
+  });
+
+  test('a technician who stops as late as 210 with a limit of 225 has a runaway under the limit', () => {
+    const highLimitC = toCelsius(225, 'F');
+    const rating = { ...DEFAULT_RATING, highLimitC, ceilingC: toCelsius(219, 'F') };
+
+    const analysis = judge(readRun([heat(210, 800, 240), cool(150, 90)]), {
+      rating,
+      marks: [offAt(800)],
+    });
+
+    expect(analysis.findings[0]).toMatchObject({ code: 'runaway', evidence: { limitAtS: null } });
+    expect(analysis.outcome).toBe('stop');
+  });
+
+  test('stopped by hand at 165 on the first rise, nothing is said yet', () => {
+    const analysis = judge(readRun([heat(165, 400, 210), cool(120, 90)]), { marks: [offAt(400)] });
+
+    expect(codesOf(analysis)).toEqual(['too-short']);
+    expect(analysis.outcome).toBe('not-proven');
+  });
+
+  test('open cold and closed hot: after two clean rounds the exhaust hangs at 140 for six minutes, stop', () => {
+    const stretches = [...cycles([155, 155]), heat(155, 90), cool(140.5, 360, 140)];
+
+    const analysis = judge(readRun(stretches));
+
+    expect(analysis.findings[0]).toMatchObject({
+      code: 'heat-stays-on',
+      evidence: { how: 'hangs' },
+    });
+    expect(analysis.outcome).toBe('stop');
+  });
+});
