@@ -80,9 +80,12 @@ function headerMiscount(sample: SampleLines, table: Table): ReadProblem | null {
   const { header, width, columns, delimiter } = table;
   if (!header || delimiter === ' ') return null;
   const named = header.findLastIndex((cell) => cell !== '') + 1;
-  const spare = columns.slice(named).every(({ kind }) => kind === 'empty' || kind === 'text');
-  const comments = header.slice(width).every((name) => roleOfName(name) === 'comment');
-  if (named === width || (named < width && spare) || (named > width && comments)) return null;
+  const spare = columns.slice(named).every(({ kind }) => kind === 'empty');
+  const comments = header.slice(width, named).every((name) => roleOfName(name) === 'comment');
+  const isWhole = header.slice(0, named).every((name) => name !== '');
+  if (named === width || (named < width && spare) || (named > width && comments && isWhole)) {
+    return null;
+  }
   const row = sample.head[table.firstLine]!.row;
   return problem('column-count', {
     row,

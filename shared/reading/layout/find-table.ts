@@ -1,7 +1,6 @@
 import { findUnit } from '../cells/find-unit.ts';
-import { isOpenWord } from '../cells/parse-number.ts';
 import { splitCells, type Delimiter } from '../text/split-cells.ts';
-import { isTyped, type CellKind } from './cell-kind.ts';
+import { cellKind, isTyped, type CellKind } from './cell-kind.ts';
 import { likelyReadings, type DelimiterChoice, type SplitLine } from './choose-delimiter.ts';
 
 /** One column's cells in the sampled rows of readings, in file order. */
@@ -43,17 +42,17 @@ export function findTable(
   const fits = lines.map((line) => fitsKinds(line, kinds));
   const firstLine = firstOf(fits, headCount);
   if (firstLine < 0) return null;
-  const { header, unitRow, from } = findHeader(headLines, firstLine, choice);
+  const found = findHeader(headLines, firstLine, choice);
   return {
     delimiter,
     width,
     columns: kinds.map((kind, index) =>
       sampleColumn(index, kind, lines, fits, firstLine, headCount),
     ),
-    header,
-    unitRow,
-    firstLine,
-    preamble: headLines.slice(0, from).filter((line) => line.trim() !== ''),
+    header: found?.header ?? null,
+    unitRow: found?.unitRow ?? null,
+    firstLine: found ? found.to + 1 : firstLine,
+    preamble: headLines.slice(0, found?.from ?? firstLine).filter((line) => line.trim() !== ''),
   };
 }
 
@@ -114,23 +113,49 @@ function sampleColumn(
 const UNIT_CELL =
   /^[([]?\s*(s|sec|secs|seconds?|ms|min|minutes?|h|hrs?|hours?|hh:mm(:ss)?|h:mm(:ss)?|mm?:ss|[ymd]{1,4}[-/.][ymd]{1,4}[-/.][ymd]{1,4}.*|%|% ?rh|v|mv|a|ma|w|kw|pa|hpa|-|#|no\.?)\s*[)\]]?$/i;
 
-/** The line right above the readings is a header if it is words; above a row of units, the line before. */
+/** Lines between a header and the first good row: rows of readings that are damaged, or rules. */
+const MOST_BETWEEN = 5;
+
+type FoundHeader = { header: string[]; unitRow: string[] | null; from: number; to: number };
+
+/** The nearest line of nothing but words above the readings, with a row of units under it or not. */
 function findHeader(
   headLines: string[],
   firstLine: number,
   choice: DelimiterChoice,
-): { header: string[] | null; unitRow: string[] | null; from: number } {
-  const nearest = lineAbove(headLines, firstLine);
-  const cells = nearest < 0 ? null : headerCells(headLines[nearest]!, choice);
-  if (!cells) return { header: null, unitRow: null, from: firstLine };
-  const above = lineAbove(headLines, nearest);
-  const upper = above < 0 ? null : headerCells(headLines[above]!, choice);
+): FoundHeader | null {
+  let at = firstLine;
+  let below: string[] | null = null;
+  let mixed: FoundHeader | null = null;
+  for (let passed = 0; passed <= MOST_BETWEEN; passed++) {
+    at = lineAbove(headLines, at);
+    if (at < 0) break;
+    const cells = splitHeader(headLines[at]!, choice);
+    const words = wordShare(cells, choice.width, headLines[at]!);
+    const unitRow = below;
+    below = areUnits(cells) ? cells : null;
+    if (words === 0) continue;
+    const to = unitRow ? lineBelow(headLines, at) : at;
+    const found = { header: cells, unitRow, from: at, to };
+    const upper = lineAbove(headLines, at);
+    const isUnits = below !== null && upper >= 0;
+    if (
+      isUnits &&
+      wordShare(splitHeader(headLines[upper]!, choice), choice.width, headLines[upper]!) > 0
+    ) {
+      continue;
+    }
+    if (words === 1) return found;
+    mixed ??= found;
+  }
+  return mixed;
+}
+
+function areUnits(cells: string[]): boolean {
   const filled = cells.filter((cell) => cell !== '');
-  const areUnits = filled.every(
-    (cell) => UNIT_CELL.test(cell) || (findUnit(cell) && cell.length < 12),
-  );
-  if (areUnits && upper) return { header: upper, unitRow: cells, from: above };
-  return { header: cells, unitRow: null, from: nearest };
+  const isUnit = (cell: string) =>
+    UNIT_CELL.test(cell) || (findUnit(cell) !== null && cell.length < 12);
+  return filled.length > 0 && filled.every(isUnit);
 }
 
 function lineAbove(lines: string[], index: number): number {
@@ -139,14 +164,23 @@ function lineAbove(lines: string[], index: number): number {
   return at;
 }
 
-/** Words in about as many cells as the readings have; null where the line is no header. */
-function headerCells(line: string, { delimiter, width }: DelimiterChoice): string[] | null {
-  if (/^sep=.\s*$/i.test(line)) return null;
-  let { cells } = splitCells(line.replace(/^\s*#\s*/, ''), delimiter);
-  if (delimiter === ' ' && cells.length !== width) cells = line.trim().split(/\s{2,}|\t+/);
-  const words = cells.filter((cell) => /[^\d\s.,:;/+-]/.test(cell) && !isOpenWord(cell)).length;
+function lineBelow(lines: string[], index: number): number {
+  let at = index + 1;
+  while (lines[at]?.trim() === '') at++;
+  return at;
+}
+
+function splitHeader(line: string, { delimiter, width }: DelimiterChoice): string[] {
+  const { cells } = splitCells(line.replace(/^\s*#\s*/, ''), delimiter);
+  return delimiter === ' ' && cells.length !== width ? line.trim().split(/\s{2,}|\t+/) : cells;
+}
+
+/** The share of filled cells that are words; 0 where that, or their number, makes the line no header. */
+function wordShare(cells: string[], width: number, line: string): number {
+  if (/^sep=.\s*$/i.test(line)) return 0;
+  const words = cells.filter((cell) => cellKind(cell) === 'text').length;
   const filled = cells.filter((cell) => cell !== '').length;
-  if (words === 0 || words < filled * 0.5) return null;
-  if (width === 1) return cells.length === 1 && !/[:=]/.test(line) ? cells : null;
-  return filled >= 2 && filled >= width * 0.5 ? cells : null;
+  if (words <= filled * 0.5) return 0;
+  if (width === 1) return cells.length === 1 && !/[:=]/.test(line) ? 1 : 0;
+  return filled >= 2 && filled >= width * 0.5 ? words / filled : 0;
 }
