@@ -64,7 +64,7 @@ export default {
       ],
     },
     borderRadius: { none: '0', key: '2px' },
-    borderWidth: { 0: '0', DEFAULT: '1px', line: '1.5px', bar: '3px', double: '4px', slip: '6px' },
+    borderWidth: { 0: '0', DEFAULT: '1px', line: '1.5px', bar: '3px', twin: '4px', slip: '6px' },
     boxShadow: { none: 'none' },
     extend: {
       minHeight: {

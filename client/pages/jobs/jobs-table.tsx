@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { JobListItem } from '#shared/schemas/jobs.ts';
+import type { RunCard } from '#shared/schemas/runs.ts';
 import type { Session } from '#shared/schemas/people.ts';
 import { CallGlyphs } from '../../components/glyphs.tsx';
 import { LoopArrow } from '../../components/signs.tsx';
@@ -66,82 +67,105 @@ export function footWords(jobs: JobListItem[], filter: ShownFilter) {
   return callbacks === 0 ? count : `${count} · ${callbacks} linked to earlier ones`;
 }
 
-/** Double rule in the margin: this one calls back an earlier job. */
-const CALLBACK_RULE =
-  'before:absolute before:inset-y-0 before:-left-3 before:border-l-double before:border-double before:border-ink wide:before:-left-[22px]';
+/** Double rule in the margin, of the whole row on a phone, at its first cell on a desk. */
+const RULE_ON_PHONE =
+  'max-wide:before:absolute max-wide:before:inset-y-0 max-wide:before:-left-3 max-wide:before:border-l-twin max-wide:before:border-double max-wide:before:border-ink';
+const RULE_ON_DESK =
+  'wide:relative wide:before:absolute wide:before:inset-y-0 wide:before:-left-[22px] wide:before:border-l-[8px] wide:before:border-double wide:before:border-ink';
 
-const PLAIN = 'max-wide:block max-wide:border-0 max-wide:p-0';
+const CELL = 'max-wide:block max-wide:border-0 max-wide:p-0';
+const IN_LINE = '-my-2.5 inline-flex min-h-touch items-center wide:-my-2 wide:min-h-10';
 
 function JobRow({ job, zone }: { job: JobListItem; zone: string }) {
   const nowMs = useNowMs();
-  const { callsBack, lastRun } = job;
+  const isCallback = job.callsBack !== null;
   return (
     <tr
-      className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:text-[16.5px] wide:leading-[1.28] wide:*:py-[11px] wide:*:align-top ${callsBack ? CALLBACK_RULE : ''}`}
+      className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:static wide:text-[16.5px] wide:leading-[1.28] wide:*:py-[11px] wide:*:align-top ${isCallback ? RULE_ON_PHONE : ''}`}
     >
-      <Td className={`fig text-[19px] font-semibold ${PLAIN}`}>
-        <Link
-          to={`/jobs/${job.id}`}
-          className="max-wide:-my-2.5 max-wide:inline-flex max-wide:min-h-touch max-wide:items-center wide:-my-2 wide:inline-flex wide:min-h-10 wide:items-center"
-        >
+      <Td className={`fig text-[19px] font-semibold ${CELL} ${isCallback ? RULE_ON_DESK : ''}`}>
+        <Link to={`/jobs/${job.id}`} className={IN_LINE}>
           {job.number}
         </Link>
       </Td>
       <Td
-        className={`fig whitespace-nowrap max-wide:col-start-1 max-wide:row-start-2 max-wide:text-print ${PLAIN}`}
+        className={`fig whitespace-nowrap max-wide:col-start-1 max-wide:row-start-2 max-wide:text-print ${CELL}`}
       >
         {dateWords(job.takenAtMs, zone, nowMs)}
       </Td>
       <Td
-        className={`max-wide:col-start-2 max-wide:row-span-2 max-wide:row-start-1 max-wide:text-[18px] ${PLAIN}`}
+        className={`max-wide:col-start-2 max-wide:row-span-2 max-wide:row-start-1 max-wide:text-[18px] wide:whitespace-nowrap ${CELL}`}
       >
         <b className="font-bold">{job.customer.name}</b>
         <br />
         <span className="text-print">{job.home.address}</span>
       </Td>
       <Td className="max-wide:hidden">{machineWords(job.machine)}</Td>
-      <Td
-        className={`font-serif text-[16px] leading-[1.35] font-stretch-[100%] max-wide:col-span-2 max-wide:col-start-2 max-wide:row-start-3 max-wide:pt-1.5 wide:max-w-[290px] ${PLAIN}`}
-      >
-        {quoted(job.complaint)}
-        {callsBack && (
-          <p className="flex items-center gap-2 pt-1 font-gothic text-small leading-[1.25] font-semibold font-stretch-[95%]">
-            <LoopArrow className="w-6" />
-            back after {daysBetween(callsBack.takenAtMs, job.takenAtMs, zone)} days, job{' '}
-            {callsBack.number}
-          </p>
-        )}
-      </Td>
-      <Td className={`max-wide:col-start-2 max-wide:row-start-4 max-wide:pt-2 ${PLAIN}`}>
-        {lastRun ? <Spark card={lastRun} /> : <span className="text-print">no run yet</span>}
-      </Td>
-      <Td
-        className={`max-wide:col-start-3 max-wide:row-start-4 max-wide:pt-1.5 max-wide:text-right ${PLAIN}`}
-      >
-        {lastRun && (
-          <>
-            <CallGlyphs calls={lastRun.calls} />
-            <br />
-            <span className={lastRun.outcome === 'stop' ? 'text-stop' : 'text-print'}>
-              {OUTCOME_WORDS[lastRun.outcome]}
-            </span>
-          </>
-        )}
-      </Td>
-      <Td
-        className={`max-wide:col-start-3 max-wide:row-span-2 max-wide:row-start-1 max-wide:text-right ${PLAIN}`}
-      >
-        <b className="font-bold">{JOB_STATE_WORDS[job.state]}</b>
-        <br />
-        <span className="text-print">
-          {job.nextVisitAtMs !== null && momentWords(job.nextVisitAtMs, zone, nowMs)}
-        </span>
-      </Td>
+      <ComplaintCell job={job} zone={zone} />
+      <RunCells run={job.lastRun} />
+      <StateCell job={job} zone={zone} nowMs={nowMs} />
       <Td className="whitespace-nowrap max-wide:hidden">
         {job.technicians.map(shortName).join(', ') || (
           <span className="text-print">nobody yet</span>
         )}
       </Td>
     </tr>
+  );
+}
+
+function ComplaintCell({ job: { complaint, callsBack, takenAtMs }, zone }: JobCellProps) {
+  return (
+    <Td
+      className={`font-serif text-[16px] leading-[1.35] font-stretch-[100%] max-wide:col-span-2 max-wide:col-start-2 max-wide:row-start-3 max-wide:pt-1.5 wide:max-w-[300px] wide:min-w-[180px] ${CELL}`}
+    >
+      {quoted(complaint)}
+      {callsBack && (
+        <p className="flex items-center gap-2 pt-1 font-gothic text-small leading-[1.25] font-semibold font-stretch-[95%]">
+          <LoopArrow className="w-6" />
+          back after {daysBetween(callsBack.takenAtMs, takenAtMs, zone)} days, job{' '}
+          {callsBack.number}
+        </p>
+      )}
+    </Td>
+  );
+}
+
+type JobCellProps = { job: JobListItem; zone: string };
+
+/** The last run as a spark, then its calls over its outcome. */
+function RunCells({ run }: { run: RunCard | null }) {
+  return (
+    <>
+      <Td className={`max-wide:col-start-2 max-wide:row-start-4 max-wide:pt-2 ${CELL}`}>
+        {run ? <Spark card={run} /> : <span className="text-print">no run yet</span>}
+      </Td>
+      <Td
+        className={`max-wide:col-start-3 max-wide:row-start-4 max-wide:pt-1.5 max-wide:text-right wide:whitespace-nowrap ${CELL}`}
+      >
+        {run && (
+          <>
+            <CallGlyphs calls={run.calls} />
+            <br />
+            <span className={run.outcome === 'stop' ? 'text-stop' : 'text-print'}>
+              {OUTCOME_WORDS[run.outcome]}
+            </span>
+          </>
+        )}
+      </Td>
+    </>
+  );
+}
+
+function StateCell({ job, zone, nowMs }: JobCellProps & { nowMs: number }) {
+  return (
+    <Td
+      className={`max-wide:col-start-3 max-wide:row-span-2 max-wide:row-start-1 max-wide:text-right wide:whitespace-nowrap ${CELL}`}
+    >
+      <b className="font-bold">{JOB_STATE_WORDS[job.state]}</b>
+      <br />
+      <span className="text-print">
+        {job.nextVisitAtMs !== null && momentWords(job.nextVisitAtMs, zone, nowMs)}
+      </span>
+    </Td>
   );
 }
