@@ -4,7 +4,7 @@ import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 import { createApp } from './app.ts';
 import { seedDemo } from './demo/seed-demo.ts';
-import { clientFiles, clientFromSource } from './http/client-files.ts';
+import { builtClient, clientFromSource } from './http/client-files.ts';
 import { migrate, openDatabase } from './db.ts';
 import { readEnv } from './env.ts';
 import { createLogger } from './log.ts';
@@ -29,7 +29,8 @@ async function start(): Promise<void> {
   const now = () => new Date();
 
   const server = createServer({ headersTimeout: HEADERS_MS, requestTimeout: REQUEST_MS });
-  const pages = env.development ? await clientFromSource(server) : clientFiles();
+  const client = env.development ? await clientFromSource(server) : builtClient();
+  const { pages } = client;
   const { dataDir, publicUrl, development } = env;
   const parts = { db, dataDir, now, workers, publicUrl, secrets, logger, pages, development };
   const tokens = env.demo ? await seedDemo(parts) : null;
@@ -52,6 +53,7 @@ async function start(): Promise<void> {
         .then(() => process.exit(0));
     });
     server.closeIdleConnections();
+    void client.close();
   };
   process.once('SIGTERM', close).once('SIGINT', close);
 }

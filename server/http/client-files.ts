@@ -9,6 +9,10 @@ const BUILT = fileURLToPath(
   new URL(fromSource ? '../../dist/client' : '../client', import.meta.url),
 );
 
+export function builtClient(): ClientPages {
+  return { pages: clientFiles(), close: () => Promise.resolve() };
+}
+
 /** The built application. Files under /assets carry a hash of what they hold in their name. */
 export function clientFiles(folder = BUILT): RequestHandler {
   const router = Router();
@@ -27,14 +31,17 @@ export function clientFiles(folder = BUILT): RequestHandler {
   return router;
 }
 
+/** `close` lets go of what holds the server open. */
+export type ClientPages = { pages: RequestHandler; close(): Promise<void> };
+
 /** Vite inside this process: one port, hot reload on the same server. */
-export async function clientFromSource(server: Server): Promise<RequestHandler> {
+export async function clientFromSource(server: Server): Promise<ClientPages> {
   const { createServer } = await import('vite');
   const vite = await createServer({
     server: { middlewareMode: true, hmr: { server } },
     appType: 'spa',
   });
-  return vite.middlewares;
+  return { pages: vite.middlewares, close: () => vite.close() };
 }
 
 function noCache(res: ServerResponse): void {
