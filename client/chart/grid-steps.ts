@@ -94,7 +94,7 @@ export function chooseGridSteps(frame: Frame): GridSteps {
 
 /** Steps under a minute are written m:ss, which takes more room. */
 function figureWidthPx(stepS: number): number {
-  return stepS < MINUTE ? 46 : 28;
+  return stepS < MINUTE ? 76 : 28;
 }
 
 function timeRulesAt(pxPerS: number): readonly (readonly [number, number])[] {

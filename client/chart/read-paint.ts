@@ -21,7 +21,7 @@ export function watchPaint(onChange: () => void): () => void {
   print.addEventListener('change', onChange);
   let isWatching = true;
   // A canvas does not ask for its fonts early enough: they are fetched by name, then it is laid down again.
-  void Promise.all(CHART_FONTS.map((font) => document.fonts.load(font))).then(
+  void Promise.allSettled(CHART_FONTS.map((font) => document.fonts.load(font))).then(
     () => isWatching && onChange(),
   );
   return () => {
