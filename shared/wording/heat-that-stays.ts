@@ -38,7 +38,7 @@ function runawaySentences(finding: Finding, { unit, judgedBy }: About): string[]
   if (aboveFromS !== null && aboveForS !== null && peakC !== null) {
     const span = formatSpan(aboveForS);
     said.push(
-      `From ${formatMoment(aboveFromS)} the exhaust was above the opens band and its allowance for ${span}, up to ${formatTemp(peakC, unit)}, with no cut-out.`,
+      `From ${formatMoment(aboveFromS)} the exhaust was above the opens band for ${span}, up to ${formatTemp(peakC, unit)}, with no cut-out.`,
     );
   }
   const limitAtS = numberOf(finding, 'limitAtS');

@@ -157,7 +157,7 @@ function closesHighCauses(): Cause[] {
       settles: 'Bias volts on high.',
     },
     {
-      cause: 'Disc worn',
+      cause: 'Worn disc in the thermostat',
       why: 'Open and close each have a tolerance of their own.',
       settles: 'A heated bench check.',
     },

@@ -1,4 +1,5 @@
 import type { Finding } from '../analysis/analysis.ts';
+import type { TooShortReason } from '../analysis/findings/too-short.ts';
 import { formatWithin } from './format.ts';
 import { counted, numberOf, type About, type Cause, type FindingWords } from './finding-words.ts';
 
@@ -39,16 +40,6 @@ export const UNDECIDED: Record<Code, FindingWords> = {
     nextChecks: () => ['If it was run with the duct off: a run with the duct on'],
   },
 };
-
-/** Why a record ends before anything can be said; `reason` of the evidence of too-short. */
-export type TooShortReason =
-  | 'no-rating'
-  | 'probe-too-slow'
-  | 'damp-load'
-  | 'ended-before-cut-out'
-  | 'too-few-cut-outs'
-  | 'no-reset'
-  | 'few-readings';
 
 const TOO_SHORT: Record<TooShortReason, { title: string; sentence: string; next: string[] }> = {
   'no-rating': {

@@ -11,7 +11,7 @@ import {
 
 /** What each evidence key means. The keys of a code are listed beside the code, in shared/analysis/findings. */
 const LABELS: Record<string, string> = {
-  aboveFromS: 'Above band and allowance from',
+  aboveFromS: 'Above the band from',
   aboveForS: 'Above it for',
   aboveC: 'Band and allowance end at',
   peakC: 'Highest reading',

@@ -2,6 +2,7 @@ import type { Finding, FindingCode } from '../analysis/analysis.ts';
 import type { About, FindingWords, WordedFinding } from './finding-words.ts';
 import { HEAT_THAT_STAYS } from './heat-that-stays.ts';
 import { HEAT_THAT_STOPS } from './heat-that-stops.ts';
+import { MISSING_HEAT } from './missing-heat.ts';
 import { OUT_OF_BAND } from './out-of-band.ts';
 import { UNDECIDED } from './undecided.ts';
 import { UNSTEADY } from './unsteady.ts';
@@ -10,6 +11,7 @@ import { wordEvidence } from './word-evidence.ts';
 const WORDS: Record<FindingCode, FindingWords> = {
   ...HEAT_THAT_STAYS,
   ...HEAT_THAT_STOPS,
+  ...MISSING_HEAT,
   ...OUT_OF_BAND,
   ...UNSTEADY,
   ...UNDECIDED,

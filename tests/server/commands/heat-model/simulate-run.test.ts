@@ -1,5 +1,12 @@
 import { expect, test } from 'vitest';
-import { ELECTRIC, GAS, SOUND, type Watch } from '#server/commands/heat-model/machine.ts';
+import {
+  ELECTRIC,
+  GAS,
+  SOUND,
+  type Faults,
+  type Machine,
+  type Watch,
+} from '#server/commands/heat-model/machine.ts';
 import { createRandom } from '#server/commands/heat-model/random.ts';
 import { simulateRun } from '#server/commands/heat-model/simulate-run.ts';
 import { trueTurningPoints } from '#server/commands/heat-model/true-turning-points.ts';
@@ -7,7 +14,7 @@ import { trueTurningPoints } from '#server/commands/heat-model/true-turning-poin
 const watch: Watch = { forS: 900, heatOffAtC: Infinity, afterHeatOffS: 0 };
 const swingK = 4 / 1.8;
 
-function turnsOf(...[machine, faults, watched]: Parameters<typeof simulateRun>) {
+function turnsOf(machine: Machine, faults: Faults, watched: Watch) {
   return trueTurningPoints(simulateRun(machine, faults, watched, createRandom(1)), swingK);
 }
 
