@@ -30,11 +30,14 @@ async function ask(given: Partial<Record<keyof OwnerAsked, string | undefined>>)
   if (name !== undefined && email !== undefined && password !== undefined) {
     return { name, email, password };
   }
+  if (!process.stdin.isTTY) {
+    throw new Error('Run this in a terminal, or set OWNER_NAME, OWNER_EMAIL and OWNER_PASSWORD.');
+  }
   const screen = new QuietScreen();
   const lines = createInterface({
     input: process.stdin,
     output: screen,
-    terminal: process.stdin.isTTY,
+    terminal: true,
   });
   try {
     return {

@@ -41,6 +41,13 @@ test('jobs are numbered one after the other from 1001', async () => {
   expect([second.body.number, third.body.number]).toEqual([1002, 1003]);
 });
 
+test('jobs taken at the same moment get numbers of their own', async () => {
+  const taken = await Promise.all(Array.from({ length: 12 }, () => newJob()));
+
+  const numbers = taken.map(({ body }) => Number(body.number));
+  expect(numbers.toSorted((a, b) => a - b)).toEqual(Array.from({ length: 12 }, (_, i) => 1002 + i));
+});
+
 test('a new job is booked, with its machine, home and customer', async () => {
   const { status, body } = await newJob({ complaint: ' It stops after a minute ' });
 
