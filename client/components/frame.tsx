@@ -148,7 +148,8 @@ type SitePageProps = {
 export function SitePage({ back, top, children, deck, isWide = false }: SitePageProps) {
   const width = isWide ? '' : 'max-w-site desk:border-x desk:border-print';
   return (
-    <div
+    <main
+      id="main"
       className={`mx-auto grid min-h-dvh grid-cols-[minmax(0,1fr)] grid-rows-[auto_1fr_auto] bg-paper desk:min-h-[calc(100dvh-60px)] ${width}`}
     >
       <header
@@ -165,10 +166,8 @@ export function SitePage({ back, top, children, deck, isWide = false }: SitePage
         <div className={`min-w-0 flex-1 ${back ? '' : 'pl-3'}`}>{top}</div>
         <ThemeWord className="desk:hidden" />
       </header>
-      <main id="main" className="min-w-0">
-        {children}
-      </main>
+      <div className="min-w-0">{children}</div>
       {deck}
-    </div>
+    </main>
   );
 }

@@ -7,10 +7,16 @@ import { daysBetween, timeWords } from '../../format/when.ts';
 import { Reach } from './reach.tsx';
 import { isDone, runsWords } from './rounds-words.ts';
 
-type RoundStopProps = { visit: RoundsItem; zone: string; isNext: boolean };
+type RoundStopProps = {
+  visit: RoundsItem;
+  zone: string;
+  isNext: boolean;
+  /** Under a technician's name where the list holds several technicians. */
+  heading: 'h2' | 'h3';
+};
 
 /** One visit of the day: the clock in the margin, what it is about, how to reach it. */
-export function RoundStop({ visit, zone, isNext }: RoundStopProps) {
+export function RoundStop({ visit, zone, isNext, heading: Heading }: RoundStopProps) {
   const { job } = visit;
   const done = isDone(visit);
   const ink = done ? 'text-print' : 'text-ink';
@@ -25,14 +31,14 @@ export function RoundStop({ visit, zone, isNext }: RoundStopProps) {
         </span>
       </p>
       <div className="min-w-0">
-        <h3 className={`text-figure leading-[1.15] font-stretch-[97%] ${ink}`}>
+        <Heading className={`text-figure leading-[1.15] font-stretch-[97%] ${ink}`}>
           <Link
             to={`/visits/${visit.id}`}
             className="inline-flex min-h-touch items-center font-gothic decoration-1 underline-offset-[.2em]"
           >
             {job.customer.name}
           </Link>
-        </h3>
+        </Heading>
         <p className="words text-[16px] leading-[1.3] font-medium text-print">
           {machineWords(job.machine)}
         </p>

@@ -69,7 +69,7 @@ function Day({ rounds, nowMs }: { rounds: Rounds; nowMs: number }) {
       <DaySteps day={day} today={today} />
       {visits.length === 0 && <EmptyDay isOwn={isOwn} isToday={day === today} />}
       {isOwn ? (
-        <Stops visits={visits} zone={shop.zone} nextId={next?.id} />
+        <Stops visits={visits} zone={shop.zone} nextId={next?.id} heading="h2" />
       ) : (
         byTechnician(visits).map(({ name, visits: own }) => (
           <section key={name} className="pb-6">
@@ -78,7 +78,7 @@ function Day({ rounds, nowMs }: { rounds: Rounds; nowMs: number }) {
                 {name}
               </SectionHead>
             </div>
-            <Stops visits={own} zone={shop.zone} nextId={undefined} />
+            <Stops visits={own} zone={shop.zone} nextId={undefined} heading="h3" />
           </section>
         ))
       )}
@@ -91,19 +91,34 @@ function DaySteps({ day, today }: { day: string; today: string }) {
   return (
     <nav aria-label="Days" className="flex flex-wrap justify-between gap-x-4 px-3 pb-1">
       <WordLink to={to(stepDay(day, -1))}>Day before</WordLink>
-      {day !== today && <WordLink to={to(today)}>Today</WordLink>}
+      {day !== today && (
+        <WordLink to={to(today)} className="min-w-12 justify-center">
+          Today
+        </WordLink>
+      )}
       <WordLink to={to(stepDay(day, 1))}>Day after</WordLink>
     </nav>
   );
 }
 
-type StopsProps = { visits: Rounds['visits']; zone: string; nextId: string | undefined };
+type StopsProps = {
+  visits: Rounds['visits'];
+  zone: string;
+  nextId: string | undefined;
+  heading: 'h2' | 'h3';
+};
 
-function Stops({ visits, zone, nextId }: StopsProps) {
+function Stops({ visits, zone, nextId, heading }: StopsProps) {
   return (
     <ol className="pb-4">
       {visits.map((visit) => (
-        <RoundStop key={visit.id} visit={visit} zone={zone} isNext={visit.id === nextId} />
+        <RoundStop
+          key={visit.id}
+          visit={visit}
+          zone={zone}
+          isNext={visit.id === nextId}
+          heading={heading}
+        />
       ))}
     </ol>
   );

@@ -147,7 +147,7 @@ export const SCREENS: Screen[] = [
     name: 'book a visit',
     person: 'nora',
     open: at(({ job }) => `/jobs/${job}/visits/new`),
-    standing: /what to bring/,
+    standing: /what to know/i,
   },
   { name: 'homes', person: 'nora', open: at('/homes'), standing: /homes/ },
   { name: 'home', person: 'nora', open: at(({ home }) => `/homes/${home}`), standing: /Machines/ },
