@@ -1,13 +1,6 @@
 import type { Finding } from '../analysis/analysis.ts';
 import { formatBand, formatSpan, formatStep, formatTemp } from './format.ts';
-import {
-  counted,
-  isGas,
-  numberOf,
-  type About,
-  type Cause,
-  type FindingWords,
-} from './finding-words.ts';
+import { isGas, numberOf, type About, type Cause, type FindingWords } from './finding-words.ts';
 
 /** Words for heat that is weak or never comes. Causes in trade order, common practice. */
 export const MISSING_HEAT: Record<'below-cut-out' | 'no-heat', FindingWords> = {
