@@ -4,8 +4,8 @@ import type { Series } from './series.ts';
 const DEVIATIONS = 7;
 /** Common practice: nothing below 1.5 K (2.7 °F) is worth setting aside; robust fits take care of it. */
 const LEAST_K = 1.5;
-/** At the record's ends there is one side only to go by. */
-const END_FACTOR = 3;
+/** At the record's ends there is one side only to go by: an exhaust moves no faster than this (common practice). */
+const END_RATE_K_PER_S = 1.5;
 
 export type Despiked = { series: Series; spikes: number };
 
@@ -53,9 +53,9 @@ function standsOut(timesS: Float64Array, tempsC: Float64Array, i: number): numbe
   const n = tempsC.length;
   const timeS = timesS[i]!;
   const tempC = tempsC[i]!;
-  if (i === 0) return endStandsOut(tempC, lineAt(timesS, tempsC, 1, 2, timeS), tempsC[1]!);
+  if (i === 0) return Math.abs(tempC - tempsC[1]!) - END_RATE_K_PER_S * (timesS[1]! - timeS);
   if (i === n - 1) {
-    return endStandsOut(tempC, lineAt(timesS, tempsC, n - 3, n - 2, timeS), tempsC[n - 2]!);
+    return Math.abs(tempC - tempsC[n - 2]!) - END_RATE_K_PER_S * (timeS - timesS[n - 2]!);
   }
   const between = lineAt(timesS, tempsC, i - 1, i + 1, timeS);
   const fromBefore = i >= 2 ? lineAt(timesS, tempsC, i - 2, i - 1, timeS) : between;
@@ -63,12 +63,6 @@ function standsOut(timesS: Float64Array, tempsC: Float64Array, i: number): numbe
   const above = tempC - Math.max(between, fromBefore, fromAfter, tempsC[i - 1]!, tempsC[i + 1]!);
   const below = Math.min(between, fromBefore, fromAfter, tempsC[i - 1]!, tempsC[i + 1]!) - tempC;
   return Math.max(above, below);
-}
-
-function endStandsOut(tempC: number, carriedOn: number, neighbour: number): number {
-  const above = tempC - Math.max(carriedOn, neighbour);
-  const below = Math.min(carriedOn, neighbour) - tempC;
-  return Math.max(above, below) / END_FACTOR;
 }
 
 function lineAt(

@@ -3,7 +3,7 @@ import type { Series } from './series.ts';
 import { quantile } from './statistics/quantile.ts';
 import { findExtremes } from './turns/find-extremes.ts';
 import { firstAtOrAfter } from './first-at-or-after.ts';
-import { locateTurns, type LocatedTurn } from './turns/locate-turns.ts';
+import { locateTurns, type LocatedTurn, type RoughTurn } from './turns/locate-turns.ts';
 
 /** The zig-zag looks for a little less than the threshold: smoothing has taken something off each swing. */
 const ROUGH_SHARE = 0.8;
@@ -12,6 +12,10 @@ const CLEAR_OF = 1.5;
 const CLEAR_SHARE = 0.1;
 const LEVEL_STEP = 1.25;
 const MOST_ROUNDS = 4;
+/** A located turn lies within this share of its smaller swing from the reading. */
+const CREDIBLE_SHARE = 0.5;
+/** Noise makes swings of this many deviations. */
+const NOISE_SWING = 8;
 
 /**
  * All extremes of a record whose swings reach the threshold, located by a fit of lagged first-order legs.
@@ -83,7 +87,12 @@ function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number):
   );
   return turns.map((turn, i): Extreme => {
     const isEnd = i === 0 || i === turns.length - 1;
-    const found = (isEnd ? null : located[i - 1]) ?? atReading(turn, noiseK);
+    const fitted = isEnd ? null : located[i - 1];
+    const swing = isEnd ? 0 : smallerSwing(turns, i);
+    const found =
+      fitted && isCredible(fitted, turn.tempC, swing, noiseK)
+        ? fitted
+        : atReading(view, turn, noiseK);
     return {
       kind: turn.kind,
       turnedBy: i === 0 ? 'start' : isEnd ? 'end' : 'machine',
@@ -93,9 +102,26 @@ function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number):
   });
 }
 
-/** What is left where no fit holds: the smoothed reading itself. */
-function atReading(turn: { timeS: number; tempC: number }, noiseK: number): LocatedTurn {
-  return { timeS: turn.timeS, tempC: turn.tempC, uK: 2 * noiseK, switched: null };
+function smallerSwing(turns: { tempC: number }[], i: number): number {
+  const tempC = turns[i]!.tempC;
+  return Math.min(Math.abs(tempC - turns[i - 1]!.tempC), Math.abs(tempC - turns[i + 1]!.tempC));
+}
+
+/**
+ * A fit that ends far from the readings of a swing that is no noise, or says that it knows nothing of it, is no better
+ * than the reading. A swing that noise could make is left to the fit, which shows how little of it is real.
+ */
+function isCredible({ tempC, uK }: LocatedTurn, readC: number, swing: number, noiseK: number) {
+  if (swing < NOISE_SWING * noiseK) return true;
+  return Math.abs(tempC - readC) < CREDIBLE_SHARE * swing && uK < swing;
+}
+
+/** What is left where no fit holds: the reading itself; the true turn may lie half a step beyond it. */
+function atReading(view: BinnedView, turn: RoughTurn, noiseK: number): LocatedTurn {
+  const at = firstAtOrAfter(view.timesS, turn.timeS);
+  const stepK = (i: number) => Math.abs(turn.tempC - (view.tempsC[i] ?? turn.tempC));
+  const uK = Math.hypot(2 * noiseK, 0.5 * Math.max(stepK(at - 1), stepK(at + 1)));
+  return { timeS: turn.timeS, tempC: turn.tempC, uK, switched: null };
 }
 
 /**

@@ -132,7 +132,7 @@ function buildProblem(
   looseness[LN_TAU_COOL] = shared ? 0.4 : TAU_LOOSENESS;
   looseness[LN_TAU_FIRST] = 1.2;
   looseness[LN_LAG] = shared ? 0.2 : LAG_LOOSENESS;
-  looseness[LOGIT_RATIO] = shared ? 0.8 : 1.5;
+  looseness[LOGIT_RATIO] = shared ? 0.8 : 3;
 
   const nodes = [
     values.tempsC[0]!,
