@@ -28,6 +28,9 @@ export function Cells({ className = '', children }: { className?: string; childr
 const INPUT =
   'block w-full border-0 bg-transparent px-3 pb-2 font-gothic text-[20px] leading-[1.3] font-medium font-stretch-[94%] tabular-nums text-ink outline-none min-h-cell';
 
+/** The control reaches up behind the label's last line, so that the whole cell is the control. */
+const UNDER_LABEL = '-mt-[25px] pt-[29px]';
+
 /** One cell: the label inside its top left, the control filling it, hint and fault under the value. */
 function Cell({
   label,
@@ -42,10 +45,7 @@ function Cell({
     <div
       className={`relative min-w-0 bg-strip focus-within:z-10 focus-within:outline-3 focus-within:-outline-offset-2 focus-within:outline-focus ${error ? 'pl-2 before:absolute before:inset-y-0 before:left-0 before:w-1.5 before:bg-stop' : ''} ${className}`}
     >
-      <label
-        htmlFor={id}
-        className={`lab absolute top-[7px] right-3 ${error ? 'left-5' : 'left-3'}`}
-      >
+      <label htmlFor={id} className="lab relative z-[1] block px-3 pt-[7px]">
         {label}
       </label>
       {children}
@@ -90,7 +90,11 @@ export function TextField({
 }: CellProps & WithRef<InputHTMLAttributes<HTMLInputElement>, HTMLInputElement>) {
   return (
     <Cell {...{ label, name, hint, error, className }}>
-      <input {...input} {...described({ name, hint, error })} className={`${INPUT} pt-[29px]`} />
+      <input
+        {...input}
+        {...described({ name, hint, error })}
+        className={`${INPUT} ${UNDER_LABEL}`}
+      />
     </Cell>
   );
 }
@@ -110,7 +114,7 @@ export function TextAreaField({
         rows={rows}
         {...area}
         {...described({ name, hint, error })}
-        className={`${INPUT} mt-[27px] resize-none pt-0.5`}
+        className={`${INPUT} resize-none pt-0.5`}
       />
     </Cell>
   );
@@ -131,7 +135,7 @@ export function SelectField({
         <select
           {...select}
           {...described({ name, hint, error })}
-          className={`${INPUT} cursor-pointer appearance-none truncate pt-[29px] pr-9`}
+          className={`${INPUT} cursor-pointer appearance-none truncate pr-9 ${UNDER_LABEL}`}
         >
           {children}
         </select>

@@ -47,7 +47,7 @@ export function FormHead({ form, title, lead, above }: FormHeadProps) {
       <ErrorSummary problems={form.problems} attempt={form.attempt} />
       {above}
       <PageHeading hasErrors={form.problems.length > 0}>{title}</PageHeading>
-      <div className="max-w-read pt-1.5 pb-5 text-say">{lead}</div>
+      <div className="max-w-read pt-1.5 pb-5 text-say wrap-anywhere">{lead}</div>
     </>
   );
 }

@@ -18,7 +18,7 @@ export function AccountPage() {
   return (
     <DeskPage>
       <FormHead form={form} title={person.name} lead={`${person.email}, ${person.role}.`} />
-      <div className="grid max-w-form gap-11">
+      <div className="grid max-w-form grid-cols-[minmax(0,1fr)] gap-11">
         <PasswordForm form={form} email={person.email} />
         <SignOut />
       </div>

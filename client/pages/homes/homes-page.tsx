@@ -24,7 +24,7 @@ export function HomesPage() {
         <search className="order-last col-span-full wide:order-none wide:col-span-1">
           <Cells>
             <TextField
-              label="Find by name, address, phone, make, model or serial"
+              label="Find by name, address, phone or serial"
               name="find"
               type="search"
               autoComplete="off"
