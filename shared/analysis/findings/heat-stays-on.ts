@@ -8,6 +8,8 @@ import { firstCrossing, isDisturbed, lasted, spanWithTail, totalU } from './trac
 
 /** Clean off-times for which a fall may hang above the reset band. */
 const HANG_TIMES = 3;
+/** Share of the rated differential that a fall must cover to be a measure for others. */
+const LEAST_FALL_SHARE = 0.5;
 
 /**
  * The thermostat opened and some heat stays on: the exhaust hangs above the reset band, falls too slowly, or levels
@@ -54,18 +56,24 @@ function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
  * median would not be a clean one. With none, from the heating leg before.
  */
 function usualOff(leg: RunLeg, facts: RunFacts, rating: Rating): number | null {
-  const others = completeFalls(facts).filter((other) => other !== leg && isAlike(leg, other));
+  const others = wholeFalls(facts, rating).filter((other) => other !== leg && isAlike(leg, other));
   if (others.length > 0) return Math.min(...others.map(({ from, to }) => to.timeS - from.timeS));
   const heating = facts.legs[facts.legs.indexOf(leg) - 1];
   const { roomC } = facts;
-  if (!heating?.fit || roomC === null || roomC >= rating.closesC) return null;
+  const opened = leg.from.tempC + totalU(facts, leg.from) >= bandOf('cut-out', rating).lowC;
+  if (!opened || !heating?.fit || roomC === null || roomC >= rating.closesC) return null;
   return heating.fit.tauS * Math.log((leg.from.tempC - roomC) / (rating.closesC - roomC));
 }
 
-function completeFalls({ legs }: RunFacts): RunLeg[] {
+/** Complete falls that reach far enough to be the thermostat's: a dip on the way up sets no measure. */
+function wholeFalls({ legs }: RunFacts, rating: Rating): RunLeg[] {
+  const leastK = LEAST_FALL_SHARE * (rating.opensC - rating.closesC);
   return legs.filter(
     ({ kind, from, to }) =>
-      kind === 'cooling' && from.turnedBy === 'machine' && to.turnedBy === 'machine',
+      kind === 'cooling' &&
+      from.turnedBy === 'machine' &&
+      to.turnedBy === 'machine' &&
+      from.tempC - to.tempC >= leastK,
   );
 }
 

@@ -77,7 +77,7 @@ function unnamedCodes(cutOuts: number[], resets: number[]): FindingCode[] {
     ...resets.map((tempF) => Math.max(tempF - 135, 115 - tempF)),
   );
   if (outside > CLEAR_F) return ['mixed'];
-  if (outside > 1.5) return ['mixed', 'too-close'];
+  if (outside > 1.5) return ['mixed', 'too-close', 'in-band'];
   const means = Math.max(Math.abs(mean(cutOuts) - 155), Math.abs(mean(resets) - 130));
   if (means < 4.2) return ['in-band'];
   return means > 5.8 ? ['too-close'] : ['in-band', 'too-close'];

@@ -11,16 +11,15 @@ const START_WITHIN_MS = 120_000;
 export type BuiltServer = Awaited<ReturnType<typeof startBuiltServer>>;
 
 /** The built server with its demo shop, on this machine only, in a folder of its own. */
-export async function startBuiltServer(port: number) {
+export async function startBuiltServer() {
   const dataDir = await mkdtemp(join(tmpdir(), 'fusekeeper-bench-'));
-  const env = { ...process.env, NODE_ENV: 'production', HOST: '127.0.0.1', PORT: String(port) };
+  const env = { ...process.env, NODE_ENV: 'production', HOST: '127.0.0.1', PORT: '0' };
   const child = spawn(process.execPath, [ENTRY], {
     env: { ...env, DATA_DIR: dataDir, LOG_LEVEL: 'warn' },
     stdio: ['ignore', 'pipe', 'inherit'],
   });
-  const origin = `http://127.0.0.1:${port}`;
   try {
-    await saysItIsThere(child);
+    const origin = await saysWhereItIs(child);
     const cookie = await signIn(origin);
     return {
       origin,
@@ -37,13 +36,17 @@ export async function startBuiltServer(port: number) {
   }
 }
 
-async function saysItIsThere(child: ChildProcess): Promise<void> {
+/** The address in what the server says once it listens; it chose a free port by itself. */
+async function saysWhereItIs(child: ChildProcess): Promise<string> {
   const signal = AbortSignal.timeout(START_WITHIN_MS);
   const ended = once(child, 'exit', { signal }).then(() => {
     throw new Error(`${ENTRY} ended by itself; run npm run build:server first`);
   });
-  if (child.stdout) await Promise.race([once(child.stdout, 'data', { signal }), ended]);
   ended.catch(() => undefined);
+  if (!child.stdout) throw new Error('the server cannot be heard');
+  const [said] = await Promise.race([once(child.stdout, 'data', { signal }), ended]);
+  const port = /localhost:(\d+)/.exec(String(said))?.[1];
+  return `http://127.0.0.1:${port}`;
 }
 
 async function stop(child: ChildProcess, dataDir: string): Promise<void> {

@@ -3,7 +3,6 @@ import { findVisit, importByHttp } from './import-by-http.ts';
 import { measureLatency, type Latencies } from './measure-latency.ts';
 import { millionRowLog } from './million-row-log.ts';
 
-const PORT = 4873;
 const IDLE_MS = 4000;
 const MOST_ROUNDS = 9;
 
@@ -18,7 +17,7 @@ export async function bench(args: string[]): Promise<void> {
   console.log(
     'round  idle p50  p99   busy p50  p99   max    ratio  send   read   accept ms  peak MB',
   );
-  const server = await startBuiltServer(PORT);
+  const server = await startBuiltServer();
   try {
     const visitId = await findVisit(server);
     const url = `${server.origin}/api/session`;

@@ -212,6 +212,16 @@ test('a probe too slow for the cycles is not judged, but a runaway on it is stil
   expect(codesOf(runaway)[0]).toBe('runaway');
 });
 
+test('a dip on the way up is no measure for the falls after it', () => {
+  const dip = [heat(133, 130), cool(128, 12), heat(155, 150), cool(130, 45)];
+  const rounds = [heat(155, 90), cool(130, 45), heat(155, 90), cool(130, 45), heat(140, 30)];
+
+  const analysis = judge(readRun([...dip, ...rounds], probe));
+
+  expect(codesOf(analysis)).not.toContain('heat-stays-on');
+  expect(analysis.outcome).not.toBe('stop');
+});
+
 test('a cut-out whose value and uncertainty reach the ceiling means stop, whatever the headline', () => {
   const rating = {
     ...DEFAULT_RATING,

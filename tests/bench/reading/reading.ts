@@ -1,0 +1,64 @@
+import { execFileSync } from 'node:child_process';
+import { mkdtempSync, openSync, closeSync, rmSync, statSync, writeSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+
+const ROUNDS = 3;
+const ROWS = 1_000_000;
+
+/**
+ * `npm run bench -- reading [ROWS]`: a file of two probes with ISO stamps, read and analysed, beside
+ * `Papa.parse(text)` alone on the same bytes in the same process; and the memory of a process that reads and
+ * analyses it once, over the same process idle.
+ */
+export function bench(args: string[]): void {
+  const rows = Number(args[0] ?? ROWS);
+  const folder = mkdtempSync(join(tmpdir(), 'fusekeeper-reading-'));
+  try {
+    const file = join(folder, 'big.csv');
+    writeBigLog(file, rows);
+    console.log(`${rows} rows, ${(statSync(file).size / 1e6).toFixed(1)} MB`);
+    for (const mode of ['speed', 'memory']) process.stdout.write(measure(folder, file, mode));
+  } finally {
+    rmSync(folder, { recursive: true });
+  }
+}
+
+/** Bundled as the product is, so that what is measured is what is served. */
+function measure(folder: string, file: string, mode: string): string {
+  const root = fileURLToPath(new URL('../../../', import.meta.url));
+  const script = join(root, 'node_modules', '.cache', 'bench-reading', 'measure.js');
+  const source = fileURLToPath(new URL('./measure.ts', import.meta.url));
+  const esbuild = join(root, 'node_modules', '.bin', 'esbuild');
+  const flags = [
+    '--bundle',
+    '--packages=external',
+    '--platform=node',
+    '--format=esm',
+    '--target=node20',
+  ];
+  execFileSync(esbuild, [source, ...flags, `--outfile=${script}`, '--log-level=warning'], {
+    cwd: root,
+  });
+  const node = ['--expose-gc', script, file, mode, String(ROUNDS)];
+  return execFileSync(process.execPath, node, { encoding: 'utf8', cwd: folder });
+}
+
+/** A dryer that cycles every six minutes or so for the whole length, rounded to a tenth. */
+function writeBigLog(file: string, rows: number): void {
+  const out = openSync(file, 'w');
+  const startMs = Date.UTC(2026, 4, 4, 10);
+  let text = 'time,Exhaust °F,Inlet °F\n';
+  for (let i = 0; i < rows; i++) {
+    const exhaust = 142.5 + 13 * Math.sin(i / 60) + ((i * 7919) % 13) / 20;
+    const stamp = new Date(startMs + i * 1000).toISOString().slice(0, 19);
+    text += `${stamp}Z,${exhaust.toFixed(1)},${(72 + ((i * 31) % 9) / 10).toFixed(1)}\n`;
+    if (text.length > 1 << 20) {
+      writeSync(out, text);
+      text = '';
+    }
+  }
+  writeSync(out, text);
+  closeSync(out);
+}
