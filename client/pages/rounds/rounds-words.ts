@@ -26,11 +26,11 @@ export function opensWords({ startsAtMs }: RoundsItem, nowMs: number): string {
   return `the next opens in ${Math.round(minutes / 60)}\u00a0h`;
 }
 
-/** "2 runs, the last proven, 5 of 6 inside."; null where there is none. */
+/** "2 runs, the last: proven, 5 of 6 inside"; null where there is none. */
 export function runsWords(runs: RunCard[]): string | null {
   const last = [...runs].sort((a, b) => a.startedAtMs - b.startedAtMs).at(-1);
   if (!last) return null;
-  const count = runs.length === 1 ? '1 run' : `${runs.length} runs, the last`;
+  const count = runs.length === 1 ? '1 run:' : `${runs.length} runs, the last:`;
   const inside = last.calls.filter((call) => call === 'inside').length;
   const calls = last.calls.length > 0 ? `, ${inside} of ${last.calls.length} inside` : '';
   return `${count} ${OUTCOME_WORDS[last.outcome]}${calls}`;

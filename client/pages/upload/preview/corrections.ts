@@ -26,6 +26,11 @@ const DELIMITER_WORDS: Record<string, string> = {
   '|': 'upright bar',
 };
 
+type Understood = Pick<
+  ReadPreview,
+  'columns' | 'channel' | 'channelUnit' | 'clock' | 'startedAt' | 'decimal' | 'encoding'
+>;
+
 type Correction = {
   about: QuestionSubject;
   label: string;
@@ -34,7 +39,7 @@ type Correction = {
 };
 
 /** What can be said otherwise about a file that was read. Only what bears on this file is offered. */
-export function corrections(preview: ReadPreview): Correction[] {
+export function corrections(preview: Understood): Correction[] {
   const column = preview.columns.find(({ name }) => name === preview.channel);
   const from = column?.unitFrom ? `, from ${column.unitFrom}` : '';
   return [
@@ -83,7 +88,7 @@ function clockOptions(clock: string): Correction['options'] {
   return [];
 }
 
-function dateOrder({ clock, startedAt }: ReadPreview): Correction[] {
+function dateOrder({ clock, startedAt }: Understood): Correction[] {
   if (startedAt === null || !/day first|month first|year first/i.test(clock)) return [];
   const found = /month first/i.test(clock)
     ? 'month first'
@@ -96,9 +101,9 @@ function dateOrder({ clock, startedAt }: ReadPreview): Correction[] {
       label: 'Date',
       found,
       options: [
-        { answer: 'dmy', words: 'day first' },
-        { answer: 'mdy', words: 'month first' },
-        { answer: 'ymd', words: 'year first' },
+        { answer: 'day-first', words: 'day first' },
+        { answer: 'month-first', words: 'month first' },
+        { answer: 'year-first', words: 'year first' },
       ],
     },
   ];
