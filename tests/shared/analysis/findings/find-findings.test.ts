@@ -213,7 +213,7 @@ test('a probe too slow for the cycles is not judged, but a runaway on it is stil
 });
 
 test('a dip on the way up is no measure for the falls after it', () => {
-  const dip = [heat(133, 130), cool(128, 12), heat(155, 150), cool(130, 45)];
+  const dip = [heat(131, 130), cool(125.6, 35, 110), heat(155, 150), cool(130, 45)];
   const rounds = [heat(155, 90), cool(130, 45), heat(155, 90), cool(130, 45), heat(140, 30)];
 
   const analysis = judge(readRun([...dip, ...rounds], probe));
