@@ -1,7 +1,10 @@
 import jwt from 'jsonwebtoken';
 import request from 'supertest';
-import { beforeEach, expect, test } from 'vitest';
+import { beforeEach, expect, test, vi } from 'vitest';
 import { createTestApp, NOW, type Agent } from '#tests/support/test-app.ts';
+
+// True hashes: a third of a second each on a free core, some seconds on a crowded machine.
+vi.setConfig({ testTimeout: 180_000 });
 
 const DAY_MS = 86_400_000;
 let nowMs = NOW.getTime();
@@ -131,18 +134,22 @@ test('many tries at the same moment are all counted', async () => {
 });
 
 test('a storm of sign-ins is turned away while other requests are answered', async () => {
-  const storm = Array.from({ length: 40 }, (_, i) => signIn(`p${i}@harrowlane.example`, 'wrong'));
-  const start = performance.now();
+  let hashed = 0;
+  const storm = Array.from({ length: 40 }, async (_, i) => {
+    const { status } = await signIn(`p${i}@harrowlane.example`, 'wrong');
+    if (status === 401) hashed += 1;
+    return status;
+  });
   const other = await owner.get('/api/session');
-  const otherMs = performance.now() - start;
-  const statuses = (await Promise.all(storm)).map(({ status }) => status);
+  const hashedMeanwhile = hashed;
+  const statuses = await Promise.all(storm);
 
   expect(other.status).toBe(200);
-  // Twenty-one hashes take some seconds; this one waits for none of them.
-  expect(otherMs).toBeLessThan(2000);
+  // It waits for none of the hashes that stand in the queue.
+  expect(hashedMeanwhile).toBeLessThan(5);
   expect(statuses.filter((status) => status === 401).length).toBeLessThanOrEqual(22);
   expect(statuses.filter((status) => status === 429).length).toBeGreaterThanOrEqual(18);
-}, 60_000);
+});
 
 test('the address that was typed is kept as a keyed hash only, and forgotten after a day', async () => {
   await signIn('Typed-My-Password@harrowlane.example', 'wrong');
