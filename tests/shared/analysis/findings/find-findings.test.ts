@@ -19,8 +19,12 @@ describe('heat that goes away', () => {
     expect(analysis.outcome).toBe('not-proven');
   });
 
-  test('the same fall after somebody stopped the machine is not', () => {
-    const marks = [{ timeS: 270 + 45 + 90 + 45 + 92, kind: 'stopped' as const }];
+  test.each([
+    ['at the peak', 2],
+    ['half a minute into it', 32],
+  ])('the same fall is not, where somebody stopped the machine %s', (_, afterPeakS) => {
+    const peakS = 270 + 45 + 90 + 45 + 90;
+    const marks = [{ timeS: peakS + afterPeakS, kind: 'stopped' as const }];
     const analysis = judge(readRun([...cycles([155, 155]), heat(155, 90), fall], probe), { marks });
 
     expect(codesOf(analysis)).not.toContain('heat-lost');
