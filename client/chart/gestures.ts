@@ -75,8 +75,11 @@ function createFingers(target: GestureTarget) {
   const isOurs = (event: PointerEvent) => event.pointerType !== 'mouse' || event.shiftKey;
 
   function down(element: HTMLElement, event: PointerEvent): void {
-    element.focus({ preventScroll: true });
-    if (event.pointerType === 'mouse' && event.button !== 0) return;
+    if (event.pointerType === 'mouse') {
+      // The plot's own handler keeps the browser from moving the focus here.
+      element.focus({ preventScroll: true });
+      if (event.button !== 0) return;
+    }
     if (fingers.size === 0) hasMoved = false;
     const { clientX: x, clientY: y } = event;
     fingers.set(event.pointerId, { x, y, startX: x, startY: y });

@@ -11,7 +11,7 @@ export function CycleLines({ rows, unit }: CyclesView) {
       <Th>Cut-out, °{unit}</Th>
       <Th>Reset, °{unit}</Th>
       <Th figure className="whitespace-nowrap">
-        On / off, s
+        On/off, s
       </Th>
     </>
   );

@@ -1,5 +1,5 @@
 import { zodResolver } from '@hookform/resolvers/zod';
-import { useEffect, useMemo, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 import { newNoteSchema, type NewNote, type RunPage } from '#shared/schemas/runs.ts';
@@ -83,6 +83,10 @@ export function NoteForm(props: NoteFormProps) {
   const { errors, submitCount } = form.formState;
   const refusal = add.error ?? change.error;
   const { setValue, setFocus } = form;
+  const heading = useRef<HTMLHeadingElement>(null);
+
+  // Read out that a form came; the chart stays in sight for picking.
+  useEffect(() => heading.current?.focus({ preventScroll: true }), []);
 
   useEffect(() => {
     if (!writing.moment) return;
@@ -104,7 +108,7 @@ export function NoteForm(props: NoteFormProps) {
   return (
     <form onSubmit={handleSubmit} noValidate className="max-w-form pt-2 pb-6">
       <ErrorSummary problems={problemsOf(errors, refusal?.message ?? null)} attempt={submitCount} />
-      <h3 className="words pb-2 text-[18px] font-semibold">
+      <h3 ref={heading} tabIndex={-1} className="words pb-2 text-[18px] font-semibold outline-none">
         {writing.noteId === null ? 'Add a note' : 'Change the note'}
       </h3>
       <p className="pb-3 text-small">Tap the trace to pick its place, or type it.</p>
