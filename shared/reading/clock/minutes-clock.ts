@@ -16,7 +16,7 @@ export function minutesClock(input: ClockInput, column: SampleColumn): ClockResu
   if (/h+:mm|time of day|clock|uhrzeit|local/.test(title)) return asForm(column, 'h:mm');
   const head = column.cells.slice(0, column.headCells);
   if (head.some((cell) => /[.,]\d+$/.test(cell))) return asForm(column, 'm:ss');
-  if (head.some((cell) => /[ap]\.?\s?m?\.?$/i.test(cell))) return asForm(column, 'h:mm');
+  if (head.some((cell) => /[ap]\.?\s?m\.?$/i.test(cell))) return asForm(column, 'h:mm');
   const form = formOf(fieldsOf(column.cells), fieldsOf(head));
   return form ? asForm(column, form) : askForm();
 }

@@ -36,7 +36,7 @@ const DAY_NAME = new RegExp(
 const NAME_DAY = new RegExp(`^${WORD}[-/. ]{1,2}(\\d{1,2})(?:st|nd|rd|th)?,?[-/. ]{1,2}(\\d{4})`);
 const WEEKDAY = /^(?:mon|tue|wed|thu|fri|sat|sun)[a-z]*\.?,?\s+/i;
 const CLOCK =
-  /^(\d{1,2}):(\d{2})(?::(\d{2})(?:[.,:](\d{1,9}))?)?(?:\s*([ap])\.?\s?m?\.?)?(?![\d:])\s*(.*)$/i;
+  /^(\d{1,2}):(\d{2})(?::(\d{2})(?:[.,:](\d{1,9}))?)?(?:\s*([ap])\.?\s?m\.?)?(?![\d:])\s*(.*)$/i;
 const COMPACT_CLOCK = /^(\d{2})(\d{2})(\d{2})(?:[.,](\d{1,9}))?\s*(.*)$/;
 const ZONE = /^(?:(z|utc|gmt)|(?:utc|gmt)?([+-])(\d{2}):?(\d{2})?)$/i;
 

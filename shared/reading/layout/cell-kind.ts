@@ -4,7 +4,7 @@ import { parseClock, parseDate, parseStamp, type DateOrder } from '../clock/pars
 export type CellKind = 'empty' | 'open' | 'number' | 'stamp' | 'date' | 'time' | 'text';
 
 const ORDERS: DateOrder[] = ['dmy', 'mdy', 'ymd'];
-const TIME_SHAPE = /^\d{1,3}:\d{2}(:\d{2}([.,:]\d+)?|[.,]\d+)?(\s*[ap]\.?\s?m?\.?)?$/i;
+const TIME_SHAPE = /^\d{1,3}:\d{2}(:\d{2}([.,:]\d+)?|[.,]\d+)?(\s*[ap]\.?\s?m\.?)?$/i;
 /** 20260504100000 is a stamp, not a number. */
 const COMPACT_STAMP = /^(19|20)\d{12}$/;
 

@@ -17,7 +17,7 @@ export type DelimiterChoice = { delimiter: Delimiter; width: number; lines: Spli
  */
 export function chooseDelimiter(lines: string[]): DelimiterChoice | null {
   const told = /^sep=(.)\s*$/i.exec(lines[0] ?? '')?.[1];
-  const candidates = CANDIDATES.filter((d) => told === undefined || d === told);
+  const candidates = CANDIDATES.filter((d) => (told ?? d) === d && isCommon(lines, d));
   let best: (DelimiterChoice & { score: number }) | null = null;
   for (const delimiter of candidates) {
     const split = lines.map((line) => splitLine(line, delimiter));
@@ -30,6 +30,12 @@ export function chooseDelimiter(lines: string[]): DelimiterChoice | null {
   const single = lines.map((line) => splitLine(line, ';'));
   const { score } = scoreLines(single);
   return score > 0 ? { delimiter: ';', width: 1, lines: single } : null;
+}
+
+/** A delimiter is in every row of readings, and those may be few under a long preamble. */
+function isCommon(lines: string[], delimiter: Delimiter): boolean {
+  const filled = lines.filter((line) => line.trim() !== '');
+  return filled.filter((line) => line.includes(delimiter)).length >= filled.length * 0.03;
 }
 
 export function splitLine(line: string, delimiter: Delimiter): SplitLine {

