@@ -18,7 +18,7 @@ for (const { name, person, open, standing, isSite } of SCREENS) {
     }) => {
       if (name === 'closed link') foresee(/\/api\/shared\/open$/, 404);
       await open(page);
-      await expect(page.getByText(standing).first()).toBeVisible();
+      await expect(page.getByText(standing).filter({ visible: true }).first()).toBeVisible();
       for (const width of WIDTHS) {
         await page.setViewportSize({ width, height: width < 700 ? 844 : 900 });
         expect(await sidewaysPx(page), `sideways scroll at ${width} px`).toBe(0);
