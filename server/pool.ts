@@ -13,7 +13,11 @@ export function openWorkers(): Workers {
   return {
     // One hash at a time: a storm of sign-ins must leave a core for everyone else.
     passwords: pool('people/password-worker', { maxThreads: 1, maxQueue: 20 }),
-    runs: pool('runs/run-worker', { maxThreads: Math.max(1, availableParallelism() - 1) }),
+    // Where cores are short, whoever waits for a page goes first.
+    runs: pool('runs/run-worker', {
+      maxThreads: Math.max(1, availableParallelism() - 1),
+      niceIncrement: 10,
+    }),
   };
 }
 
@@ -21,7 +25,10 @@ export async function closeWorkers(workers: Workers): Promise<void> {
   await Promise.all([workers.passwords.destroy(), workers.runs.destroy()]);
 }
 
-function pool(name: string, limits: { maxThreads: number; maxQueue?: number }): Piscina {
+function pool(
+  name: string,
+  limits: { maxThreads: number; maxQueue?: number; niceIncrement?: number },
+): Piscina {
   return new Piscina({
     filename: new URL(`./${name}.${fromSource ? 'ts' : 'js'}`, import.meta.url).href,
     execArgv: fromSource ? ['--import', tsxInThread()] : [],

@@ -80,8 +80,8 @@ function importSpan(reading: LogReading, span: Span, judging: Judging): Imported
   const startS = timesS[from]!;
   const endS = timesS[to - 1]!;
   const series = {
-    timesS: timesS.slice(from, to).map((timeS) => timeS - startS),
-    tempsC: tempsC.slice(from, to),
+    timesS: timesS.subarray(from, to).map((timeS) => timeS - startS),
+    tempsC: tempsC.subarray(from, to),
   };
   const roomC = judging.roomC ?? roomOf(reading, startS, endS);
   const recorded = [reading.temps, ...reading.channels.map(({ temps }) => temps)];
@@ -92,7 +92,7 @@ function importSpan(reading: LogReading, span: Span, judging: Judging): Imported
     samples: to - from,
     durationS: endS - startS,
     spark: sparkPoints(series.timesS, series.tempsC),
-    packed: [series.timesS, ...recorded.map((temps) => temps.slice(from, to))].map(packSamples),
+    packed: [series.timesS, ...recorded.map((temps) => temps.subarray(from, to))].map(packSamples),
     judged: judgeSeries(series, { ...judging, roomC }, startS, endS),
   };
 }

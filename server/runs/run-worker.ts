@@ -43,16 +43,14 @@ export async function inspect(task: InspectTask): Promise<unknown> {
 
 /** [2 read] [3 analyse]: the same bytes once more, and only what was looked at is taken. */
 export async function importRuns(task: ImportTask): Promise<unknown> {
-  const bytes = await readFile(task.path);
-  const outcome = read(bytes, task.choices);
+  const { outcome, sha256, bytes } = await readWithHash(task);
   if (outcome.kind !== 'read') return { kind: 'changed' };
   if (task.resultHash !== null && task.resultHash !== outcome.reading.resultHash) {
     return { kind: 'changed' };
   }
   try {
     const log = importLog(outcome.reading, task.spans, task.judging);
-    const sha256 = createHash('sha256').update(bytes).digest('hex');
-    const answer: ImportAnswer = { kind: 'imported', sha256, bytes: bytes.length, log };
+    const answer: ImportAnswer = { kind: 'imported', sha256, bytes, log };
     return handOver(
       answer,
       log.runs.flatMap(({ packed }) => packed.flat()),
@@ -61,6 +59,13 @@ export async function importRuns(task: ImportTask): Promise<unknown> {
     if (error instanceof EmptySpanError) return { kind: 'empty-span', message: error.message };
     throw error;
   }
+}
+
+/** By itself, so that the file's own octets are let go before the analysis needs room. */
+async function readWithHash({ path, choices }: LogFile) {
+  const octets = await readFile(path);
+  const sha256 = createHash('sha256').update(octets).digest('hex');
+  return { outcome: read(octets, choices), sha256, bytes: octets.length };
 }
 
 /** [3 analyse] once more, by another rating or a later engine. Marks count from the run's own start. */

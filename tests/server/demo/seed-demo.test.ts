@@ -1,7 +1,7 @@
 import { readFile, readdir } from 'node:fs/promises';
 import { join } from 'node:path';
 import request from 'supertest';
-import { beforeAll, expect, test } from 'vitest';
+import { beforeAll, expect, test, vi } from 'vitest';
 import { DEMO_PASSWORD, DEMO_PEOPLE } from '#server/demo/demo-people.ts';
 import { seedDemo } from '#server/demo/seed-demo.ts';
 import { JOB_STATES, jobListSchema, roundsSchema, type JobListItem } from '#shared/schemas/jobs.ts';
@@ -11,6 +11,8 @@ import { runPageSchema } from '#shared/schemas/runs.ts';
 import { sharedRunSchema } from '#shared/schemas/shares.ts';
 import { WORKER_START_MS } from '#tests/support/send-log.ts';
 import { createTestApp, NOW, type Agent } from '#tests/support/test-app.ts';
+
+vi.setConfig({ testTimeout: WORKER_START_MS });
 
 // Eleven in the morning, in the middle of a visit.
 const ELEVEN = new Date(NOW.getTime() + 3_600_000);
@@ -23,7 +25,7 @@ beforeAll(async () => {
   await app.db('shop').delete();
   tokens = await seedDemo(app);
   owner = await agentOf('owner');
-}, WORKER_START_MS);
+}, 2 * WORKER_START_MS);
 
 async function agentOf(role: Role, name?: string): Promise<Agent> {
   const row = await app
