@@ -2,12 +2,15 @@ import type { Evidence, Finding } from '../analysis.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
+import { median } from '../statistics/quantile.ts';
 import { SETTLED_S, staysLevel } from './level-heat.ts';
 import { isAlike, LEAST_EXTRA_S, slowFall } from './slow-fall.ts';
 import { firstCrossing, isDisturbed, lasted, spanWithTail, totalU } from './trace.ts';
 
 /** Clean off-times for which a fall may hang above the reset band. */
 const HANG_TIMES = 3;
+/** Between this many readings a whole cycle may hide, and look like one long fall. */
+const HIDDEN_CYCLE_READINGS = 8;
 /** Share of the rated differential that a fall must cover to be a measure for others. */
 const LEAST_FALL_SHARE = 0.5;
 
@@ -47,22 +50,39 @@ function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
   const span = spanWithTail(leg, facts);
   const leftS = firstCrossing(facts, span, lowC, 'down') ?? span.toS;
   const hangS = leftS - span.fromS;
-  if (hangS <= Math.max(HANG_TIMES * usualOffS, usualOffS + 2 * LEAST_EXTRA_S)) return null;
+  const leastS = Math.max(
+    HANG_TIMES * usualOffS,
+    usualOffS + 2 * LEAST_EXTRA_S,
+    HIDDEN_CYCLE_READINGS * facts.spacingS,
+  );
+  if (hangS <= leastS) return null;
   return { how: 'hangs', hangS, usualOffS };
 }
 
 /**
  * The off-time of the run's cleanest fall from a like peak: once a coil is grounded most falls may be slow, so that a
- * median would not be a clean one. With none, from the heating leg before.
+ * median would not be a clean one. With no like peak the median of the others; with no other fall, from the slowest
+ * heating leg, which is that of the drum.
  */
 function usualOff(leg: RunLeg, facts: RunFacts, rating: Rating): number | null {
-  const others = wholeFalls(facts, rating).filter((other) => other !== leg && isAlike(leg, other));
-  if (others.length > 0) return Math.min(...others.map(({ from, to }) => to.timeS - from.timeS));
-  const heating = facts.legs[facts.legs.indexOf(leg) - 1];
+  const others = wholeFalls(facts, rating).filter((other) => other !== leg);
+  const alike = others.filter((other) => isAlike(leg, other)).map(offTime);
+  if (alike.length > 0) return Math.min(...alike);
+  if (others.length > 0) return median(others.map(offTime));
   const { roomC } = facts;
   const opened = leg.from.tempC + totalU(facts, leg.from) >= bandOf('cut-out', rating).lowC;
-  if (!opened || !heating?.fit || roomC === null || roomC >= rating.closesC) return null;
-  return heating.fit.tauS * Math.log((leg.from.tempC - roomC) / (rating.closesC - roomC));
+  const tauS = slowestHeating(facts);
+  if (!opened || tauS === null || roomC === null || roomC >= rating.closesC) return null;
+  return tauS * Math.log((leg.from.tempC - roomC) / (rating.closesC - roomC));
+}
+
+function offTime({ from, to }: RunLeg): number {
+  return to.timeS - from.timeS;
+}
+
+function slowestHeating({ legs }: RunFacts): number | null {
+  const tausS = legs.flatMap(({ kind, fit }) => (kind === 'heating' && fit ? [fit.tauS] : []));
+  return tausS.length > 0 ? Math.max(...tausS) : null;
 }
 
 /** Complete falls that reach far enough to be the thermostat's: a dip on the way up sets no measure. */

@@ -6,6 +6,8 @@ import { firstCrossing, isDisturbed, spanOf } from './trace.ts';
 const SLOW_TIMES = 1.7;
 /** … if it takes this much longer too, so that a short one is no matter of a second, s. */
 export const LEAST_EXTRA_S = 12;
+/** Readings that a fall must take longer by. */
+const HIDING_READINGS = 4;
 /** Least span over which two falls are compared, K (7 °F). */
 const LEAST_SPAN_K = 7 / 1.8;
 /** Peaks further apart leave the drum unequally hot, and their falls do not compare, K (5 °F). */
@@ -39,8 +41,8 @@ export function slowFall(leg: RunLeg, facts: RunFacts): Evidence | null {
     (best, one) => (best && best.times >= one.times ? best : one),
     null,
   );
-  // Crossings of a coarse record are known to about half its spacing each.
-  const leastExtraS = Math.max(LEAST_EXTRA_S, 2 * facts.spacingS);
+  // Between a few readings of a coarse record a whole cycle may hide.
+  const leastExtraS = Math.max(LEAST_EXTRA_S, HIDING_READINGS * facts.spacingS);
   if (!cleanest || cleanest.times < SLOW_TIMES || cleanest.extraS < leastExtraS) return null;
   return {
     how: 'falls-slowly',
