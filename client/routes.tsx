@@ -4,7 +4,21 @@ import { RouteError } from './pages/frame/route-error.tsx';
 
 /** A page in a chunk of its own; a defect in it stays inside the frame. */
 function page(load: () => Promise<ComponentType>, path: string): RouteObject {
-  return { path, lazy: { Component: load }, ErrorBoundary: RouteError };
+  return { path, lazy: lazily(load), ErrorBoundary: RouteError };
+}
+
+/**
+ * A chunk that cannot be fetched becomes a page that throws: the router leaves the screen empty where a lazy route
+ * rejects, whereas a thrown error reaches the route's boundary.
+ */
+function lazily(load: () => Promise<ComponentType>) {
+  return { Component: () => load().catch(throwing) };
+}
+
+function throwing(error: unknown): ComponentType {
+  return function Unfetched(): never {
+    throw error;
+  };
 }
 
 /** Drawn before the first page's chunk is there. */
@@ -115,14 +129,12 @@ export const routes: RouteObject[] = [
     children: [
       page(async () => (await import('./pages/sign-in/sign-in-page.tsx')).SignInPage, 'sign-in'),
       {
-        lazy: { Component: async () => (await import('./pages/frame/signed-in.tsx')).SignedIn },
+        lazy: lazily(async () => (await import('./pages/frame/signed-in.tsx')).SignedIn),
         ErrorBoundary: RouteError,
         children: [
           {
             index: true,
-            lazy: {
-              Component: async () => (await import('./pages/frame/first-page.tsx')).FirstPage,
-            },
+            lazy: lazily(async () => (await import('./pages/frame/first-page.tsx')).FirstPage),
           },
           { handle: { isSite: true }, children: sitePages },
           ...deskPages,

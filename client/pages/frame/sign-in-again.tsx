@@ -26,6 +26,7 @@ function SignInSlip({ email, onSignedIn }: { email: string; onSignedIn: () => vo
   useEffect(() => {
     const dialog = slip.current;
     dialog?.showModal();
+    dialog?.querySelector<HTMLInputElement>('input[type=password]')?.focus();
     return () => dialog?.close();
   }, []);
 

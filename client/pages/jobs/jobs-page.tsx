@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useDeferredValue, useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { JOB_STATES } from '#shared/schemas/jobs.ts';
 import { jobsQuery } from '../../api/jobs.ts';
 import { techniciansQuery } from '../../api/people.ts';
@@ -81,28 +81,62 @@ function Seek({ filter, onChange, mayPickTechnician }: SeekProps) {
             onChange={(technician) => onChange('technician', technician)}
           />
         )}
-        <TickField
-          label="Callbacks"
-          name="callbacks"
-          tick="only"
-          checked={filter.callbacks === 'yes'}
-          onChange={(event) => onChange('callbacks', event.target.checked ? 'yes' : '')}
+        <CallbacksCell
+          isOnly={filter.callbacks === 'yes'}
+          onChange={(isOnly) => onChange('callbacks', isOnly ? 'yes' : '')}
         />
       </Cells>
     </search>
   );
 }
 
-/** What is typed stands at once; it is searched for when the typing rests. */
+type CallbacksCellProps = { isOnly: boolean; onChange: (isOnly: boolean) => void };
+
+/** Ticked at once, though the address that says so follows a moment later. */
+function CallbacksCell({ isOnly, onChange }: CallbacksCellProps) {
+  const [ticked, setTicked] = useState(isOnly);
+  const [seen, setSeen] = useState(isOnly);
+  if (isOnly !== seen) {
+    setSeen(isOnly);
+    setTicked(isOnly);
+  }
+  return (
+    <TickField
+      label="Callbacks"
+      name="callbacks"
+      tick="only"
+      checked={ticked}
+      onChange={(event) => {
+        setTicked(event.target.checked);
+        onChange(event.target.checked);
+      }}
+    />
+  );
+}
+
+const REST_MS = 250;
+
+/** What is typed stands at once; it is searched for when the typing rests. A search from elsewhere replaces it. */
 function FindCell({ find, onChange }: { find: string; onChange: (find: string) => void }) {
   const [typed, setTyped] = useState(find);
-  const rested = useDeferredValue(typed);
-  useEffect(() => {
-    const timer = setTimeout(() => {
-      if (rested !== find) onChange(rested);
-    }, 250);
-    return () => clearTimeout(timer);
-  });
+  const [seen, setSeen] = useState(find);
+  const [sent, setSent] = useState(find);
+  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
+  if (find !== seen) {
+    setSeen(find);
+    if (find !== sent) setTyped(find);
+  }
+  useEffect(() => () => clearTimeout(timer.current), []);
+
+  function handleChange(words: string) {
+    setTyped(words);
+    clearTimeout(timer.current);
+    timer.current = setTimeout(() => {
+      setSent(words);
+      onChange(words);
+    }, REST_MS);
+  }
+
   return (
     <TextField
       label="Find by name, street, number, make or serial"
@@ -110,7 +144,7 @@ function FindCell({ find, onChange }: { find: string; onChange: (find: string) =
       type="search"
       autoComplete="off"
       value={typed}
-      onChange={(event) => setTyped(event.target.value)}
+      onChange={(event) => handleChange(event.target.value)}
       className="col-span-full wide:col-span-1"
     />
   );
