@@ -23,6 +23,10 @@ export function trueCodes(plan: Plan, turns: TrueTurn[]): TrueCodes {
   const allCutOuts = tempsF('cut-out');
   const cutOuts = allCutOuts.length < 2 ? allCutOuts : allCutOuts.slice(1);
   const resets = tempsF('reset');
+  // Up there with one cut-out to go by, a record that ends is a runaway by the definition.
+  if (plan.faults.oneLate && (allCutOuts.length < 2 || resets.length < 1)) {
+    return { allowed: ['too-short', 'runaway'], sound: false, faulty: false };
+  }
   if (allCutOuts.length < 2 || resets.length < 1)
     return { allowed: ['too-short'], sound: false, faulty: false };
 

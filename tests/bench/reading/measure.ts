@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import Papa from 'papaparse';
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
+import { findTurnsOnly } from '#shared/analysis/find-turns-only.ts';
 import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import { readLog } from '#shared/reading/read-log.ts';
 import type { LogReading } from '#shared/reading/log-reading.ts';
@@ -40,13 +41,20 @@ function median(values: number[]): number {
   return [...values].sort((a, b) => a - b)[values.length >> 1] ?? NaN;
 }
 
-function speed(): void {
+function turns({ series }: LogReading): number {
+  const probe = { accuracyK: 0.5, calibrationUK: 0, responseS: null };
+  return findTurnsOnly(series, 4 / 1.8, probe).cutOuts.length;
+}
+
+function speed(withAnalysis: boolean): void {
   const bytes = readFileSync(file);
   const text = bytes.toString('utf8');
   const kinds = {
     'Papa.parse(text) alone': () => Papa.parse(text).data.length,
     read: () => read(bytes).temps.length,
-    'read and analysed': () => analyse(read(bytes)),
+    ...(withAnalysis
+      ? { 'read and analysed': () => analyse(read(bytes)) }
+      : { 'read and turning points': () => turns(read(bytes)) }),
   };
   const times = new Map<string, { wallMs: number; cpuMs: number }[]>();
   for (let round = 0; round < Number(rounds); round++) {
@@ -69,7 +77,7 @@ function speed(): void {
 function memory(): void {
   const highestMb = () => process.resourceUsage().maxRSS / 1024;
   const idleMb = process.memoryUsage.rss() / 1e6;
-  analyse(read(readFileSync(file)));
+  turns(read(readFileSync(file)));
   const peakMb = (highestMb() * 1024 * 1024) / 1e6;
   console.log(
     `memory: ${idleMb.toFixed(0)} MB idle, ${peakMb.toFixed(0)} MB at most, ${(peakMb - idleMb).toFixed(0)} MB over idle`,
@@ -77,4 +85,4 @@ function memory(): void {
 }
 
 if (mode === 'memory') memory();
-else speed();
+else speed(mode === 'analysed');
