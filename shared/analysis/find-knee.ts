@@ -13,6 +13,8 @@ const MARGIN = 0.12;
 const RISK = 1e-6;
 /** A knee is a change of power, not of curvature: the slope changes by at least this share. */
 const LEAST_CHANGE = 0.3;
+/** One piece that leaves no more than this times the noise needs no second. */
+const ENOUGH = 1.15;
 
 /**
  * Where a heating leg changes its rate without turning, if two pieces fit it significantly better than one.
@@ -31,12 +33,12 @@ export function findKnee(
   toS: number,
   noiseK: number,
 ): Knee | null {
-  const { x, y } = gather(view, fromS, toS);
+  const { x, y, each } = gather(view, fromS, toS);
   const n = x.length;
   if (n < LEAST_VALUES) return null;
   const sums = sumMoments(x, y);
   const one = leastSquares(sums, null);
-  if (!one) return null;
+  if (!one || one.squares < (ENOUGH * n * noiseK * noiseK) / each) return null;
   let best: { place: number; fit: Fit } | null = null;
   for (let i = 0; i <= PLACES; i++) {
     const place = MARGIN + ((1 - 2 * MARGIN) * i) / PLACES;
@@ -147,5 +149,5 @@ function gather({ timesS, tempsC }: BinnedView, fromS: number, toS: number) {
       y[k]! += tempsC[i]! / (last - first);
     }
   }
-  return { x, y };
+  return { x, y, each };
 }

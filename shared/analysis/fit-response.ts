@@ -27,6 +27,8 @@ const MOST_SPANS = 40;
 const PLACES = 48;
 /** A fit from a guess is believed when it ends within this many e-folds of it. */
 const NEAR_GUESS = 0.7;
+/** Polishing ends when a round takes off less than this share of the residual squares. */
+const ENOUGH_GAIN = 1e-10;
 
 /**
  * Least-squares fit of a first-order response by variable projection: for a given τ the other parameters are linear,
@@ -178,7 +180,8 @@ function polish(
     const tried = project(timesS, tempsC, fromS, next, heldC);
     if (!(tried.squares <= best.squares)) break;
     const done =
-      Math.abs(next - tauS) < 1e-12 * tauS || best.squares - tried.squares < 1e-13 * best.squares;
+      Math.abs(next - tauS) < 1e-8 * tauS ||
+      best.squares - tried.squares < ENOUGH_GAIN * best.squares;
     tauS = next;
     best = tried;
     if (done) break;
