@@ -219,6 +219,8 @@ const MAKERS: Maker[] = [
     plan('stopped early', random, { watch: watchFor(random.between(90, 150)), cause: 'too-short' }),
   (random) =>
     plan('one late', random, {
+      // Hot enough to get past the late opening and round again.
+      machine: hot(randomMachine(random)),
       faults: faultsOf(random, {
         oneLate: { opening: 2, byK: random.between(10, 12) },
         scatterK: 0.1,
