@@ -8,6 +8,9 @@ import type { Bands, Span } from './strip.ts';
 export type Margins = { top: number; right: number; bottom: number; left: number };
 export type Sheet = { widthPx: number; heightPx: number; margins: Margins; compact: boolean };
 
+/** Of the small strip: handles laid over it find its paper by these. */
+export const SMALL_MARGINS: Margins = { top: 10, right: 12, bottom: 40, left: 42 };
+
 const DESK = { heightPx: 452, margins: { top: 24, right: 150, bottom: 86, left: 84 } };
 const PHONE = { heightPx: 330, margins: { top: 10, right: 66, bottom: 66, left: 42 } };
 const DESK_FROM_PX = 760;

@@ -7,7 +7,7 @@ import { yOf, type Frame } from './frame.ts';
 import { chooseGridSteps, type GridSteps } from './grid-steps.ts';
 import { pyramidOfColumns } from './pyramid-of-columns.ts';
 import type { Pyramid } from './pyramid.ts';
-import { frameOn, scaleFor, type Sheet } from './sheet.ts';
+import { SMALL_MARGINS, frameOn, scaleFor, type Sheet } from './sheet.ts';
 import { words, type Shape } from './shapes.ts';
 import type { Bands, Strip } from './strip.ts';
 import { SvgShapes } from './svg-shapes.tsx';
@@ -38,8 +38,7 @@ export function SmallStrip({
   heightPx = 236,
   className = 'block h-auto w-full',
 }: SmallStripProps) {
-  const margins = { top: 10, right: 12, bottom: 40, left: 42 };
-  const sheet: Sheet = { widthPx, heightPx, margins, compact: true };
+  const sheet: Sheet = { widthPx, heightPx, margins: SMALL_MARGINS, compact: true };
   const pyramid = pyramidOfColumns(trace, strip.gaps);
   const durationS = Math.max(pyramid.timesS.at(-1) ?? 0, 60);
   const scale = scaleFor(pyramid, strip.bands, unit);

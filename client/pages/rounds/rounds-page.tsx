@@ -89,7 +89,7 @@ function Day({ rounds, nowMs }: { rounds: Rounds; nowMs: number }) {
 function DaySteps({ day, today }: { day: string; today: string }) {
   const to = (other: string) => ({ search: other === today ? '' : `?day=${other}` });
   return (
-    <nav aria-label="Days" className="flex flex-wrap justify-between gap-x-4 px-3 pb-1">
+    <nav aria-label="Days" className="flex flex-wrap justify-between gap-x-4 px-4 pb-1">
       <WordLink to={to(stepDay(day, -1))}>Day before</WordLink>
       {day !== today && (
         <WordLink to={to(today)} className="min-w-12 justify-center">

@@ -41,9 +41,7 @@ function MachineFacts({ machine, zone, nowMs }: MachineFactsProps) {
   return (
     <>
       <p className="pt-1">
-        <WordLink to={`/machines/${machine.id}`} className="-ml-1">
-          {machineWords(machine)}
-        </WordLink>
+        <WordLink to={`/machines/${machine.id}`}>{machineWords(machine)}</WordLink>
       </p>
       <p className="words text-[16px] text-print">{rated.filter(Boolean).join(', ')}</p>
       {machine.specified.length === 0 ? (

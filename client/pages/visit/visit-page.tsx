@@ -87,9 +87,7 @@ function Callback({ visit, zone }: { visit: Visit; zone: string }) {
       <CallbackNotice
         head={`Callback, ${days} day${days === 1 ? '' : 's'} after job ${callsBack.number}`}
       >
-        <WordLink to={`/jobs/${callsBack.id}`} className="-ml-1">
-          See what was done then
-        </WordLink>
+        <WordLink to={`/jobs/${callsBack.id}`}>See what was done then</WordLink>
       </CallbackNotice>
     </div>
   );
@@ -112,7 +110,7 @@ function NotesSection({ visit }: { visit: Visit }) {
           {access}
         </p>
       )}
-      <WordLink to={`/jobs/${job.id}`} className="mt-1 -ml-1">
+      <WordLink to={`/jobs/${job.id}`} className="mt-1">
         Job {job.number}
       </WordLink>
     </section>

@@ -4,9 +4,10 @@ import { SmallStrip } from '../../../chart/small-strip.tsx';
 import { stripOfRun } from '../../../chart/strip-of-run.ts';
 import type { Bands } from '../../../chart/strip.ts';
 import { useWidth } from '../../../components/use-width.ts';
+import { SMALL_MARGINS } from '../../../chart/sheet.ts';
 import { formatRunTime } from '../run-time.ts';
 import { SpanHandle } from './span-handle.tsx';
-import { SMALL_STRIP_MARGINS, shareOf } from './strip-place.ts';
+import { shareOf } from './strip-place.ts';
 
 export type KeptSpan = { label: string; fromS: number; toS: number };
 
@@ -62,7 +63,7 @@ type Placed = { durationS: number; widthPx: number };
 
 /** Over each stretch that no run takes. */
 function Veils({ kept, durationS, widthPx }: Placed & { kept: KeptSpan[] }) {
-  const { top, bottom } = SMALL_STRIP_MARGINS;
+  const { top, bottom } = SMALL_MARGINS;
   return gapsBetween(kept, durationS).map(({ fromS, toS }) => {
     const left = shareOf(fromS, durationS, widthPx);
     const width = shareOf(toS, durationS, widthPx) - left;

@@ -1,7 +1,8 @@
 import { useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import { SMALL_MARGINS } from '../../../chart/sheet.ts';
 import { clampTime, moveHandle } from '../move-handle.ts';
 import { formatRunTime } from '../run-time.ts';
-import { SMALL_STRIP_MARGINS, shareOf, timeAtPx } from './strip-place.ts';
+import { shareOf, timeAtPx } from './strip-place.ts';
 
 type SpanHandleProps = {
   name: string;
@@ -40,7 +41,7 @@ export function SpanHandle({
     onMove(moved);
   }
 
-  const { top, bottom } = SMALL_STRIP_MARGINS;
+  const { top, bottom } = SMALL_MARGINS;
   return (
     <div
       ref={handle}

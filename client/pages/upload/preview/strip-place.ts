@@ -1,8 +1,7 @@
-/** Where the small strip leaves its paper free for the scale and the minutes, CSS px. */
-export const SMALL_STRIP_MARGINS = { top: 10, right: 12, bottom: 40, left: 42 };
+import { SMALL_MARGINS } from '../../../chart/sheet.ts';
 
 function plotWidth(widthPx: number): number {
-  const { left, right } = SMALL_STRIP_MARGINS;
+  const { left, right } = SMALL_MARGINS;
   return Math.max(widthPx - left - right, 1);
 }
 
@@ -13,11 +12,11 @@ function ruledS(durationS: number): number {
 
 /** Where a moment lies across the sheet, 0 to 1. */
 export function shareOf(timeS: number, durationS: number, widthPx: number): number {
-  const { left } = SMALL_STRIP_MARGINS;
+  const { left } = SMALL_MARGINS;
   return (left + (timeS / ruledS(durationS)) * plotWidth(widthPx)) / widthPx;
 }
 
 /** The moment under a point of the sheet, s; may lie outside the record. */
 export function timeAtPx(px: number, durationS: number, widthPx: number): number {
-  return ((px - SMALL_STRIP_MARGINS.left) / plotWidth(widthPx)) * ruledS(durationS);
+  return ((px - SMALL_MARGINS.left) / plotWidth(widthPx)) * ruledS(durationS);
 }
