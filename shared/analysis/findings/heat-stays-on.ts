@@ -4,8 +4,8 @@ import type { Rating } from '../rating.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
 import { median } from '../statistics/quantile.ts';
 import { SETTLED_S, staysLevel } from './level-heat.ts';
-import { isAlike, LEAST_EXTRA_S, slowFall } from './slow-fall.ts';
-import { firstCrossing, isDisturbed, lasted, spanWithTail, totalU } from './trace.ts';
+import { isAlike, LEAST_EXTRA_S, slowFall, undisturbedFalls } from './slow-fall.ts';
+import { firstCrossing, isDisturbed, lasted, nearestLegs, spanWithTail, totalU } from './trace.ts';
 
 /** Clean off-times for which a fall may hang above the reset band. */
 const HANG_TIMES = 3;
@@ -27,8 +27,10 @@ const LEAST_FALL_SHARE = 0.5;
 export function findHeatStaysOn(facts: RunFacts): Finding | null {
   const { rating } = facts.input;
   if (!rating) return null;
+  const falls = { whole: wholeFalls(facts, rating), undisturbed: undisturbedFalls(facts) };
   for (const leg of facts.legs) {
-    const seen = leg.kind === 'heating' ? rising(leg, facts, rating) : falling(leg, facts, rating);
+    const seen =
+      leg.kind === 'heating' ? rising(leg, facts, rating) : falling(leg, falls, facts, rating);
     if (seen) return toFinding(leg, facts, seen);
   }
   return null;
@@ -38,14 +40,25 @@ function rising(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
   return staysLevel(leg, facts, rating) ? { how: 'levels-off' } : null;
 }
 
-function falling(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
+/** What a fall is compared with. */
+type Falls = { whole: RunLeg[]; undisturbed: RunLeg[] };
+
+function falling(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Evidence | null {
   if (leg.from.turnedBy !== 'machine' || isDisturbed(leg, facts)) return null;
-  return hangs(leg, facts, rating) ?? slowFall(leg, facts) ?? levelsOff(leg, facts, rating);
+  return (
+    hangs(leg, usualOff(leg, falls.whole, facts, rating), facts, rating) ??
+    slowFall(leg, falls.undisturbed, facts) ??
+    levelsOff(leg, facts, rating)
+  );
 }
 
-function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
+function hangs(
+  leg: RunLeg,
+  usualOffS: number | null,
+  facts: RunFacts,
+  rating: Rating,
+): Evidence | null {
   const { lowC } = bandOf('reset', rating);
-  const usualOffS = usualOff(leg, facts, rating);
   if (usualOffS === null || leg.from.tempC <= lowC) return null;
   const span = spanWithTail(leg, facts);
   const leftS = firstCrossing(facts, span, lowC, 'down') ?? span.toS;
@@ -64,8 +77,8 @@ function hangs(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
  * median would not be a clean one. With no like peak the median of the others; with no other fall, from the slowest
  * heating leg, which is that of the drum.
  */
-function usualOff(leg: RunLeg, facts: RunFacts, rating: Rating): number | null {
-  const others = wholeFalls(facts, rating).filter((other) => other !== leg);
+function usualOff(leg: RunLeg, wholes: RunLeg[], facts: RunFacts, rating: Rating): number | null {
+  const others = nearestLegs(wholes, leg);
   const alike = others.filter((other) => isAlike(leg, other)).map(offTime);
   if (alike.length > 0) return Math.min(...alike);
   if (others.length > 0) return median(others.map(offTime));

@@ -73,8 +73,9 @@ function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
 /** The last rise reached the machine's own cut-outs and stayed there, under the allowance, with none. */
 function staysAtTop(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   const { to } = leg;
+  if (to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
   const own = facts.cutOuts.filter(({ timeS }) => timeS < leg.to.timeS);
-  if (own.length === 0 || to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
+  if (own.length === 0) return false;
   const ownC = median(own.map(({ tempC }) => tempC));
   const span = spanWithTail(leg, facts);
   const reachedS = firstCrossing(facts, span, ownC, 'up');

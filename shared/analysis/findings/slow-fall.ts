@@ -1,6 +1,6 @@
 import type { Evidence } from '../analysis.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
-import { firstCrossing, isDisturbed, spanOf } from './trace.ts';
+import { firstCrossing, isDisturbed, nearestLegs, spanOf } from './trace.ts';
 
 /** A fall at equal temperature that takes this many times the run's cleanest keeps some heat … */
 const SLOW_TIMES = 1.7;
@@ -20,19 +20,19 @@ export function isAlike(leg: RunLeg, other: RunLeg): boolean {
   return Math.abs(leg.from.tempC - other.from.tempC) <= ALIKE_PEAKS_K;
 }
 
+/** The falls after a cut-out that nobody disturbed: what a fall may be compared with. */
+export function undisturbedFalls(facts: RunFacts): RunLeg[] {
+  return facts.legs.filter(
+    (leg) => leg.kind === 'cooling' && leg.from.turnedBy === 'machine' && !isDisturbed(leg, facts),
+  );
+}
+
 /**
  * Evidence that a fall is slow at equal temperature against the run's cleanest one from a like peak; null where it is
  * not, or where none compares.
  */
-export function slowFall(leg: RunLeg, facts: RunFacts): Evidence | null {
-  const others = facts.legs.filter(
-    (other) =>
-      other !== leg &&
-      other.kind === 'cooling' &&
-      other.from.turnedBy === 'machine' &&
-      isAlike(leg, other) &&
-      !isDisturbed(other, facts),
-  );
+export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidence | null {
+  const others = nearestLegs(falls, leg).filter((other) => isAlike(leg, other));
   const compared = others.flatMap((other) => [
     ...comparedFalls(leg, other, facts),
     ...comparedWholes(leg, other),

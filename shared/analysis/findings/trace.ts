@@ -1,4 +1,5 @@
 import type { Mark, MarkKind } from '../series.ts';
+import { firstAtOrAfter } from '../first-at-or-after.ts';
 import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
 import { totalUncertainty } from '../judge-point.ts';
 
@@ -26,9 +27,8 @@ export function firstCrossing(
 ): number | null {
   const { timesS, smoothC } = binned;
   const sign = direction === 'up' ? 1 : -1;
-  for (let i = 0; i < timesS.length; i++) {
+  for (let i = firstAtOrAfter(timesS, fromS); i < timesS.length; i++) {
     const timeS = timesS[i]!;
-    if (timeS < fromS) continue;
     if (timeS > toS) return null;
     const over = sign * (smoothC[i]! - levelC);
     if (over < 0) continue;
@@ -44,8 +44,7 @@ export function temperatureAt({ binned }: RunFacts, timeS: number): number | nul
   const { timesS, smoothC } = binned;
   const n = timesS.length;
   if (n === 0) return null;
-  let after = 0;
-  while (after < n && timesS[after]! < timeS) after++;
+  const after = firstAtOrAfter(timesS, timeS);
   if (after === 0) return smoothC[0]!;
   if (after === n) return smoothC[n - 1]!;
   const share = (timeS - timesS[after - 1]!) / (timesS[after]! - timesS[after - 1]!);
@@ -63,6 +62,23 @@ export function marksWithin(
       ({ kind, timeS }) => kinds.includes(kind) && timeS > fromS && timeS <= toS + TAPPED_LATE_S,
     )
     .sort((a, b) => a.timeS - b.timeS);
+}
+
+/** How many legs on either side a leg is compared with: the machine as it was about then, at a bounded cost. */
+const NEAR_LEGS = 24;
+
+/** The legs nearest in time to one of a record, itself left out; `legs` in time order. */
+export function nearestLegs(legs: RunLeg[], leg: RunLeg): RunLeg[] {
+  let low = 0;
+  let high = legs.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (legs[middle]!.from.timeS < leg.from.timeS) low = middle + 1;
+    else high = middle;
+  }
+  return legs
+    .slice(Math.max(0, low - NEAR_LEGS), low + NEAR_LEGS + 1)
+    .filter((each) => each !== leg);
 }
 
 /** The span of a leg, s. */
