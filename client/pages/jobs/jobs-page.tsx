@@ -128,13 +128,17 @@ function FindCell({ find, onChange }: { find: string; onChange: (find: string) =
   }
   useEffect(() => () => clearTimeout(timer.current), []);
 
+  function search(words: string) {
+    clearTimeout(timer.current);
+    if (words === sent) return;
+    setSent(words);
+    onChange(words);
+  }
+
   function handleChange(words: string) {
     setTyped(words);
     clearTimeout(timer.current);
-    timer.current = setTimeout(() => {
-      setSent(words);
-      onChange(words);
-    }, REST_MS);
+    timer.current = setTimeout(() => search(words), REST_MS);
   }
 
   return (
@@ -145,6 +149,8 @@ function FindCell({ find, onChange }: { find: string; onChange: (find: string) =
       autoComplete="off"
       value={typed}
       onChange={(event) => handleChange(event.target.value)}
+      // Before a click elsewhere counts: a search that began after it would call the click's way off.
+      onBlur={() => search(typed)}
       className="col-span-full wide:col-span-1"
     />
   );
