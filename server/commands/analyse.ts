@@ -33,7 +33,7 @@ function printAll(flags: AnalyseFlags, marks: ReturnType<typeof readMarks>): num
   return failed ? 1 : 0;
 }
 
-/** Whole before the next file is read; a full pipe is waited for. */
+/** Whole before the next file is read; a full pipe is waited for, and where nobody reads on, that is the end. */
 function print(text: string): void {
   const bytes = Buffer.from(text);
   let from = 0;
@@ -41,7 +41,9 @@ function print(text: string): void {
     try {
       from += writeSync(STDOUT, bytes, from);
     } catch (error) {
-      if (!(error instanceof Error && 'code' in error && error.code === 'EAGAIN')) throw error;
+      const code = error instanceof Error && 'code' in error ? error.code : undefined;
+      if (code === 'EPIPE') process.exit(1);
+      if (code !== 'EAGAIN') throw error;
     }
   }
 }
