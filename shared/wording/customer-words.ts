@@ -8,6 +8,8 @@ export type CustomerRun = {
   headline: Finding;
   judgedBy: Rating | null;
   unit: DisplayUnit;
+  /** `electric`, `gas`, or as it was typed. */
+  fuel: string;
   duct: 'on' | 'off';
   load: 'empty' | 'damp';
 };

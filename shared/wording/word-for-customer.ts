@@ -1,6 +1,5 @@
 import type { Analysis, Finding } from '../analysis/analysis.ts';
 import type { Rating } from '../analysis/rating.ts';
-import type { DisplayUnit } from '../units.ts';
 import { CUSTOMER_WORDS, type CustomerRun } from './customer-words.ts';
 import { formatBand, formatRated, formatSpan, formatTemp } from './format.ts';
 
@@ -23,11 +22,11 @@ export type WordedForCustomer = {
 export function wordForCustomer(
   analysis: Analysis,
   judgedBy: Rating | null,
-  { unit, duct, load }: { unit: DisplayUnit; duct: 'on' | 'off'; load: 'empty' | 'damp' },
+  { unit, fuel, duct, load }: Omit<CustomerRun, 'analysis' | 'headline' | 'judgedBy'>,
 ): WordedForCustomer {
   const headline = analysis.findings[0];
   if (!headline) throw new RangeError('an analysis has at least one finding');
-  const run: CustomerRun = { analysis, headline, judgedBy, unit, duct, load };
+  const run: CustomerRun = { analysis, headline, judgedBy, unit, fuel, duct, load };
   const words = CUSTOMER_WORDS[headline.code];
   return {
     heading: stoppedOtherwise(run) ? 'The air got hotter than it should.' : words.heading,
@@ -44,12 +43,11 @@ function stoppedOtherwise({ analysis, headline }: CustomerRun): boolean {
   return analysis.outcome === 'stop' && headline.code === 'in-band';
 }
 
-function safeTonight({ analysis, headline }: CustomerRun): WordedForCustomer['safeTonight'] {
+function safeTonight({ analysis, headline, fuel }: CustomerRun): WordedForCustomer['safeTonight'] {
   if (analysis.outcome === 'stop') {
     return {
       answer: 'no',
-      sentence:
-        'No. Do not use it. Leave it unplugged, and its gas closed if it has gas, until we have put it right.',
+      sentence: `No. Do not use it. Leave it unplugged${fuel === 'gas' ? ', and its gas closed,' : ''} until we have put it right.`,
     };
   }
   if (analysis.outcome === 'proven') {

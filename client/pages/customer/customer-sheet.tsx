@@ -12,8 +12,8 @@ import { Phone } from './reach-shop.tsx';
 
 /** One run for the person whose machine it is; one sheet of paper when printed. */
 export function CustomerSheet({ shared }: { shared: SharedRun }) {
-  const { analysis, judgedBy, unit, duct, load } = shared;
-  const worded = wordForCustomer(analysis, judgedBy, { unit, duct, load });
+  const { analysis, judgedBy, unit, duct, load, machine } = shared;
+  const worded = wordForCustomer(analysis, judgedBy, { unit, duct, load, fuel: machine.fuel });
   return (
     <main
       id="main"

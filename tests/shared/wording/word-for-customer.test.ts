@@ -3,7 +3,12 @@ import { FINDING_CODES, type Analysis } from '#shared/analysis/analysis.ts';
 import { wordForCustomer, type WordedForCustomer } from '#shared/wording/word-for-customer.ts';
 import { RUNS } from './worded-runs.ts';
 
-const conditions = { unit: 'F' as const, duct: 'on' as const, load: 'empty' as const };
+const conditions = {
+  unit: 'F' as const,
+  fuel: 'electric',
+  duct: 'on' as const,
+  load: 'empty' as const,
+};
 
 function everyWord({
   heading,
@@ -54,6 +59,16 @@ describe.each(FINDING_CODES)('%s', (code) => {
   });
 });
 
+test('the gas is to be closed on a gas machine, and not spoken of on an electric one', () => {
+  const stopped = headed('runaway', 'stop');
+
+  const gas = wordForCustomer(stopped, null, { ...conditions, fuel: 'gas' });
+  const electric = wordForCustomer(stopped, null, conditions);
+
+  expect(gas.safeTonight.sentence).toMatch(/its gas closed/);
+  expect(electric.safeTonight.sentence).not.toMatch(/gas/);
+});
+
 test('no run is told in the words of the trade, with a forecast of fire, or with a guarantee', () => {
   for (const { analysis, rating } of RUNS) {
     const words = everyWord(wordForCustomer(analysis, rating, conditions));
@@ -84,7 +99,12 @@ test('a crushed pipe is told as a pipe', () => {
 
 test('the conditions of the test are told', () => {
   const { analysis, rating } = runOf('in-band-electric-iso.csv');
-  const off = wordForCustomer(analysis, rating, { unit: 'C', duct: 'off', load: 'damp' });
+  const off = wordForCustomer(analysis, rating, {
+    ...conditions,
+    unit: 'C',
+    duct: 'off',
+    load: 'damp',
+  });
 
   expect(off.summary[0]).toMatch(/damp load/);
   expect(off.summary[0]).toMatch(/taken off/);
