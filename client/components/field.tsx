@@ -22,7 +22,14 @@ type CellProps = {
 
 /** Cells of a service form: they share their rules, drawn by the ground that shows between them. */
 export function Cells({ className = '', children }: { className?: string; children: ReactNode }) {
-  return <div className={`grid gap-px border border-print bg-rule ${className}`}>{children}</div>;
+  // Each cell rules its own edge, so that a row with fewer cells ends in blank paper.
+  return (
+    <div
+      className={`grid gap-px overflow-hidden border border-print bg-strip *:ring-1 *:ring-rule ${className}`}
+    >
+      {children}
+    </div>
+  );
 }
 
 const INPUT =
