@@ -32,3 +32,17 @@ export function findGaps(timesS: Float64Array, spacingS: number): Gap[] {
   }
   return gaps;
 }
+
+/** Those of a record's gaps, in time order, that reach into a stretch of it. */
+export function gapsWithin(gaps: Gap[], fromS: number, toS: number): Gap[] {
+  let low = 0;
+  let high = gaps.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (gaps[middle]!.toS <= fromS) low = middle + 1;
+    else high = middle;
+  }
+  let end = low;
+  while (end < gaps.length && gaps[end]!.fromS < toS) end++;
+  return gaps.slice(low, end);
+}

@@ -39,14 +39,9 @@ export function findKnee(
   const sums = sumMoments(x, y);
   const one = leastSquares(sums, null);
   if (!one || one.squares < (ENOUGH * n * noiseK * noiseK) / each) return null;
-  let best: { place: number; fit: Fit } | null = null;
-  for (let i = 0; i <= PLACES; i++) {
-    const place = MARGIN + ((1 - 2 * MARGIN) * i) / PLACES;
-    const fit = leastSquares(sums, place);
-    if (fit && (!best || fit.squares < best.fit.squares)) best = { place, fit };
-  }
-  if (!best) return null;
-  const { place, fit } = best;
+  const place = bestPlace(sums, one);
+  const fit = place === null ? null : leastSquares(sums, place);
+  if (place === null || !fit) return null;
   const degrees = n - 6;
   const floor = Math.max(fit.squares / degrees, 0.1 * noiseK * noiseK);
   const ratio = (one.squares - fit.squares) / 2 / floor;
@@ -66,7 +61,13 @@ export function findKnee(
 }
 
 /** Coefficients of 1, x, x², x³ and, with a knee, of the ramp after it; x from 0 to 1 along the leg. */
-type Fit = { coefficients: Float64Array; squares: number };
+type Fit = {
+  coefficients: Float64Array;
+  squares: number;
+  /** Of the normal equations, and their right side. */
+  factor: Float64Array;
+  right: Float64Array;
+};
 
 /** Powers of (x − ½) that moments go up to, and the columns of a row of them: those, y times the first five, y². */
 const POWERS = 7;
@@ -81,21 +82,22 @@ function sumMoments(x: Float64Array, y: Float64Array): Moments {
   const meanY = meanOf(y);
   for (let i = n - 1; i >= 0; i--) {
     const at = i * COLUMNS;
-    for (let c = 0; c < COLUMNS; c++) table[at + c] = table[at + COLUMNS + c]!;
+    const later = at + COLUMNS;
     const value = y[i]! - meanY;
     let power = 1;
     for (let k = 0; k < POWERS; k++) {
-      table[at + k]! += power;
-      if (k < 5) table[at + POWERS + k]! += value * power;
+      table[at + k] = table[later + k]! + power;
+      if (k < 5) table[at + POWERS + k] = table[later + POWERS + k]! + value * power;
       power *= x[i]! - 0.5;
     }
-    table[at + COLUMNS - 1]! += value * value;
+    table[later - 1] = table[later + COLUMNS - 1]! + value * value;
   }
   return { x, table };
 }
 
 /** A cubic, or with a place a cubic and a ramp from there on, from the moments alone. */
-function leastSquares({ x, table }: Moments, place: number | null): Fit | null {
+function leastSquares(sums: Moments, place: number | null): Fit | null {
+  const { table } = sums;
   const p = place === null ? 4 : 5;
   const matrix = new Float64Array(p * p);
   const right = new Float64Array(p);
@@ -104,19 +106,65 @@ function leastSquares({ x, table }: Moments, place: number | null): Fit | null {
     right[a] = table[POWERS + a]!;
   }
   if (place !== null) {
-    const at = firstAtOrAfter(x, place) * COLUMNS;
-    const knee = place - 0.5;
-    const after = (column: number) => table[at + column + 1]! - knee * table[at + column]!;
-    for (let b = 0; b < 4; b++) matrix[4 * p + b] = after(b);
-    matrix[4 * p + 4] = after(1) - knee * after(0);
-    right[4] = after(POWERS);
+    const ramp = rampAt(sums, place, new Float64Array(6));
+    matrix.set(ramp.subarray(0, 5), 4 * p);
+    right[4] = ramp[5]!;
   }
   const factor = choleskyFactor(matrix, p);
   if (!factor) return null;
   const coefficients = choleskySolve(factor, right, p);
   let squares = table[COLUMNS - 1]!;
   for (let a = 0; a < p; a++) squares -= coefficients[a]! * right[a]!;
-  return { coefficients, squares: Math.max(0, squares) };
+  return { coefficients, squares: Math.max(0, squares), factor, right };
+}
+
+/** Products of a ramp from a place on with the cubic's four columns, with itself and with y. */
+function rampAt({ x, table }: Moments, place: number, ramp: Float64Array): Float64Array {
+  const at = firstAtOrAfter(x, place) * COLUMNS;
+  const knee = place - 0.5;
+  for (let b = 0; b < 4; b++) ramp[b] = table[at + b + 1]! - knee * table[at + b]!;
+  ramp[4] = ramp[1]! - knee * ramp[0]!;
+  ramp[5] = table[at + POWERS + 1]! - knee * table[at + POWERS]!;
+  return ramp;
+}
+
+/**
+ * The place whose ramp takes most off the cubic's residual squares. What it takes off follows from the cubic's own
+ * factor: the ramp's part that the cubic does not have already, against the residuals.
+ */
+function bestPlace(sums: Moments, { factor, right }: Fit): number | null {
+  const ramp = new Float64Array(6);
+  const own = new Float64Array(4);
+  const shared = new Float64Array(4);
+  forward(factor, right, own);
+  let best: number | null = null;
+  let greatest = -Infinity;
+  for (let i = 0; i <= PLACES; i++) {
+    const place = MARGIN + ((1 - 2 * MARGIN) * i) / PLACES;
+    rampAt(sums, place, ramp);
+    forward(factor, ramp, shared);
+    let left = ramp[4]!;
+    let leftWithY = ramp[5]!;
+    for (let a = 0; a < 4; a++) {
+      left -= shared[a]! * shared[a]!;
+      leftWithY -= shared[a]! * own[a]!;
+    }
+    const gain = (leftWithY * leftWithY) / left;
+    if (left > 0 && gain > greatest) {
+      greatest = gain;
+      best = place;
+    }
+  }
+  return best;
+}
+
+/** `x = L⁻¹·right` for the cubic's factor. */
+function forward(factor: Float64Array, right: Float64Array, x: Float64Array): void {
+  for (let i = 0; i < 4; i++) {
+    let sum = right[i]!;
+    for (let k = 0; k < i; k++) sum -= factor[i * 4 + k]! * x[k]!;
+    x[i] = sum / factor[i * 4 + i]!;
+  }
 }
 
 function meanOf(values: Float64Array): number {

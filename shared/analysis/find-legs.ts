@@ -1,5 +1,6 @@
 import type { Rating } from './rating.ts';
-import { fitLeg } from './fit-response.ts';
+import { gapsWithin } from './find-gaps.ts';
+import { fitLeg } from './fit-leg.ts';
 import { findKnee } from './find-knee.ts';
 import { isColdStart } from './find-room.ts';
 import type { BinnedView, Extreme, Gap, RunLeg } from './run-facts.ts';
@@ -11,10 +12,8 @@ const DELAYS = 8;
 const MOST_CORNER = 0.35;
 /** Left out before a turn whose switch instant is not known. */
 const LAST_CORNER = 0.08;
-/** A record with more legs than this has its legs fitted to fewer values each. */
+/** A record with more legs than this has its legs fitted quickly. */
 const MANY_LEGS = 200;
-const FEW_VALUES = 48;
-const MOST_VALUES = 400;
 
 /**
  * How long the corner after a turn is rounded, s: some eight times what the turn came after its switch, by which four
@@ -39,7 +38,7 @@ export function findLegs(
   rating: Rating | null,
   noiseK: number,
 ): RunLeg[] {
-  const most = extremes.length > MANY_LEGS ? FEW_VALUES : MOST_VALUES;
+  const quickly = extremes.length > MANY_LEGS;
   const lastTauS = new Map<string, number | null>();
   return extremes.slice(1).map((to, i) => {
     const from = extremes[i]!;
@@ -49,7 +48,8 @@ export function findLegs(
     const startS = from.timeS + cornerAfter(from, lengthS, fromCold);
     const isEnd = to.turnedBy === 'end';
     const endS = isEnd ? to.timeS : (to.switched?.timeS ?? to.timeS - LAST_CORNER * lengthS);
-    const fit = fitLeg(view.timesS, view.tempsC, startS, endS, lastTauS.get(kind) ?? null, most);
+    const span = { fromS: startS, toS: endS, guessTauS: lastTauS.get(kind) ?? null };
+    const fit = fitLeg(view.timesS, view.tempsC, span, quickly);
     lastTauS.set(kind, fit && fit.tauS);
     return {
       kind,
@@ -58,7 +58,7 @@ export function findLegs(
       fit,
       knee: kind === 'heating' ? findKnee(view, startS, endS, noiseK) : null,
       fromCold,
-      hasGap: gaps.some((gap) => gap.fromS < to.timeS && gap.toS > from.timeS),
+      hasGap: gapsWithin(gaps, from.timeS, to.timeS).length > 0,
     };
   });
 }

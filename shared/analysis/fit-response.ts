@@ -1,6 +1,4 @@
 import { choleskyFactor, choleskySolve, gradientError } from './statistics/solve-normal.ts';
-import { firstAtOrAfter } from './first-at-or-after.ts';
-import type { LegFit } from './run-facts.ts';
 
 /** A first-order response `A − (A − T0)·exp(−(t − t0)/τ)` with standard errors (k = 1). */
 export type ResponseFit = {
@@ -63,38 +61,6 @@ export function fitResponse(
   const lnTau = leastOf(squaresAt, lowest, highest);
   if (lnTau === null) return null;
   return polish(timesS, tempsC, fromS, Math.exp(lnTau), hold.startC);
-}
-
-/** fitResponse over part of a record, given by time; thins it out to at most `most` values. */
-export function fitLeg(
-  timesS: Float64Array,
-  tempsC: Float64Array,
-  fromS: number,
-  toS: number,
-  guessTauS: number | null = null,
-  most = 400,
-): LegFit | null {
-  const from = firstAtOrAfter(timesS, fromS);
-  const to = firstAtOrAfter(timesS, toS + 1e-9);
-  if (to - from < 5) return null;
-  const each = Math.ceil((to - from) / most);
-  const size = Math.ceil((to - from) / each);
-  const times = new Float64Array(size);
-  const temps = new Float64Array(size);
-  for (let k = 0; k < size; k++) {
-    const first = from + k * each;
-    const last = Math.min(to, first + each);
-    for (let i = first; i < last; i++) {
-      times[k]! += timesS[i]! / (last - first);
-      temps[k]! += tempsC[i]! / (last - first);
-    }
-  }
-  const fit = fitResponse(times, temps, times[0], { startC: null, guessTauS });
-  if (!fit) return null;
-  const { asymptoteC, asymptoteErrorK, tauS, tauErrorS, startC, covarianceKS } = fit;
-  const part = { asymptoteC, asymptoteErrorK, tauS, tauErrorS, startC, covarianceKS };
-  const residualSdK = fit.residualSdK * Math.sqrt(each);
-  return { ...part, fromS: times[0]!, toS: times[size - 1]!, residualSdK };
 }
 
 type Projection = { asymptoteC: number; startC: number; squares: number };

@@ -31,9 +31,9 @@ export function findHeatLost(facts: RunFacts): Finding | null {
 
   const { lowC } = bandOf('reset', rating);
   const roomC = facts.roomC ?? USUAL_ROOM_C;
-  const givenUpC = Math.min(
+  const givenUpC = facts.resets.reduce(
+    (lowestC, { tempC }) => Math.min(lowestC, tempC - BELOW_OWN_K),
     lowC - GONE_SHARE * Math.max(0, lowC - roomC),
-    ...facts.resets.map(({ tempC }) => tempC - BELOW_OWN_K),
   );
   if (to.tempC + totalU(facts, to) >= givenUpC) return null;
   return {

@@ -27,7 +27,11 @@ const LEAST_FALL_SHARE = 0.5;
 export function findHeatStaysOn(facts: RunFacts): Finding | null {
   const { rating } = facts.input;
   if (!rating) return null;
-  const falls = { whole: wholeFalls(facts, rating), undisturbed: undisturbedFalls(facts) };
+  const falls = {
+    whole: wholeFalls(facts, rating),
+    undisturbed: undisturbedFalls(facts),
+    slowestTauS: slowestHeating(facts),
+  };
   for (const leg of facts.legs) {
     const seen =
       leg.kind === 'heating' ? rising(leg, facts, rating) : falling(leg, falls, facts, rating);
@@ -41,34 +45,32 @@ function rising(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
 }
 
 /** What a fall is compared with. */
-type Falls = { whole: RunLeg[]; undisturbed: RunLeg[] };
+type Falls = {
+  whole: RunLeg[];
+  undisturbed: RunLeg[];
+  /** The slowest heating leg's τ: that of the drum, s. */
+  slowestTauS: number | null;
+};
 
 function falling(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Evidence | null {
   if (leg.from.turnedBy !== 'machine' || isDisturbed(leg, facts)) return null;
   return (
-    hangs(leg, usualOff(leg, falls.whole, facts, rating), facts, rating) ??
+    hangs(leg, falls, facts, rating) ??
     slowFall(leg, falls.undisturbed, facts) ??
     levelsOff(leg, facts, rating)
   );
 }
 
-function hangs(
-  leg: RunLeg,
-  usualOffS: number | null,
-  facts: RunFacts,
-  rating: Rating,
-): Evidence | null {
+function hangs(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Evidence | null {
   const { lowC } = bandOf('reset', rating);
-  if (usualOffS === null || leg.from.tempC <= lowC) return null;
+  if (leg.from.tempC <= lowC) return null;
   const span = spanWithTail(leg, facts);
   const leftS = firstCrossing(facts, span, lowC, 'down') ?? span.toS;
   const hangS = leftS - span.fromS;
-  const leastS = Math.max(
-    HANG_TIMES * usualOffS,
-    usualOffS + 2 * LEAST_EXTRA_S,
-    HIDDEN_CYCLE_READINGS * facts.spacingS,
-  );
-  if (hangS <= leastS) return null;
+  if (hangS <= Math.max(2 * LEAST_EXTRA_S, HIDDEN_CYCLE_READINGS * facts.spacingS)) return null;
+  const usualOffS = usualOff(leg, falls, facts, rating);
+  if (usualOffS === null) return null;
+  if (hangS <= Math.max(HANG_TIMES * usualOffS, usualOffS + 2 * LEAST_EXTRA_S)) return null;
   return { how: 'hangs', hangS, usualOffS };
 }
 
@@ -77,14 +79,14 @@ function hangs(
  * median would not be a clean one. With no like peak the median of the others; with no other fall, from the slowest
  * heating leg, which is that of the drum.
  */
-function usualOff(leg: RunLeg, wholes: RunLeg[], facts: RunFacts, rating: Rating): number | null {
-  const others = nearestLegs(wholes, leg);
+function usualOff(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): number | null {
+  const others = nearestLegs(falls.whole, leg);
   const alike = others.filter((other) => isAlike(leg, other)).map(offTime);
   if (alike.length > 0) return Math.min(...alike);
   if (others.length > 0) return median(others.map(offTime));
   const { roomC } = facts;
   const opened = leg.from.tempC + totalU(facts, leg.from) >= bandOf('cut-out', rating).lowC;
-  const tauS = slowestHeating(facts);
+  const tauS = falls.slowestTauS;
   if (!opened || tauS === null || roomC === null || roomC >= rating.closesC) return null;
   return tauS * Math.log((leg.from.tempC - roomC) / (rating.closesC - roomC));
 }
@@ -94,8 +96,11 @@ function offTime({ from, to }: RunLeg): number {
 }
 
 function slowestHeating({ legs }: RunFacts): number | null {
-  const tausS = legs.flatMap(({ kind, fit }) => (kind === 'heating' && fit ? [fit.tauS] : []));
-  return tausS.length > 0 ? Math.max(...tausS) : null;
+  let slowestS: number | null = null;
+  for (const { kind, fit } of legs) {
+    if (kind === 'heating' && fit) slowestS = Math.max(slowestS ?? 0, fit.tauS);
+  }
+  return slowestS;
 }
 
 /** Complete falls that reach far enough to be the thermostat's: a dip on the way up sets no measure. */

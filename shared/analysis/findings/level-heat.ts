@@ -62,8 +62,9 @@ function rangeWithin(facts: RunFacts, { fromS, toS }: { fromS: number; toS: numb
 function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   const { from, to } = leg;
   if (from.turnedBy !== 'machine' || to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
-  const ownC = facts.resets.filter(({ timeS }) => timeS < from.timeS).map(({ tempC }) => tempC);
-  const highestResetC = Math.max(bandOf('reset', rating).highC, ...ownC);
+  const highestResetC = facts.resets
+    .filter(({ timeS }) => timeS < from.timeS)
+    .reduce((high, { tempC }) => Math.max(high, tempC), bandOf('reset', rating).highC);
   const above = from.tempC - totalU(facts, from) > highestResetC + ALIKE_PEAKS_K;
   if (!above || lasted(leg, facts) < SETTLED_S) return false;
   if (to.tempC > bandOf('cut-out', rating).highEndC) return false;

@@ -1,4 +1,5 @@
 import type { Finding } from '../analysis.ts';
+import { firstAtOrAfter } from '../first-at-or-after.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
 import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
@@ -24,20 +25,21 @@ const LEVEL_K = 2 / 1.8;
 export function findRunaway(facts: RunFacts): Finding | null {
   const { rating } = facts.input;
   if (!rating) return null;
-  const leg = facts.legs.find((candidate) => runsAway(candidate, facts, rating));
+  const upThere = cutOutsUpThere(facts, bandOf('cut-out', rating).highEndC);
+  const leg = facts.legs.find((candidate) => runsAway(candidate, upThere, facts, rating));
   return leg ? toFinding(leg, facts, rating) : null;
 }
 
-function runsAway(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
+function runsAway(leg: RunLeg, upThere: Extreme[], facts: RunFacts, rating: Rating): boolean {
   const { to } = leg;
   if (leg.kind !== 'heating') return false;
   const { highEndC } = bandOf('cut-out', rating);
   if (to.tempC >= rating.highLimitC) return true;
   const uK = Math.min(totalU(facts, to), totalU(facts, { uK: 2 * facts.noiseK }));
   if (to.tempC - uK <= highEndC && !staysAbove(leg, facts, highEndC)) return false;
-  const ownC = cutOutsUpThere(facts, to, highEndC);
-  if (to.turnedBy === 'machine') return ownC.length === 0 && !comesBack(facts, to);
-  return to.tempC > Math.max(-Infinity, ...ownC) + BEYOND_OWN_K + uK;
+  if (to.turnedBy === 'machine') return upThere.every((own) => own === to) && !comesBack(facts, to);
+  const highestC = upThere.reduce((high, { tempC }) => Math.max(high, tempC), -Infinity);
+  return to.tempC > highestC + BEYOND_OWN_K + uK;
 }
 
 /** By hand a peak may be badly located while the readings themselves leave no doubt. */
@@ -46,23 +48,18 @@ function staysAbove(leg: RunLeg, facts: RunFacts, highEndC: number): boolean {
   if (facts.spacingS < COARSE_S) return false;
   const sureC = highEndC + totalU(facts, { uK: facts.roundingK });
   const { fromS, toS } = spanOf(leg);
-  const above = tempsC.filter(
-    (tempC, i) => timesS[i]! > fromS && timesS[i]! <= toS && tempC > sureC,
-  );
-  return above.length >= 2;
+  let above = 0;
+  for (let i = firstAtOrAfter(timesS, fromS); i < timesS.length && timesS[i]! <= toS; i++) {
+    if (timesS[i]! > fromS && tempsC[i]! > sureC) above++;
+  }
+  return above >= 2;
 }
 
 /** Where the machine cut out by itself above band and allowance: hot, but it does cut out. */
-function cutOutsUpThere({ extremes }: RunFacts, but: Extreme, highEndC: number): number[] {
-  return extremes
-    .filter(
-      (extreme) =>
-        extreme !== but &&
-        extreme.kind === 'peak' &&
-        extreme.turnedBy === 'machine' &&
-        extreme.tempC > highEndC,
-    )
-    .map(({ tempC }) => tempC);
+function cutOutsUpThere({ extremes }: RunFacts, highEndC: number): Extreme[] {
+  return extremes.filter(
+    ({ kind, turnedBy, tempC }) => kind === 'peak' && turnedBy === 'machine' && tempC > highEndC,
+  );
 }
 
 function comesBack({ extremes }: RunFacts, peak: Extreme): boolean {

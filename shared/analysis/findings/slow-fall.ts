@@ -12,6 +12,8 @@ const HIDING_READINGS = 4;
 const LEAST_SPAN_K = 7 / 1.8;
 /** Peaks further apart leave the drum unequally hot, and their falls do not compare, K (5 °F). */
 export const ALIKE_PEAKS_K = 5 / 1.8;
+/** Whole falls whose times differ by less than this do not differ by SLOW_TIMES in their middle. */
+const AS_FAST_TIMES = 1.2;
 /** A fall needs this many readings between the two levels for its time to be known. */
 const LEAST_READINGS = 3;
 
@@ -32,7 +34,10 @@ export function undisturbedFalls(facts: RunFacts): RunLeg[] {
  * not, or where none compares.
  */
 export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidence | null {
-  const others = nearestLegs(falls, leg).filter((other) => isAlike(leg, other));
+  const others = nearestLegs(falls, leg).filter(
+    (other) => isAlike(leg, other) && !isAsFast(leg, other),
+  );
+  if (others.length === 0) return null;
   const compared = others.flatMap((other) => [
     ...comparedFalls(leg, other, facts),
     ...comparedWholes(leg, other),
@@ -69,10 +74,23 @@ function comparedFalls(leg: RunLeg, other: RunLeg, facts: RunFacts) {
   ];
 }
 
+/** A cheap first look that settles nearly every pair of a sound machine's falls: alike from turn to turn, and as fast. */
+function isAsFast(leg: RunLeg, other: RunLeg): boolean {
+  return (
+    areWholeAlike(leg, other) &&
+    leg.to.timeS - leg.from.timeS < AS_FAST_TIMES * (other.to.timeS - other.from.timeS)
+  );
+}
+
+/** Whether two falls both end in a turn of the machine, and near each other. */
+function areWholeAlike(leg: RunLeg, other: RunLeg): boolean {
+  const whole = leg.to.turnedBy === 'machine' && other.to.turnedBy === 'machine';
+  return whole && Math.abs(leg.to.tempC - other.to.tempC) <= ALIKE_PEAKS_K;
+}
+
 /** The same of two whole falls between like turns: the turns are located better than a coarse record crosses levels. */
 function comparedWholes(leg: RunLeg, other: RunLeg) {
-  const whole = leg.to.turnedBy === 'machine' && other.to.turnedBy === 'machine';
-  if (!whole || Math.abs(leg.to.tempC - other.to.tempC) > ALIKE_PEAKS_K) return [];
+  if (!areWholeAlike(leg, other)) return [];
   const ownS = leg.to.timeS - leg.from.timeS;
   const otherS = other.to.timeS - other.from.timeS;
   const spanK = leg.from.tempC - leg.to.tempC;

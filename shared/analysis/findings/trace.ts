@@ -1,4 +1,5 @@
 import type { Mark, MarkKind } from '../series.ts';
+import { gapsWithin } from '../find-gaps.ts';
 import { firstAtOrAfter } from '../first-at-or-after.ts';
 import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
 import { totalUncertainty } from '../judge-point.ts';
@@ -66,6 +67,9 @@ export function marksWithin(
 
 /** How many legs on either side a leg is compared with: the machine as it was about then, at a bounded cost. */
 const NEAR_LEGS = 24;
+/** The same among thousands, where the machine as it was about then is shown by fewer. */
+const MANY_LEGS = 200;
+const NEAR_AMONG_MANY = 8;
 
 /** The legs nearest in time to one of a record, itself left out; `legs` in time order. */
 export function nearestLegs(legs: RunLeg[], leg: RunLeg): RunLeg[] {
@@ -76,9 +80,8 @@ export function nearestLegs(legs: RunLeg[], leg: RunLeg): RunLeg[] {
     if (legs[middle]!.from.timeS < leg.from.timeS) low = middle + 1;
     else high = middle;
   }
-  return legs
-    .slice(Math.max(0, low - NEAR_LEGS), low + NEAR_LEGS + 1)
-    .filter((each) => each !== leg);
+  const reach = legs.length > MANY_LEGS ? NEAR_AMONG_MANY : NEAR_LEGS;
+  return legs.slice(Math.max(0, low - reach), low + reach + 1).filter((each) => each !== leg);
 }
 
 /** The span of a leg, s. */
@@ -111,8 +114,7 @@ export function isDisturbed(leg: RunLeg, facts: RunFacts): boolean {
 /** Whether a pause in the readings is long enough, beside its leg, to hide a turn. */
 export function hidesTurn(leg: RunLeg, facts: RunFacts): boolean {
   const { fromS, toS } = spanWithTail(leg, facts);
-  return facts.gaps.some(
-    (gap) =>
-      gap.fromS < toS && gap.toS > fromS && gap.toS - gap.fromS > HIDING_SHARE * (toS - fromS),
+  return gapsWithin(facts.gaps, fromS, toS).some(
+    (gap) => gap.toS - gap.fromS > HIDING_SHARE * (toS - fromS),
   );
 }

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { fitLeg, fitResponse } from '#shared/analysis/fit-response.ts';
+import { fitResponse } from '#shared/analysis/fit-response.ts';
 import { BOXBOD } from '#tests/fixtures/published/boxbod.ts';
 import { MISRA1A } from '#tests/fixtures/published/misra1a.ts';
 import { BOD, CO2_QN1, LOBLOLLY } from '#tests/fixtures/published/r-first-order.ts';
@@ -118,18 +118,4 @@ describe('fitResponse', () => {
       { numRuns: 30 },
     );
   });
-});
-
-test('fitLeg fits the named part only, and thinning it out changes little', () => {
-  const timesS = Float64Array.from({ length: 3000 }, (_, i) => i / 10);
-  const tempsC = timesS.map((timeS) => (timeS < 50 ? 20 : 90 - 70 * Math.exp(-(timeS - 50) / 80)));
-
-  const whole = fitLeg(timesS, tempsC, 60, 299, null, 5000)!;
-  const thin = fitLeg(timesS, tempsC, 60, 299, null, 50)!;
-
-  expect(whole.asymptoteC).toBeCloseTo(90, 6);
-  expect(whole.tauS).toBeCloseTo(80, 5);
-  // Averaging an exponential over 5 s scales it by about 1 + (5/80)²/24 and leaves asymptote and τ.
-  expect(thin.asymptoteC).toBeCloseTo(90, 2);
-  expect(thin.tauS).toBeCloseTo(80, 1);
 });

@@ -2,7 +2,7 @@ import { existsSync, readFileSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { describe, expect, test } from 'vitest';
 import { findTurnsOnly } from '#shared/analysis/find-turns-only.ts';
-import { fitLeg } from '#shared/analysis/fit-response.ts';
+import { fitLeg } from '#shared/analysis/fit-leg.ts';
 import type { Series } from '#shared/analysis/series.ts';
 
 // Records of heated things measured by others; not part of the project, so skipped where they are absent.
@@ -55,7 +55,7 @@ describe.skipIf(!existsSync(FOLDER))('real records (skipped: ../shared/data is a
     const { timesS, tempsC } = toSeries(rows);
 
     // The reference: step from 0 to 400 s, T∞ = 189.922 °C, τ = 62.61 s, rmse 1.763 K.
-    const fit = fitLeg(timesS, tempsC, 0, 400)!;
+    const fit = fitLeg(timesS, tempsC, { fromS: 0, toS: 400, guessTauS: null })!;
 
     expect(Math.abs(fit.asymptoteC - 189.922)).toBeLessThan(3);
     expect(Math.abs(fit.tauS / 62.61 - 1)).toBeLessThan(0.25);
