@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import Papa from 'papaparse';
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
+import type { Analysis } from '#shared/analysis/analysis.ts';
 import { findTurnsOnly } from '#shared/analysis/find-turns-only.ts';
 import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import { readLog } from '#shared/reading/read-log.ts';
@@ -14,8 +15,8 @@ function read(bytes: Uint8Array): LogReading {
   return outcome.reading;
 }
 
-function analyse({ series }: LogReading): number {
-  const analysis = analyseRun(series, {
+function judge({ series }: LogReading): Analysis {
+  return analyseRun(series, {
     rating: DEFAULT_RATING,
     probe: { accuracyK: 0.5, calibrationUK: 0, responseS: null },
     marks: [],
@@ -24,7 +25,6 @@ function analyse({ series }: LogReading): number {
     minCycles: 3,
     swingK: 4 / 1.8,
   });
-  return analysis.cutOuts.length;
 }
 
 /** Wall and processor time, ms: on a busy machine the second is the steadier. */
@@ -46,15 +46,14 @@ function turns({ series }: LogReading): number {
   return findTurnsOnly(series, 4 / 1.8, probe).cutOuts.length;
 }
 
-function speed(withAnalysis: boolean): void {
+function speed(): void {
   const bytes = readFileSync(file);
   const text = bytes.toString('utf8');
   const kinds = {
     'Papa.parse(text) alone': () => Papa.parse(text).data.length,
     read: () => read(bytes).temps.length,
-    ...(withAnalysis
-      ? { 'read and analysed': () => analyse(read(bytes)) }
-      : { 'read and turning points': () => turns(read(bytes)) }),
+    'read, turning points': () => turns(read(bytes)),
+    'read and fully judged': () => judge(read(bytes)),
   };
   const times = new Map<string, { wallMs: number; cpuMs: number }[]>();
   for (let round = 0; round < Number(rounds); round++) {
@@ -77,12 +76,15 @@ function speed(withAnalysis: boolean): void {
 function memory(): void {
   const highestMb = () => process.resourceUsage().maxRSS / 1024;
   const idleMb = process.memoryUsage.rss() / 1e6;
-  turns(read(readFileSync(file)));
+  const { cutOuts, legs, findings } = judge(read(readFileSync(file)));
   const peakMb = (highestMb() * 1024 * 1024) / 1e6;
   console.log(
     `memory: ${idleMb.toFixed(0)} MB idle, ${peakMb.toFixed(0)} MB at most, ${(peakMb - idleMb).toFixed(0)} MB over idle`,
   );
+  console.log(
+    `${cutOuts.length} cut-outs, ${legs.length} legs, ${findings[0]?.code ?? 'no finding'}`,
+  );
 }
 
 if (mode === 'memory') memory();
-else speed(mode === 'analysed');
+else speed();
