@@ -81,8 +81,11 @@ function hangs(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Evid
  */
 function usualOff(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): number | null {
   const others = nearestLegs(falls.whole, leg);
-  const alike = others.filter((other) => isAlike(leg, other)).map(offTime);
-  if (alike.length > 0) return Math.min(...alike);
+  let shortestS = Infinity;
+  for (const other of others) {
+    if (isAlike(leg, other)) shortestS = Math.min(shortestS, offTime(other));
+  }
+  if (shortestS < Infinity) return shortestS;
   if (others.length > 0) return median(others.map(offTime));
   const { roomC } = facts;
   const opened = leg.from.tempC + totalU(facts, leg.from) >= bandOf('cut-out', rating).lowC;

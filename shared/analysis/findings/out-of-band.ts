@@ -3,7 +3,7 @@ import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
 import type { RunFacts } from '../run-facts.ts';
 import { totalUncertainty } from '../judge-point.ts';
-import { judgedPoints, mean } from './judged-points.ts';
+import { judgedPoints, mean, type JudgedPoints } from './judged-points.ts';
 
 /**
  * opens-high, opens-low, closes-high, closes-low: the judged points of a kind together lie outside their band, its
@@ -27,7 +27,8 @@ type Place = { meanC: number; meanUK: number; side: 'high' | 'low'; by: 'points'
 
 function sideOf(kind: Point['kind'], facts: RunFacts, rating: Rating): Finding | null {
   const judged = judgedPoints(facts, kind);
-  const place = judged && (byPoints(kind, facts, rating) ?? bySwitches(kind, facts, rating));
+  const place =
+    judged && (byPoints(kind, judged, rating) ?? bySwitches(kind, judged, facts, rating));
   if (!judged || !place) return null;
   const { lowC, highC } = bandOf(kind, rating);
   const allowed = (kind === 'cut-out') === (place.side === 'high');
@@ -49,9 +50,7 @@ function sideOf(kind: Point['kind'], facts: RunFacts, rating: Rating): Finding |
   };
 }
 
-function byPoints(kind: Point['kind'], facts: RunFacts, rating: Rating): Place | null {
-  const judged = judgedPoints(facts, kind);
-  if (!judged) return null;
+function byPoints(kind: Point['kind'], judged: JudgedPoints, rating: Rating): Place | null {
   const { lowEndC, highEndC } = bandOf(kind, rating);
   const { meanC, meanUTotalK: meanUK } = judged;
   if (meanC - meanUK > highEndC) return { meanC, meanUK, side: 'high', by: 'points' };
@@ -60,12 +59,16 @@ function byPoints(kind: Point['kind'], facts: RunFacts, rating: Rating): Place |
 }
 
 /** The disc feels the air late by no more than the allowance, so a switch that far outside is not its lag. */
-function bySwitches(kind: Point['kind'], facts: RunFacts, rating: Rating): Place | null {
-  const judged = judgedPoints(facts, kind);
-  const tempsC = judged?.points
+function bySwitches(
+  kind: Point['kind'],
+  judged: JudgedPoints,
+  facts: RunFacts,
+  rating: Rating,
+): Place | null {
+  const tempsC = judged.points
     .map(({ switchTempC }) => switchTempC)
     .filter((tempC) => tempC !== null);
-  if (!judged || !tempsC || tempsC.length < judged.points.length) return null;
+  if (tempsC.length < judged.points.length) return null;
   const { lowC, highC } = bandOf(kind, rating);
   const meanC = mean(tempsC);
   // A switch instant is no better known than the turn that it leads to.

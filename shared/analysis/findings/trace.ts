@@ -58,6 +58,7 @@ export function marksWithin(
   { fromS, toS }: { fromS: number; toS: number },
   kinds: MarkKind[],
 ): Mark[] {
+  if (input.marks.length === 0) return [];
   return input.marks
     .filter(
       ({ kind, timeS }) => kinds.includes(kind) && timeS > fromS && timeS <= toS + TAPPED_LATE_S,
@@ -113,6 +114,7 @@ export function isDisturbed(leg: RunLeg, facts: RunFacts): boolean {
 
 /** Whether a pause in the readings is long enough, beside its leg, to hide a turn. */
 export function hidesTurn(leg: RunLeg, facts: RunFacts): boolean {
+  if (facts.gaps.length === 0) return false;
   const { fromS, toS } = spanWithTail(leg, facts);
   return gapsWithin(facts.gaps, fromS, toS).some(
     (gap) => gap.toS - gap.fromS > HIDING_SHARE * (toS - fromS),

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { findGaps, usualSpacing } from '#shared/analysis/find-gaps.ts';
+import { findGaps, gapsWithin, usualSpacing } from '#shared/analysis/find-gaps.ts';
 
 test('usual spacing is the middle one', () => {
   expect(usualSpacing(Float64Array.from([0, 1, 2, 3, 60, 61]))).toBe(1);
@@ -16,4 +16,17 @@ test('a quick probe that misses a second has no gap', () => {
   const timesS = Float64Array.from([0, 0.2, 0.4, 2.4, 2.6]);
 
   expect(findGaps(timesS, 0.2)).toEqual([]);
+});
+
+test('the gaps within a stretch are those that reach into it, not those that only touch it', () => {
+  const gaps = [
+    { fromS: 10, toS: 20, beforeIndex: 0, afterIndex: 1 },
+    { fromS: 30, toS: 40, beforeIndex: 2, afterIndex: 3 },
+    { fromS: 50, toS: 60, beforeIndex: 4, afterIndex: 5 },
+  ];
+
+  expect(gapsWithin(gaps, 20, 30)).toEqual([]);
+  expect(gapsWithin(gaps, 19, 31)).toEqual(gaps.slice(0, 2));
+  expect(gapsWithin(gaps, 33, 35)).toEqual(gaps.slice(1, 2));
+  expect(gapsWithin(gaps, 0, 100)).toEqual(gaps);
 });
