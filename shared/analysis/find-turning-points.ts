@@ -1,6 +1,7 @@
 import type { BinnedView, Extreme } from './run-facts.ts';
 import type { Series } from './series.ts';
 import { quantile } from './statistics/quantile.ts';
+import { boundByReadings } from './turns/bound-by-readings.ts';
 import { findExtremes } from './turns/find-extremes.ts';
 import { firstAtOrAfter } from './first-at-or-after.ts';
 import { locateTurns, type LocatedTurn, type RoughTurn } from './turns/locate-turns.ts';
@@ -14,6 +15,8 @@ const LEVEL_STEP = 1.25;
 const MOST_ROUNDS = 4;
 /** A located turn lies within this share of its smaller swing from the reading. */
 const CREDIBLE_SHARE = 0.5;
+/** Nor is it less certain than this share of the greater swing beside it: it may have missed some of the smaller. */
+const MOST_U_SHARE = 0.5;
 /** Noise makes swings of this many deviations. */
 const NOISE_SWING = 8;
 
@@ -88,10 +91,10 @@ function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number):
   return turns.map((turn, i): Extreme => {
     const isEnd = i === 0 || i === turns.length - 1;
     const fitted = isEnd ? null : located[i - 1];
-    const swing = isEnd ? 0 : smallerSwing(turns, i);
+    const [swing, greaterK] = isEnd ? [0, 0] : swingsBeside(turns, i);
     const found =
       fitted && isCredible(fitted, turn.tempC, swing, noiseK)
-        ? fitted
+        ? withBoundedU(fitted, view, turn, greaterK, noiseK)
         : atReading(view, turn, noiseK);
     return {
       kind: turn.kind,
@@ -102,9 +105,12 @@ function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number):
   });
 }
 
-function smallerSwing(turns: { tempC: number }[], i: number): number {
+/** The smaller and the greater of the swings beside a turn, K. */
+function swingsBeside(turns: { tempC: number }[], i: number): [number, number] {
   const tempC = turns[i]!.tempC;
-  return Math.min(Math.abs(tempC - turns[i - 1]!.tempC), Math.abs(tempC - turns[i + 1]!.tempC));
+  const beforeK = Math.abs(tempC - turns[i - 1]!.tempC);
+  const afterK = Math.abs(tempC - turns[i + 1]!.tempC);
+  return [Math.min(beforeK, afterK), Math.max(beforeK, afterK)];
 }
 
 /**
@@ -116,11 +122,33 @@ function isCredible({ tempC, uK }: LocatedTurn, readC: number, swing: number, no
   return Math.abs(tempC - readC) < CREDIBLE_SHARE * swing && uK < swing;
 }
 
+/**
+ * A fit of few readings may say that it knows less of a turn than the readings themselves show. Its `u` is no greater
+ * than the distance to the further end of what they bound, with their noise (whose estimate
+ * takes turns for noise by hand: so no more of it than a real swing allows); and no greater than half the swing beside it.
+ */
+function withBoundedU(
+  fitted: LocatedTurn,
+  view: BinnedView,
+  turn: RoughTurn,
+  swing: number,
+  noiseK: number,
+): LocatedTurn {
+  const { timesS, tempsC } = view;
+  const at = firstAtOrAfter(timesS, turn.timeS);
+  const { lowC, highC } = boundByReadings(timesS, tempsC, at, turn.kind === 'peak' ? 1 : -1);
+  const { tempC, uK } = fitted;
+  const furthestK = Math.max(Math.abs(tempC - lowC), Math.abs(highC - tempC));
+  const boundK = Math.hypot(furthestK, Math.min(2 * noiseK, (2 * swing) / NOISE_SWING));
+  return { ...fitted, uK: Math.min(uK, boundK, MOST_U_SHARE * swing) };
+}
+
 /** What is left where no fit holds: the reading itself; the true turn may lie half a step beyond it. */
 function atReading(view: BinnedView, turn: RoughTurn, noiseK: number): LocatedTurn {
   const at = firstAtOrAfter(view.timesS, turn.timeS);
   const stepK = (i: number) => Math.abs(turn.tempC - (view.tempsC[i] ?? turn.tempC));
-  const uK = Math.hypot(2 * noiseK, 0.5 * Math.max(stepK(at - 1), stepK(at + 1)));
+  const beyondK = 0.5 * Math.max(stepK(at - 1), stepK(at + 1));
+  const uK = Math.hypot(2 * noiseK, beyondK);
   return { timeS: turn.timeS, tempC: turn.tempC, uK, switched: null };
 }
 
@@ -132,7 +160,7 @@ function withoutWeakSwings(extremes: Extreme[], swingK: number): number[] {
   const kept = extremes.map((_, i) => i);
   for (;;) {
     const at = weakestSwing(
-      kept.map((i) => extremes[i]!.tempC),
+      kept.map((i) => extremes[i]!),
       swingK,
     );
     if (at === null) return kept;
@@ -142,11 +170,13 @@ function withoutWeakSwings(extremes: Extreme[], swingK: number): number[] {
   }
 }
 
-function weakestSwing(tempsC: number[], swingK: number): number | null {
+/** A located peak that lies under its valley is no swing at all. */
+function weakestSwing(extremes: Extreme[], swingK: number): number | null {
   let weakest: number | null = null;
   let leastK = swingK;
-  for (let i = 0; i + 1 < tempsC.length; i++) {
-    const swing = Math.abs(tempsC[i + 1]! - tempsC[i]!);
+  for (let i = 0; i + 1 < extremes.length; i++) {
+    const { kind, tempC } = extremes[i]!;
+    const swing = (kind === 'valley' ? 1 : -1) * (extremes[i + 1]!.tempC - tempC);
     if (swing < leastK) {
       leastK = swing;
       weakest = i;

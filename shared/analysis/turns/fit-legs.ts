@@ -25,6 +25,8 @@ export type LegProblem = {
   looseness: Float64Array;
   /** Least standard deviation of a value, K. */
   leastNoiseK: number;
+  /** 1 for each value that the noise is estimated from, 0 for one that counts too little; absent: all. */
+  nears?: Float64Array;
 };
 
 export type FittedLegs = {
@@ -109,7 +111,7 @@ function finish(
     const variance = choleskySolve(factor, unit, p)[j]!;
     determined += Math.max(0, 1 - variance / problem.looseness[j]! ** 2);
   }
-  const degrees = Math.max(1, n - determined);
+  const degrees = Math.max(1, (problem.nears ? sumOf(problem.weights) : n) - determined);
   let squares = 0;
   for (let i = 0; i < n; i++) {
     const off = Math.min(Math.abs(problem.tempsC[i]! - fitted[i]!), 3 * noiseK);
@@ -127,7 +129,13 @@ function robustNoise(problem: LegProblem, fitted: Float64Array): number {
   for (let i = 0; i < offs.length; i++) {
     offs[i] = Math.abs(problem.tempsC[i]! - fitted[i]!) * Math.sqrt(problem.weights[i]!);
   }
-  return Math.max(problem.leastNoiseK, 1.4826 * median(offs));
+  const { nears } = problem;
+  const used = nears ? offs.filter((_, i) => nears[i] === 1) : offs;
+  return Math.max(problem.leastNoiseK, 1.4826 * median(used));
+}
+
+function sumOf(values: Float64Array): number {
+  return values.reduce((sum, value) => sum + value, 0);
 }
 
 function costOf(

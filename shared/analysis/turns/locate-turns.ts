@@ -3,7 +3,8 @@ import { gradientError } from '../statistics/solve-normal.ts';
 import { studentTQuantile } from '../statistics/student-t.ts';
 import { median } from '../statistics/quantile.ts';
 import { firstAtOrAfter } from '../first-at-or-after.ts';
-import { fitLegs, type FittedLegs, type LegProblem } from './fit-legs.ts';
+import type { FittedLegs, LegProblem } from './fit-legs.ts';
+import { fitNearTurns } from './fit-near-turns.ts';
 import {
   legAt,
   lagsOf,
@@ -49,6 +50,9 @@ const LEAST_NOISE_SHARE = 0.1;
 /** A switch instant less certain than this share of the leg after it is not shown by the record. */
 const MOST_SWITCH_U = 0.35;
 
+/** A real machine has more than two lags, which shifts the switches found: widened by what that took in simulations. */
+const SWITCH_WIDENING = 1.35;
+
 /** Beyond this many turns only some are fitted jointly; the others one by one, with what those taught. */
 const MANY_TURNS = 60;
 
@@ -79,7 +83,7 @@ export function locateTurns(
   for (const i of jointly) {
     const window = windows[i]!;
     const problem = buildProblem(view, turns, window, noiseK, shared);
-    const fit: FittedLegs | null = problem && fitLegs(problem.task);
+    const fit: FittedLegs | null = problem && fitNearTurns(problem.task);
     for (let turn = window.readFrom; turn < window.readTo; turn++) {
       located[turn - 1] = fit && readTurn(fit, turn - window.from, turns[turn - 1]!.kind);
     }
@@ -203,11 +207,12 @@ function readTurn(fit: FittedLegs, k: number, kind: 'peak' | 'valley'): LocatedT
   const uK = coverage * temperatureError(fit, k + 1, timeS);
   const error = new Float64Array(parameters.length);
   error[placeOfSwitch(k)] = 1;
-  const uS = coverage * gradientError(fit.factor, error, parameters.length);
+  const switchCoverage = SWITCH_WIDENING * coverage;
+  const uS = switchCoverage * gradientError(fit.factor, error, parameters.length);
   const tempC = legAt(solved, k + 1, timeS);
   if (!Number.isFinite(tempC + uK + timeS + uS)) return null;
   if (uS > MOST_SWITCH_U * (nextS - switchS)) return { timeS, tempC, uK, switched: null };
-  const switchUK = coverage * temperatureError(fit, k, switchS, placeOfSwitch(k));
+  const switchUK = switchCoverage * temperatureError(fit, k, switchS, placeOfSwitch(k));
   const switched = { timeS: switchS, tempC: legAt(solved, k, switchS), uS, uK: switchUK };
   return { timeS, tempC, uK, switched };
 }

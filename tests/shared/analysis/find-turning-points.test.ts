@@ -5,11 +5,13 @@ import type { Extreme } from '#shared/analysis/run-facts.ts';
 import type { Series } from '#shared/analysis/series.ts';
 import { toKelvinStep } from '#shared/units.ts';
 import {
+  buildSeries,
   buildThermostatRun,
   seededNormal,
   type BuildOptions,
   type BuiltTurn,
 } from '#tests/support/build-series.ts';
+import { buildTwoPacedRun } from '#tests/support/build-two-paced-run.ts';
 
 const SWING_K = toKelvinStep(4, 'F');
 
@@ -87,6 +89,54 @@ describe('turning points against turns known in closed form', () => {
     expect(errorsOf(found, turns)[4]!.timeS).toBeLessThan(3);
     expect(found[4]!.uK).toBeGreaterThan(whole[4]!.uK);
   });
+});
+
+describe('a stopwatch and few readings a cycle', () => {
+  const legs: BuildOptions['legs'] = [{ asymptoteC: 92, tauS: 220, untilC: 62 }];
+  for (let i = 0; i < 12; i++) {
+    legs.push({ asymptoteC: 25, tauS: 110, untilC: 50 }, { asymptoteC: 92, tauS: 110, untilC: 62 });
+  }
+  legs.push({ asymptoteC: 25, tauS: 110, untilC: 49 });
+  const swingK = 62 - 50;
+
+  test.each([13, 15, 16, 18])(
+    'at %i s no uncertainty is wilder than half a swing, and most cover',
+    (spacingS) => {
+      let covered = 0;
+      let all = 0;
+      for (let seed = 1; seed <= 8; seed++) {
+        const options = { startC: 22, legs, lagS: 3, spacingS, noiseK: 0.1, roundingK: 0.5 / 1.8 };
+        const { series, turns } = buildSeries({ ...options, seed });
+        for (const { timeS, tempC, uK } of turnsOf(series)) {
+          const near = [...turns].sort(
+            (a, b) => Math.abs(a.timeS - timeS) - Math.abs(b.timeS - timeS),
+          );
+          expect(uK).toBeLessThan(0.55 * swingK);
+          all++;
+          if (Math.abs(tempC - near[0]!.tempC) <= uK) covered++;
+        }
+      }
+
+      expect(all).toBeGreaterThan(100);
+      expect(covered / all).toBeGreaterThan(0.88);
+    },
+  );
+});
+
+test('legs of two time constants, which no fit of first-order ones follows, are still covered', () => {
+  let covered = 0;
+  let all = 0;
+  for (let seed = 1; seed <= 6; seed++) {
+    const { series, turnsC } = buildTwoPacedRun(seed);
+    for (const [i, { tempC, uK }] of turnsOf(series).entries()) {
+      all++;
+      if (Math.abs(tempC - turnsC[i]!) <= uK) covered++;
+    }
+  }
+
+  expect(all).toBe(6 * 9);
+  // Three standard deviations of a binomial share at n = 54, p = 0.95.
+  expect(covered / all).toBeGreaterThan(0.86);
 });
 
 describe('what is no turning point', () => {
