@@ -10,6 +10,7 @@ import { readEnv } from './env.ts';
 import { createLogger } from './log.ts';
 import { closeWorkers, openWorkers } from './pool.ts';
 import { openDataFolders } from './runs/data-folders.ts';
+import { createSampleRepository } from './runs/sample-repository.ts';
 import { openSecrets } from './secrets.ts';
 
 /** An upload of 100 MB over a phone takes minutes; a request that says nothing for so long is dropped. */
@@ -24,6 +25,7 @@ async function start(): Promise<void> {
   const secrets = await openSecrets(env.dataDir);
   const db = openDatabase(join(env.dataDir, 'fusekeeper.sqlite'));
   await migrate(db);
+  await createSampleRepository(db).sweep();
   await openDataFolders(env.dataDir);
   const workers = openWorkers();
   const now = () => new Date();

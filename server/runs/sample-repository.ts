@@ -1,3 +1,4 @@
+import { setImmediate as nextTurn } from 'node:timers/promises';
 import type { Knex } from 'knex';
 import { unpackChunk } from './pack-samples.ts';
 
@@ -15,7 +16,7 @@ export const TEMPS = 1;
 
 export type SampleRepository = ReturnType<typeof createSampleRepository>;
 
-/** A run's readings, as recorded. They are read chunk by chunk, so that other requests get their turn. */
+/** A run's readings, as recorded. They go in and out chunk by chunk, so that other requests get their turn. */
 export function createSampleRepository(db: Knex) {
   async function findChunk(runId: string, channel: number, chunk: number) {
     const row = await db<SampleRow>('run_samples').where({ run_id: runId, channel, chunk }).first();
@@ -35,7 +36,18 @@ export function createSampleRepository(db: Knex) {
           samples,
           packed: octets,
         });
+        await nextTurn();
       }
+    },
+
+    /** Takes back the readings of a run that did not come to be. */
+    async remove(runId: string): Promise<void> {
+      await db<SampleRow>('run_samples').where({ run_id: runId }).delete();
+    },
+
+    /** What a crash left of runs that did not come to be. */
+    async sweep(): Promise<void> {
+      await db<SampleRow>('run_samples').whereNotIn('run_id', db('runs').select('id')).delete();
     },
 
     /** One channel, chunk after chunk. */

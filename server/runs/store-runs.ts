@@ -37,48 +37,67 @@ type Accepted = {
   startedAtMs: number;
 };
 
-/** One transaction: the file's row, its runs with readings and results, and who did it. */
-export function storeRuns(
+/**
+ * All of it or nothing. The readings go in first, piece by piece, each piece a short transaction of its own: one of
+ * tens of megabytes would hold up every other request. They count once the runs' rows are there, which one transaction
+ * writes with the file's row, the results and who did it.
+ */
+export async function storeRuns(
   { db, now }: { db: Knex; now: () => Date },
   by: Person,
   accepted: Accepted,
 ): Promise<string[]> {
-  const { log, read } = accepted;
   const acceptedAtMs = now().getTime();
+  const stored = accepted.read.log.runs.map((part) => ({
+    part,
+    run: toRun(accepted, part, acceptedAtMs),
+  }));
+  const samples = createSampleRepository(db);
+  try {
+    for (const { run, part } of stored) {
+      for (const [channel, chunks] of part.packed.entries()) {
+        await samples.insert(run.id, channel, chunks);
+      }
+    }
+    await storeRows({ db, now }, by, accepted, stored);
+  } catch (error) {
+    for (const { run } of stored) await samples.remove(run.id);
+    throw error;
+  }
+  return stored.map(({ run }) => run.id);
+}
+
+type Stored = { part: ImportedRun; run: Run };
+
+function storeRows(
+  { db, now }: { db: Knex; now: () => Date },
+  by: Person,
+  { log, read, judged }: Accepted,
+  stored: Stored[],
+): Promise<void> {
   return db.transaction(async (trx) => {
-    await createRunRepository(trx).insertUpload({
+    const runs = createRunRepository(trx);
+    await runs.insertUpload({
       id: log.id,
       fileName: log.fileName,
       bytes: read.bytes,
       sha256: read.sha256,
       uploadedBy: by.id,
-      uploadedAtMs: acceptedAtMs,
+      uploadedAtMs: now().getTime(),
     });
-    const ids: string[] = [];
-    for (const part of read.log.runs) {
-      const run = toRun(accepted, part, acceptedAtMs);
-      await storeRun(trx, run, part, accepted.judged);
-      ids.push(run.id);
+    for (const { part, run } of stored) {
+      await runs.insert(run);
+      await createAnalysisRepository(trx).insert({
+        ...part.judged,
+        id: randomUUID(),
+        runId: run.id,
+        madeAtMs: run.acceptedAtMs,
+        judgedBy: judged,
+      });
     }
+    const details = { file: log.id, runs: stored.length };
     const audit = createAudit(trx, now);
-    const details = { file: log.id, runs: ids.length };
     await audit({ userId: by.id, event: 'run_accepted', subject: log.visitId, details });
-    return ids;
-  });
-}
-
-async function storeRun(trx: Knex, run: Run, part: ImportedRun, judged: JudgedBy | null) {
-  await createRunRepository(trx).insert(run);
-  const samples = createSampleRepository(trx);
-  for (const [channel, chunks] of part.packed.entries()) {
-    await samples.insert(run.id, channel, chunks);
-  }
-  await createAnalysisRepository(trx).insert({
-    ...part.judged,
-    id: randomUUID(),
-    runId: run.id,
-    madeAtMs: run.acceptedAtMs,
-    judgedBy: judged,
   });
 }
 

@@ -1,4 +1,6 @@
+import { randomUUID } from 'node:crypto';
 import { beforeAll, expect, test } from 'vitest';
+import { createSampleRepository } from '#server/runs/sample-repository.ts';
 import { jobPageSchema } from '#shared/schemas/jobs.ts';
 import { runCardSchema, runPageSchema } from '#shared/schemas/runs.ts';
 import { bookVisit, THERMOSTAT_155, type BookedVisit } from '#tests/support/booked-visit.ts';
@@ -34,6 +36,20 @@ test('155 °F is kept as 155 °F, bit for bit', async () => {
 
   // IEEE 754 binary64 of 75, 155, 154.9, 155.1 and 130, as the language itself writes them.
   expect(packed).toEqual(Buffer.from(Float64Array.of(75, 155, 154.9, 155.1, 130).buffer));
+});
+
+test('readings that a crash left without a run are swept at the next start, a run’s own stay', async () => {
+  const samples = createSampleRepository(app.db);
+  const lost = randomUUID();
+  await samples.insert(lost, 0, [new Uint8Array(8)]);
+  const readingsOf = (id: string) => app.db('run_samples').where({ run_id: id }).select('chunk');
+  const before = await readingsOf(runId);
+
+  await samples.sweep();
+
+  expect(await readingsOf(lost)).toEqual([]);
+  expect(await readingsOf(runId)).toEqual(before);
+  expect(before.length).toBeGreaterThan(0);
 });
 
 test('the samples of a run are all of its readings, in °C', async () => {
