@@ -11,6 +11,8 @@ import { firstCrossing, isDisturbed, lasted, nearestLegs, spanWithTail, totalU }
 const HANG_TIMES = 3;
 /** Between this many readings a whole cycle may hide, and look like one long fall. */
 const HIDDEN_CYCLE_READINGS = 8;
+/** Readings that a fall must span to be a measure, where some do. */
+const SURE_READINGS = 4;
 /** Share of the rated differential that a fall must cover to be a measure for others. */
 const LEAST_FALL_SHARE = 0.5;
 
@@ -106,16 +108,21 @@ function slowestHeating({ legs }: RunFacts): number | null {
   return slowestS;
 }
 
-/** Complete falls that reach far enough to be the thermostat's: a dip on the way up sets no measure. */
-function wholeFalls({ legs }: RunFacts, rating: Rating): RunLeg[] {
+/**
+ * Complete falls that reach far enough to be the thermostat's: a dip on the way up sets no measure. Nor does one of a
+ * few readings, which two wild ones can make, where there are longer ones.
+ */
+function wholeFalls({ legs, spacingS }: RunFacts, rating: Rating): RunLeg[] {
   const leastK = LEAST_FALL_SHARE * (rating.opensC - rating.closesC);
-  return legs.filter(
+  const whole = legs.filter(
     ({ kind, from, to }) =>
       kind === 'cooling' &&
       from.turnedBy === 'machine' &&
       to.turnedBy === 'machine' &&
       from.tempC - to.tempC >= leastK,
   );
+  const sure = whole.filter((leg) => offTime(leg) >= SURE_READINGS * spacingS);
+  return sure.length > 0 ? sure : whole;
 }
 
 function levelsOff(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
