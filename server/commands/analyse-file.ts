@@ -3,11 +3,11 @@ import { analyseRun } from '#shared/analysis/analyse-run.ts';
 import { findTurnsOnly } from '#shared/analysis/find-turns-only.ts';
 import type { Mark } from '#shared/analysis/series.ts';
 import { toContract, type Contract } from '#shared/analysis/to-contract.ts';
-import { isRoomName } from '#shared/reading/layout/column-roles.ts';
 import type { LogReading, ReadProblem, ReadQuestion } from '#shared/reading/log-reading.ts';
 import { problem } from '#shared/reading/problem-words.ts';
+import { roomOf } from '#shared/reading/room-of.ts';
 import { readLog } from '#shared/reading/read-log.ts';
-import { fromCelsius, toCelsius, type DisplayUnit } from '#shared/units.ts';
+import { fromCelsius, type DisplayUnit } from '#shared/units.ts';
 import type { AnalyseFlags } from './analyse-flags.ts';
 
 /** A file that gave no analysis, as contract 1 prints it. */
@@ -66,7 +66,7 @@ function judge(reading: LogReading, file: string, flags: AnalyseFlags, marks: Ma
         probe,
         marks,
         load: flags.load,
-        roomC: flags.roomC ?? roomOf(reading),
+        roomC: flags.roomC ?? roomOf(reading, 0, reading.series.timesS.at(-1) ?? 0),
         minCycles: flags.minCycles,
         swingK,
       });
@@ -77,18 +77,6 @@ function judge(reading: LogReading, file: string, flags: AnalyseFlags, marks: Ma
     analysis,
     ...(flags.withSeries ? { series: seriesIn(reading, unit) } : {}),
   });
-}
-
-/** A room hardly changes: a longer record is looked at in evenly spread places. */
-const ROOM_LOOKED_AT = 20_000;
-
-/** Median of a column of the room's temperature, °C; null where there is none. */
-function roomOf({ channels }: LogReading): number | null {
-  const room = channels.find(({ name }) => isRoomName(name));
-  const stride = Math.max(1, Math.floor((room?.temps.length ?? 0) / ROOM_LOOKED_AT));
-  const temps = room?.temps.filter((temp, i) => i % stride === 0 && !Number.isNaN(temp)).sort();
-  const median = temps?.[temps.length >> 1];
-  return room === undefined || median === undefined ? null : toCelsius(median, room.unit);
 }
 
 /** Every reading kept; as recorded, bit for bit, where the output's unit is the file's. */

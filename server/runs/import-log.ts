@@ -5,7 +5,7 @@ import type { LogReading } from '#shared/reading/log-reading.ts';
 import type { TemperatureUnit } from '#shared/units.ts';
 import { judgingOfSpan, type Judging } from './judging.ts';
 import { packSamples } from './pack-samples.ts';
-import { roomOf } from './room-of.ts';
+import { roomOf } from '#shared/reading/room-of.ts';
 import { sparkPoints } from './spark-points.ts';
 
 /** A part of a record that becomes a run, s from the record's first reading. */

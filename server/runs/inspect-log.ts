@@ -4,7 +4,7 @@ import { findParts } from '#shared/reading/find-parts.ts';
 import { traceColumns } from '#shared/reading/preview-trace.ts';
 import type { ReadPreview } from '#shared/schemas/uploads.ts';
 import { judgingOfSpan, type Judging } from './judging.ts';
-import { roomOf } from './room-of.ts';
+import { roomOf } from '#shared/reading/room-of.ts';
 
 const PREVIEW_COLUMNS = 600;
 
