@@ -69,6 +69,7 @@ function judge(reading: LogReading, file: string, flags: AnalyseFlags, marks: Ma
         roomC: flags.roomC ?? roomOf(reading, 0, reading.series.timesS.at(-1) ?? 0),
         minCycles: flags.minCycles,
         swingK,
+        reference: null,
       });
   return toContract({
     file,

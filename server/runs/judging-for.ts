@@ -43,6 +43,7 @@ export function judgingFor({ judged, probe, conditions, marks, minCycles }: Said
     load,
     roomC: roomTemp === null ? null : toCelsius(roomTemp, roomUnit),
     minCycles,
+    reference: null,
   };
 }
 
@@ -50,5 +51,13 @@ export function judgingFor({ judged, probe, conditions, marks, minCycles }: Said
 export function judgingAtFirst(machine: MachinePage, minCycles: number): Judging {
   const judged = specifiedFor(machine, machine.specified[0]?.setting ?? 'high');
   const rating = ratingOf(specifiedFor(machine, 'high') ?? judged);
-  return { rating, probe: probeOf(null), marks: [], load: null, roomC: null, minCycles };
+  return {
+    rating,
+    probe: probeOf(null),
+    marks: [],
+    load: null,
+    roomC: null,
+    minCycles,
+    reference: null,
+  };
 }

@@ -1,4 +1,4 @@
-import type { AnalysisInput } from '#shared/analysis/analysis.ts';
+import type { AnalysisInput, ReferenceRun } from '#shared/analysis/analysis.ts';
 import type { Load, Probe, Rating } from '#shared/analysis/rating.ts';
 import { toKelvinStep } from '#shared/units.ts';
 import type { Run } from './run.ts';
@@ -15,6 +15,8 @@ export type Judging = {
   load: Load | null;
   roomC: number | null;
   minCycles: number;
+  /** A clean run of the machine; null where none is known. */
+  reference: ReferenceRun | null;
 };
 
 /** The same, for the part of a record from `fromS` to `toS`, its times counted from `fromS`. */

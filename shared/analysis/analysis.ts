@@ -14,6 +14,21 @@ export type AnalysisInput = {
   minCycles: number;
   /** Swing threshold of a turning point, K; default 4 °F. */
   swingK: number;
+  /** What the machine did when it was clean; null where no such run is known. */
+  reference: ReferenceRun | null;
+};
+
+/**
+ * A clean run of the same machine on the same heat setting, to go by where a run has nothing clean of its own. Middle
+ * values (medians) over its complete cycles.
+ */
+export type ReferenceRun = {
+  cycles: number;
+  onS: number;
+  offS: number;
+  swingK: number;
+  /** Its falls as one first-order response, good from `fromC` down to `toC`; null where they do not compare. */
+  fall: { fromC: number; toC: number; asymptoteC: number; tauS: number } | null;
 };
 
 export type Call = 'inside' | 'outside' | 'within-allowance' | 'too-close';

@@ -67,6 +67,7 @@ export function inputOf(plan: Plan, run: ModelRun): AnalysisInput {
     roomC: plan.machine.roomC,
     minCycles: 3,
     swingK: 4 / 1.8,
+    reference: null,
   };
 }
 

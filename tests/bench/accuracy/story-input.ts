@@ -32,6 +32,7 @@ export function inputOf(
     roomC: story.machine.roomC,
     minCycles: 3,
     swingK: toKelvinStep(4, 'F'),
+    reference: null,
   };
 }
 

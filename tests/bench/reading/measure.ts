@@ -24,6 +24,7 @@ function judge({ series }: LogReading): Analysis {
     roomC: null,
     minCycles: 3,
     swingK: 4 / 1.8,
+    reference: null,
   });
 }
 

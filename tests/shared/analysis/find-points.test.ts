@@ -16,6 +16,7 @@ const INPUT: AnalysisInput = {
   roomC: null,
   minCycles: 3,
   swingK: 4 / 1.8,
+  reference: null,
 };
 
 function extremesOf(points: [number, number, TurnedBy][]): Extreme[] {

@@ -11,6 +11,7 @@ export function plainInput(changes: Partial<AnalysisInput> = {}): AnalysisInput 
     roomC: null,
     minCycles: 3,
     swingK: 4 / 1.8,
+    reference: null,
     ...changes,
   };
 }

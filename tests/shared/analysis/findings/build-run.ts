@@ -57,6 +57,7 @@ export function judge(series: Series, told: Partial<AnalysisInput> = {}) {
     roomC: toCelsius(72, 'F'),
     minCycles: 3,
     swingK: 4 / 1.8,
+    reference: null,
     ...told,
   });
 }
