@@ -2,7 +2,13 @@ import type { BinnedView } from '../run-facts.ts';
 import { median } from '../statistics/quantile.ts';
 import type { FittedLegs } from './fit-legs.ts';
 import { LN_TAU_COOL, LN_TAU_HEAT, lagsOf, placeOfRamp } from './lagged-legs.ts';
-import { locateQuickly, type QuickTurn } from './locate-quickly.ts';
+import {
+  createQuickBench,
+  locateQuickly,
+  type QuickBench,
+  type QuickTask,
+  type QuickTurn,
+} from './locate-quickly.ts';
 import type { LocatedTurn, RoughTurn } from './locate-turns.ts';
 import type { FitWindow } from './plan-windows.ts';
 import { tabulateTurn, type TurnShape } from './turn-shape.ts';
@@ -31,7 +37,8 @@ export function locateOneByOne(
   lessons: Lesson[],
   located: (LocatedTurn | null)[],
 ): void {
-  const readers = lessons.map((lesson) => createReader(view, turns, edgesS, lesson));
+  const bench = createQuickBench();
+  const readers = lessons.map((lesson) => createReader(view, turns, edgesS, lesson, bench));
   const widening = findWidening(windows, lessons, located, readers);
   let nearest = 0;
   windows.forEach((window, i) => {
@@ -56,6 +63,7 @@ function createReader(
   turns: RoughTurn[],
   edgesS: number[],
   { fit, valueNoiseK }: Lesson,
+  bench: QuickBench,
 ): Reader {
   const { lagAS, lagBS } = lagsOf(fit.parameters);
   const heatS = Math.exp(fit.parameters[LN_TAU_HEAT]!);
@@ -71,7 +79,7 @@ function createReader(
     const beforeS = Math.min(reachS, timeS - edgesS[turn - 1]!);
     const afterS = Math.min(reachS, edgesS[turn + 1]! - timeS);
     const shape: TurnShape = kind === 'peak' ? peak : valley;
-    return locateQuickly(view, {
+    const task: QuickTask = {
       shape,
       sign: kind === 'peak' ? 1 : -1,
       switchS: timeS - 0.7 * (lagAS + lagBS),
@@ -79,7 +87,8 @@ function createReader(
       endS: timeS + USED_AFTER * afterS,
       noiseK: valueNoiseK,
       rampKPerS,
-    });
+    };
+    return locateQuickly(view, task, bench);
   };
 }
 

@@ -34,24 +34,23 @@ const MOST_VALUES = 60;
 
 /**
  * Locates one turn by a local fit of its known shape: five coefficients and the switch time, by Gauss–Newton.
- * No allocation per reading: a long record has thousands of turns.
  *
+ * @param bench where to work; a long record has thousands of turns, so nothing is allocated per reading
  * @returns null where the readings do not settle it
  */
-export function locateQuickly(view: BinnedView, task: QuickTask): QuickTurn | null {
-  const { shape, noiseK } = task;
-  const from = firstAtOrAfter(view.timesS, task.startS);
-  const to = firstAtOrAfter(view.timesS, task.endS);
-  const stride = Math.max(1, Math.floor((to - from) / MOST_VALUES));
-  if (to - from < 2 * UNKNOWNS) return null;
+export function locateQuickly(
+  view: BinnedView,
+  task: QuickTask,
+  bench: QuickBench,
+): QuickTurn | null {
+  const { shape } = task;
+  if (takeValues(view, task, bench) < 2 * UNKNOWNS) return null;
   let switchS = task.switchS;
   let solution: Float64Array | null = null;
   let factor: Float64Array | null = null;
   for (let round = 0; round < ROUNDS; round++) {
-    const { matrix, right } = normals(view, from, to, stride, shape, switchS, solution);
-    const weight = 1 / (noiseK * noiseK);
-    for (let j = 0; j < matrix.length; j++) matrix[j]! *= weight;
-    for (let j = 0; j < right.length; j++) right[j]! *= weight;
+    fillColumns(bench, shape, switchS, solution);
+    const { matrix, right } = normals(bench, task.noiseK);
     addBeliefs(matrix, task, solution === null);
     factor = choleskyFactor(matrix, UNKNOWNS);
     if (!factor) return null;
@@ -66,37 +65,91 @@ export function locateQuickly(view: BinnedView, task: QuickTask): QuickTurn | nu
   return readOff(task, switchS, solution, factor);
 }
 
-/** Rows of the normal equations; the first round, with no coefficients yet, leaves the switch where it is. */
-function normals(
-  view: BinnedView,
-  from: number,
-  to: number,
-  stride: number,
-  shape: TurnShape,
-  switchS: number,
-  solution: Float64Array | null,
-) {
-  const matrix = new Float64Array(UNKNOWNS * UNKNOWNS);
-  const right = new Float64Array(UNKNOWNS);
-  const row = new Float64Array(UNKNOWNS);
-  for (let i = from; i + stride <= to; i += stride) {
+/** Room for the values of one fit and the columns of its design; lent from fit to fit. */
+export type QuickBench = {
+  count: number;
+  /** Readings behind each value. */
+  each: number;
+  timesS: Float64Array;
+  tempsC: Float64Array;
+  columns: Float64Array[];
+};
+
+export function createQuickBench(): QuickBench {
+  const column = () => new Float64Array(MOST_VALUES);
+  const columns = Array.from({ length: UNKNOWNS }, column);
+  return { count: 0, each: 1, timesS: column(), tempsC: column(), columns };
+}
+
+/** Averages neighbouring readings to at most MOST_VALUES values. */
+function takeValues(view: BinnedView, task: QuickTask, bench: QuickBench): number {
+  const from = firstAtOrAfter(view.timesS, task.startS);
+  const to = firstAtOrAfter(view.timesS, task.endS);
+  const each = Math.max(1, Math.ceil((to - from) / MOST_VALUES));
+  let count = 0;
+  for (let i = from; i + each <= to; i += each) {
     let timeS = 0;
     let tempC = 0;
-    for (let k = i; k < i + stride; k++) {
+    for (let k = i; k < i + each; k++) {
       timeS += view.timesS[k]!;
       tempC += view.tempsC[k]!;
     }
-    timeS /= stride;
-    tempC /= stride;
-    curvesAt(shape, timeS - switchS, row);
-    row[CURVES] = solution ? -slopeAt(shape, timeS - switchS, solution) : 0;
-    for (let a = 0; a < UNKNOWNS; a++) {
-      const scaled = row[a]! * stride;
-      for (let b = 0; b <= a; b++) matrix[a * UNKNOWNS + b]! += scaled * row[b]!;
-      right[a]! += scaled * tempC;
+    bench.timesS[count] = timeS / each;
+    bench.tempsC[count] = tempC / each;
+    count++;
+  }
+  bench.each = each;
+  bench.count = count;
+  return count;
+}
+
+/** The design's columns; in the first round, with no coefficients yet, the switch stays where it is. */
+function fillColumns(
+  { count, timesS, columns }: QuickBench,
+  { fromS, stepS, table, rows }: TurnShape,
+  switchS: number,
+  solution: Float64Array | null,
+): void {
+  const [level, a1, a2, b1, b2, moves] = columns as Columns;
+  const [, s1 = 0, s2 = 0, s3 = 0, s4 = 0] = solution ?? [];
+  for (let i = 0; i < count; i++) {
+    const place = Math.max(0, Math.min(rows - 2, (timesS[i]! - switchS - fromS) / stepS));
+    const row = Math.floor(place);
+    const share = place - row;
+    const at = row * CURVES;
+    const d1 = table[at + CURVES + 1]! - table[at + 1]!;
+    const d2 = table[at + CURVES + 2]! - table[at + 2]!;
+    const d3 = table[at + CURVES + 3]! - table[at + 3]!;
+    const d4 = table[at + CURVES + 4]! - table[at + 4]!;
+    level[i] = 1;
+    a1[i] = table[at + 1]! + share * d1;
+    a2[i] = table[at + 2]! + share * d2;
+    b1[i] = table[at + 3]! + share * d3;
+    b2[i] = table[at + 4]! + share * d4;
+    moves[i] = -(s1 * d1 + s2 * d2 + s3 * d3 + s4 * d4) / stepS;
+  }
+}
+
+type Columns = [Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array];
+
+function normals({ count, each, tempsC, columns }: QuickBench, noiseK: number) {
+  const matrix = new Float64Array(UNKNOWNS * UNKNOWNS);
+  const right = new Float64Array(UNKNOWNS);
+  const weight = each / (noiseK * noiseK);
+  for (let a = 0; a < UNKNOWNS; a++) {
+    const one = columns[a]!;
+    for (let b = 0; b <= a; b++) {
+      matrix[a * UNKNOWNS + b] = weight * dot(one, columns[b]!, count);
     }
+    right[a] = weight * dot(one, tempsC, count);
   }
   return { matrix, right };
+}
+
+function dot(one: Float64Array, two: Float64Array, count: number): number {
+  let sum = 0;
+  for (let i = 0; i < count; i++) sum += one[i]! * two[i]!;
+  return sum;
 }
 
 /** Ramps are small; a coefficient that the readings leave open stays finite. */
