@@ -78,6 +78,7 @@ export function parseFlags(args: string[]): AnalyseFlags {
     probe: {
       accuracyK: read.step('probe-accuracy', 0),
       calibrationUK: 0,
+      correction: null,
       responseS: read.number('probe-tau', null),
     },
     roomC: values.room === undefined ? null : read.temp('room', 0),

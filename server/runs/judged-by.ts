@@ -43,10 +43,11 @@ export function ratingOf(judged: JudgedBy | null): Rating | null {
 
 /** How good the probe is, in K and s; an unnamed probe claims nothing. */
 export function probeOf(probe: StoredProbe | null): Probe {
-  if (!probe) return { accuracyK: 0, calibrationUK: 0, responseS: null };
+  if (!probe) return { accuracyK: 0, calibrationUK: 0, correction: null, responseS: null };
   return {
     accuracyK: toKelvinStep(probe.accuracy, probe.unit),
     calibrationUK: toKelvinStep(probe.calibrationU ?? 0, probe.unit),
+    correction: null,
     responseS: probe.responseS,
   };
 }

@@ -38,9 +38,9 @@ export function toPoint(
   const point: PointToJudge = {
     kind: kind === 'peak' ? 'cut-out' : 'reset',
     tempC,
-    uTotalK: totalUncertainty(uK, probe),
+    uTotalK: totalUncertainty(uK, probe, tempC),
     switchTempC: switched?.tempC ?? null,
-    switchUTotalK: switched && totalUncertainty(switched.uK, probe),
+    switchUTotalK: switched && totalUncertainty(switched.uK, probe, switched.tempC),
   };
   const by = judgeable ? rating : null;
   return {

@@ -1,4 +1,5 @@
 import type { Point } from './analysis.ts';
+import { correctSeries } from './correct-series.ts';
 import { toPoint } from './find-points.ts';
 import { prepareRecord } from './gather-facts.ts';
 import type { Probe } from './rating.ts';
@@ -21,7 +22,7 @@ export type TurnsOnly = {
  * @throws {RangeError} the series is not one (see assertSeries)
  */
 export function findTurnsOnly(series: Series, swingK: number, probe: Probe): TurnsOnly {
-  const record = prepareRecord(series, swingK);
+  const record = prepareRecord(correctSeries(series, probe), swingK);
   const points = record.extremes
     .filter(({ turnedBy }) => turnedBy === 'machine')
     .map((extreme) => toPoint(extreme, false, { rating: null, probe }, false));

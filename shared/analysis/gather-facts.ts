@@ -1,6 +1,7 @@
 import type { AnalysisInput } from './analysis.ts';
 import { binRecord } from './bin-record.ts';
 import { classifyTurns } from './classify-turns.ts';
+import { correctSeries } from './correct-series.ts';
 import { despike } from './despike.ts';
 import { estimateNoise } from './estimate-noise.ts';
 import { findCycles } from './find-cycles.ts';
@@ -35,7 +36,7 @@ export function prepareRecord(raw: Series, askedSwingK: number) {
  * @throws {RangeError} the series is not one (see assertSeries)
  */
 export function gatherFacts(raw: Series, input: AnalysisInput): RunFacts {
-  const { view, ...record } = prepareRecord(raw, input.swingK);
+  const { view, ...record } = prepareRecord(correctSeries(raw, input.probe), input.swingK);
   const { series, gaps, spacingS, noiseK } = record;
   const { rating } = input;
   const extremes = classifyTurns(record.extremes, input.marks, rating, spacingS);

@@ -1,15 +1,20 @@
 import type { Call } from './analysis.ts';
+import { correctionErrorAt } from './correct-series.ts';
 import type { Probe, Rating } from './rating.ts';
 import { normalProbability, probabilityBetween } from './statistics/normal-probability.ts';
 
 /**
- * Expanded uncertainty (k = 2) of a point with the probe's part: accuracy ±a rectangular, so a/√3, and the
- * expanded uncertainty of its calibration (JCGM 100:2008, 4.3.7 and 5.1.2).
+ * Expanded uncertainty (k = 2) of a point with the probe's part: accuracy ±a rectangular, so a/√3, the
+ * expanded uncertainty of its calibration, and that of the correction there (JCGM 100:2008, 4.3.7, 5.1.2, H.3.4).
  *
  * @param uK expanded uncertainty from noise, sampling, rounding and fit, K
+ * @param tempC where on the scale the point lies, °C
  */
-export function totalUncertainty(uK: number, { accuracyK, calibrationUK }: Probe): number {
-  return 2 * Math.sqrt((uK / 2) ** 2 + (accuracyK / Math.sqrt(3)) ** 2 + (calibrationUK / 2) ** 2);
+export function totalUncertainty(uK: number, probe: Probe, tempC: number): number {
+  const { accuracyK, calibrationUK, correction } = probe;
+  const correctionErrorK = correction ? correctionErrorAt(correction, tempC) : 0;
+  const accuracyErrorK = accuracyK / Math.sqrt(3);
+  return 2 * Math.hypot(uK / 2, accuracyErrorK, calibrationUK / 2, correctionErrorK);
 }
 
 /** What a point is judged by. */

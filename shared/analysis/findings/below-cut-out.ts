@@ -66,6 +66,6 @@ function fitFrom(rise: RunLeg, facts: RunFacts, share: number) {
   if (first < 0 || last - first < 5) return null;
   const fit = fitResponse(timesS.slice(first, last + 1), tempsC.slice(first, last + 1));
   if (!fit) return null;
-  const ownUK = 2 * fit.asymptoteErrorK;
-  return { asymptoteC: fit.asymptoteC, uK: Math.hypot(ownUK, totalU(facts, { uK: 0 })) };
+  const { asymptoteC } = fit;
+  return { asymptoteC, uK: totalU(facts, { uK: 2 * fit.asymptoteErrorK, tempC: asymptoteC }) };
 }

@@ -32,11 +32,12 @@ export function judgedPoints(facts: RunFacts, kind: Point['kind']): JudgedPoints
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const shares = weights.map((weight) => weight / total);
   const meanUK = Math.sqrt(points.reduce((sum, { uK }, i) => sum + (shares[i]! * uK) ** 2, 0));
+  const meanC = points.reduce((sum, { tempC }, i) => sum + shares[i]! * tempC, 0);
   return {
     points,
-    meanC: points.reduce((sum, { tempC }, i) => sum + shares[i]! * tempC, 0),
+    meanC,
     meanUK,
-    meanUTotalK: totalUncertainty(meanUK, facts.input.probe),
+    meanUTotalK: totalUncertainty(meanUK, facts.input.probe, meanC),
   };
 }
 

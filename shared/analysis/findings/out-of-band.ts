@@ -72,7 +72,7 @@ function bySwitches(
   const { lowC, highC } = bandOf(kind, rating);
   const meanC = mean(tempsC);
   // A switch instant is no better known than the turn that it leads to.
-  const meanUK = totalUncertainty(2 * judged.meanUK, facts.input.probe);
+  const meanUK = totalUncertainty(2 * judged.meanUK, facts.input.probe, meanC);
   const allowanceK = kind === 'cut-out' ? rating.overshootK : rating.undershootK;
   if (meanC - meanUK > highC + allowanceK) return { meanC, meanUK, side: 'high', by: 'switches' };
   if (meanC + meanUK < lowC - allowanceK) return { meanC, meanUK, side: 'low', by: 'switches' };

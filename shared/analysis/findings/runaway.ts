@@ -35,7 +35,7 @@ function runsAway(leg: RunLeg, upThere: Extreme[], facts: RunFacts, rating: Rati
   if (leg.kind !== 'heating') return false;
   const { highEndC } = bandOf('cut-out', rating);
   if (to.tempC >= rating.highLimitC) return true;
-  const uK = Math.min(totalU(facts, to), totalU(facts, { uK: 2 * facts.noiseK }));
+  const uK = Math.min(totalU(facts, to), totalU(facts, { ...to, uK: 2 * facts.noiseK }));
   if (to.tempC - uK <= highEndC && !staysAbove(leg, facts, highEndC)) return false;
   if (to.turnedBy === 'machine') return upThere.every((own) => own === to) && !comesBack(facts, to);
   const highestC = upThere.reduce((high, { tempC }) => Math.max(high, tempC), -Infinity);
@@ -46,7 +46,7 @@ function runsAway(leg: RunLeg, upThere: Extreme[], facts: RunFacts, rating: Rati
 function staysAbove(leg: RunLeg, facts: RunFacts, highEndC: number): boolean {
   const { timesS, tempsC } = facts.series;
   if (facts.spacingS < COARSE_S) return false;
-  const sureC = highEndC + totalU(facts, { uK: facts.roundingK });
+  const sureC = highEndC + totalU(facts, { uK: facts.roundingK, tempC: highEndC });
   const { fromS, toS } = spanOf(leg);
   let above = 0;
   for (let i = firstAtOrAfter(timesS, fromS); i < timesS.length && timesS[i]! <= toS; i++) {

@@ -11,8 +11,8 @@ const TAPPED_LATE_S = 3;
 const HIDING_SHARE = 0.2;
 
 /** Expanded uncertainty of an extreme with the probe's part, K. */
-export function totalU({ input }: RunFacts, { uK }: Pick<Extreme, 'uK'>): number {
-  return totalUncertainty(uK, input.probe);
+export function totalU({ input }: RunFacts, { uK, tempC }: Pick<Extreme, 'uK' | 'tempC'>): number {
+  return totalUncertainty(uK, input.probe, tempC);
 }
 
 /**

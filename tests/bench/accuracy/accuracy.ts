@@ -61,7 +61,12 @@ export function inputOf(plan: Plan, run: ModelRun): AnalysisInput {
   if (run.heatOffS !== null) marks.push({ timeS: run.heatOffS, kind: 'heat-off' });
   return {
     rating: DEFAULT_RATING,
-    probe: { accuracyK: ACCURACY_F / 1.8, calibrationUK: 0, responseS: plan.machine.probeLagS },
+    probe: {
+      accuracyK: ACCURACY_F / 1.8,
+      calibrationUK: 0,
+      correction: null,
+      responseS: plan.machine.probeLagS,
+    },
     marks,
     load: plan.load,
     roomC: plan.machine.roomC,

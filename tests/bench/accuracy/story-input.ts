@@ -25,6 +25,7 @@ export function inputOf(
     probe: {
       accuracyK: toKelvinStep(story.probe.accuracyF, 'F'),
       calibrationUK: 0,
+      correction: null,
       responseS: story.probe.responseS,
     },
     marks,

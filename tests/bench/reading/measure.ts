@@ -18,7 +18,7 @@ function read(bytes: Uint8Array): LogReading {
 function judge({ series }: LogReading): Analysis {
   return analyseRun(series, {
     rating: DEFAULT_RATING,
-    probe: { accuracyK: 0.5, calibrationUK: 0, responseS: null },
+    probe: { accuracyK: 0.5, calibrationUK: 0, correction: null, responseS: null },
     marks: [],
     load: 'empty',
     roomC: null,
@@ -43,7 +43,7 @@ function median(values: number[]): number {
 }
 
 function turns({ series }: LogReading): number {
-  const probe = { accuracyK: 0.5, calibrationUK: 0, responseS: null };
+  const probe = { accuracyK: 0.5, calibrationUK: 0, correction: null, responseS: null };
   return findTurnsOnly(series, 4 / 1.8, probe).cutOuts.length;
 }
 

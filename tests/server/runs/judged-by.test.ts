@@ -49,5 +49,10 @@ test('a part that never closes again judges no cycles', () => {
 });
 
 test('a probe that nobody named claims nothing', () => {
-  expect(probeOf(null)).toEqual({ accuracyK: 0, calibrationUK: 0, responseS: null });
+  expect(probeOf(null)).toEqual({
+    accuracyK: 0,
+    calibrationUK: 0,
+    correction: null,
+    responseS: null,
+  });
 });

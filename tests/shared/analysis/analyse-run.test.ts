@@ -155,7 +155,7 @@ describe('an analysis', () => {
   });
 
   test('says why nothing is called', () => {
-    const slow = { accuracyK: 0, calibrationUK: 0, responseS: 60 };
+    const slow = { accuracyK: 0, calibrationUK: 0, correction: null, responseS: 60 };
 
     expect(analyseRun(series, plainInput({ rating: null })).notJudged).toBe('no-rating');
     expect(analyseRun(series, plainInput({ probe: slow })).notJudged).toBe('probe-too-slow');

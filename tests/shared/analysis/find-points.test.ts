@@ -10,7 +10,7 @@ import { toCelsius } from '#shared/units.ts';
 
 const INPUT: AnalysisInput = {
   rating: DEFAULT_RATING,
-  probe: { accuracyK: 0, calibrationUK: 0, responseS: null },
+  probe: { accuracyK: 0, calibrationUK: 0, correction: null, responseS: null },
   marks: [],
   load: null,
   roomC: null,

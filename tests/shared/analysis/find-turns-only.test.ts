@@ -2,7 +2,7 @@ import { expect, test } from 'vitest';
 import { findTurnsOnly } from '#shared/analysis/find-turns-only.ts';
 import { buildThermostatRun } from '#tests/support/build-series.ts';
 
-const PROBE = { accuracyK: 0.5, calibrationUK: 0, responseS: null };
+const PROBE = { accuracyK: 0.5, calibrationUK: 0, correction: null, responseS: null };
 
 test('gives every peak and valley, the first included, and calls none', () => {
   const { series, turns } = buildThermostatRun({ noiseK: 0.1 });

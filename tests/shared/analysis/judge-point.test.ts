@@ -22,19 +22,38 @@ function point(kind: PointToJudge['kind'], tempF: number, uF: number): PointToJu
   };
 }
 
+/** JCGM 100:2008, H.3.3: the thermometer of table H.6. */
+const THERMOMETER = {
+  aboutC: 20,
+  interceptK: -0.1712,
+  slope: 0.00218,
+  interceptErrorK: 0.002878,
+  slopeError: 0.000668,
+  correlation: -0.93,
+};
+
 describe('totalUncertainty', () => {
   test('takes an accuracy of ±a as rectangular: a/√3', () => {
     // JCGM 100:2008, 4.3.7: half-width a gives u = a/√3; twice that, expanded.
-    const probe = { accuracyK: 1, calibrationUK: 0, responseS: null };
+    const probe = { accuracyK: 1, calibrationUK: 0, correction: null, responseS: null };
 
-    expect(totalUncertainty(0, probe)).toBeCloseTo(2 / Math.sqrt(3), 12);
+    expect(totalUncertainty(0, probe, 70)).toBeCloseTo(2 / Math.sqrt(3), 12);
   });
 
   test('adds the parts by their squares', () => {
     // JCGM 100:2008, 5.1.2. Standard parts 0.3, 0.4 and 1.2: root 1.3, expanded 2.6.
-    const probe = { accuracyK: 0.4 * Math.sqrt(3), calibrationUK: 2.4, responseS: null };
+    const accuracyK = 0.4 * Math.sqrt(3);
+    const probe = { accuracyK, calibrationUK: 2.4, correction: null, responseS: null };
 
-    expect(totalUncertainty(0.6, probe)).toBeCloseTo(2.6, 12);
+    expect(totalUncertainty(0.6, probe, 70)).toBeCloseTo(2.6, 12);
+  });
+
+  test('adds what the correction does not know at that temperature', () => {
+    // JCGM 100:2008, H.3.4: u(b(30 °C)) = 0.0041 °C; alone, expanded, 0.0083.
+    const probe = { accuracyK: 0, calibrationUK: 0, correction: THERMOMETER, responseS: null };
+
+    expect(totalUncertainty(0, probe, 30)).toBeCloseTo(2 * 0.0041, 3);
+    expect(totalUncertainty(0, probe, 20)).toBeCloseTo(2 * 0.00288, 4);
   });
 });
 

@@ -5,7 +5,7 @@ import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 export function plainInput(changes: Partial<AnalysisInput> = {}): AnalysisInput {
   return {
     rating: DEFAULT_RATING,
-    probe: { accuracyK: 0, calibrationUK: 0, responseS: null },
+    probe: { accuracyK: 0, calibrationUK: 0, correction: null, responseS: null },
     marks: [],
     load: null,
     roomC: null,

@@ -7,7 +7,7 @@ import type { Series } from '#shared/analysis/series.ts';
 
 // Records of heated things measured by others; not part of the project, so skipped where they are absent.
 const FOLDER = resolve('../shared/data');
-const PROBE = { accuracyK: 0, calibrationUK: 0, responseS: null };
+const PROBE = { accuracyK: 0, calibrationUK: 0, correction: null, responseS: null };
 
 function lines(file: string): string[] {
   return readFileSync(`${FOLDER}/${file}`, 'utf8').split(/\r?\n/).filter(Boolean);

@@ -51,7 +51,7 @@ export function readRun(stretches: Stretch[], { everyS = 12, stepF = 1, fromF = 
 export function judge(series: Series, told: Partial<AnalysisInput> = {}) {
   return analyseRun(series, {
     rating: DEFAULT_RATING,
-    probe: { accuracyK: 0, calibrationUK: 0, responseS: null },
+    probe: { accuracyK: 0, calibrationUK: 0, correction: null, responseS: null },
     marks: [],
     load: 'empty',
     roomC: toCelsius(72, 'F'),

@@ -149,7 +149,7 @@ describe('a thermostat at another temperature', () => {
 
   test('a probe good to 10 °F cannot say opens-high of 176', () => {
     const series = readRun([...cycles([176, 176, 176, 176]), heat(140, 30)], probe);
-    const coarse = { accuracyK: kelvin(10), calibrationUK: 0, responseS: null };
+    const coarse = { accuracyK: kelvin(10), calibrationUK: 0, correction: null, responseS: null };
 
     expect(codesOf(judge(series, { probe: coarse }))).not.toContain('opens-high');
   });
@@ -202,7 +202,7 @@ describe('without a rating', () => {
 });
 
 test('a probe too slow for the cycles is not judged, but a runaway on it is still one', () => {
-  const slow = { accuracyK: 0, calibrationUK: 0, responseS: 60 };
+  const slow = { accuracyK: 0, calibrationUK: 0, correction: null, responseS: 60 };
   const cycling = judge(readRun([...cycles([150, 150, 150, 150]), heat(140, 30)], probe), {
     probe: slow,
   });
