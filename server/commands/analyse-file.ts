@@ -4,7 +4,7 @@ import { findTurnsOnly } from '#shared/analysis/find-turns-only.ts';
 import type { Mark } from '#shared/analysis/series.ts';
 import { toContract, type Contract } from '#shared/analysis/to-contract.ts';
 import type { LogReading, ReadProblem, ReadQuestion } from '#shared/reading/log-reading.ts';
-import { problem } from '#shared/reading/problem-words.ts';
+import { problem } from '#shared/reading/words/problem-words.ts';
 import { roomOf } from '#shared/reading/room-of.ts';
 import { readLog } from '#shared/reading/read-log.ts';
 import { fromCelsius, type DisplayUnit } from '#shared/units.ts';

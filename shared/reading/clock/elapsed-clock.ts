@@ -2,7 +2,7 @@ import { parseNumber } from '../cells/parse-number.ts';
 import type { SampleColumn } from '../layout/find-table.ts';
 import type { Clock } from '../layout/layout.ts';
 import type { ReadWarning } from '../log-reading.ts';
-import { warning } from '../problem-words.ts';
+import { warning } from '../words/warning-words.ts';
 import type { ClockInput, ClockResult } from './choose-clock.ts';
 import { TICKS_PER_DAY, TICKS_PER_S } from './parse-stamp.ts';
 

@@ -1,7 +1,7 @@
 import type { Decimal } from '../cells/parse-number.ts';
 import { plain } from '../cells/parse-number.ts';
 import type { Answers } from '../log-reading.ts';
-import type { QuestionDraft } from '../question-draft.ts';
+import type { QuestionDraft } from '../outcome/question-draft.ts';
 import type { Delimiter } from '../text/split-cells.ts';
 import type { SampleColumn } from './find-table.ts';
 

@@ -1,7 +1,8 @@
 import type { ReadProblem } from '../log-reading.ts';
 import type { Layout } from '../layout/layout.ts';
 import { roleOfName } from '../layout/column-roles.ts';
-import { problem, SKIP_WORDS } from '../problem-words.ts';
+import { problem } from '../words/problem-words.ts';
+import { SKIP_WORDS } from '../words/skip-words.ts';
 import { splitCells } from '../text/split-cells.ts';
 import { lineEnd, pastLineEnd } from '../text/split-lines.ts';
 import type { LogText } from '../text/decode-text.ts';

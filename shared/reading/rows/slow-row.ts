@@ -8,7 +8,7 @@ import {
   fractionTicks,
 } from '../clock/parse-stamp.ts';
 import type { Layout } from '../layout/layout.ts';
-import { SKIP_WORDS } from '../problem-words.ts';
+import { SKIP_WORDS } from '../words/skip-words.ts';
 import { fromCelsius, toCelsius, type TemperatureUnit } from '../../units.ts';
 import { numberTicks, type RowPlan } from './row-plan.ts';
 

@@ -1,6 +1,6 @@
 import type { LogColumn } from '../log-reading.ts';
 import { exhaustRank } from '../layout/column-roles.ts';
-import type { QuestionDraft } from '../question-draft.ts';
+import type { QuestionDraft } from '../outcome/question-draft.ts';
 import type { RowStore } from '../rows/row-store.ts';
 import { toCelsius, toKelvinStep } from '../../units.ts';
 

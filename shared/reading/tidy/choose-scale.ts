@@ -1,5 +1,5 @@
 import { fromCelsius, toCelsius, type TemperatureUnit } from '../../units.ts';
-import type { QuestionDraft } from '../question-draft.ts';
+import type { QuestionDraft } from '../outcome/question-draft.ts';
 
 /** What can be read: −60 to 1000 °F, the span that any probe in an exhaust can be asked for. */
 const COLDEST_F = -60;

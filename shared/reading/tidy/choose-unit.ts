@@ -1,5 +1,5 @@
 import type { TemperatureUnit } from '../../units.ts';
-import type { QuestionDraft } from '../question-draft.ts';
+import type { QuestionDraft } from '../outcome/question-draft.ts';
 
 export type UnitRange = { lowest: number; highest: number; median: number };
 

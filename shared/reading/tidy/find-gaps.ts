@@ -1,6 +1,6 @@
 import { medianStepS } from '../find-parts.ts';
 import type { ReadWarning } from '../log-reading.ts';
-import { warning } from '../problem-words.ts';
+import { warning } from '../words/warning-words.ts';
 
 /** A pause of more than this many usual steps is a gap ... */
 const GAP_STEPS = 5;

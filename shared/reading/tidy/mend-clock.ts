@@ -1,8 +1,8 @@
 import { TICKS_PER_DAY, TICKS_PER_S } from '../clock/parse-stamp.ts';
 import type { Clock } from '../layout/layout.ts';
 import type { Answers, ReadWarning } from '../log-reading.ts';
-import { warning } from '../problem-words.ts';
-import type { QuestionDraft } from '../question-draft.ts';
+import { warning } from '../words/warning-words.ts';
+import type { QuestionDraft } from '../outcome/question-draft.ts';
 import type { RowStore } from '../rows/row-store.ts';
 import { medianStepTicks } from './arrange-rows.ts';
 

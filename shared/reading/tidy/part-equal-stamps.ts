@@ -1,6 +1,7 @@
 import { TICKS_PER_S } from '../clock/parse-stamp.ts';
 import type { ReadWarning } from '../log-reading.ts';
-import { SKIP_WORDS, warning } from '../problem-words.ts';
+import { SKIP_WORDS } from '../words/skip-words.ts';
+import { warning } from '../words/warning-words.ts';
 import type { RowStore } from '../rows/row-store.ts';
 import { keepRows } from './arrange-rows.ts';
 

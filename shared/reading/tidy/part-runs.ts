@@ -1,8 +1,9 @@
 import { TICKS_PER_S } from '../clock/parse-stamp.ts';
 import type { Clock } from '../layout/layout.ts';
 import type { Answers, ReadWarning } from '../log-reading.ts';
-import { SKIP_WORDS, warning } from '../problem-words.ts';
-import type { QuestionDraft } from '../question-draft.ts';
+import { SKIP_WORDS } from '../words/skip-words.ts';
+import { warning } from '../words/warning-words.ts';
+import type { QuestionDraft } from '../outcome/question-draft.ts';
 import type { RowStore } from '../rows/row-store.ts';
 import { keepRows, medianStepTicks } from './arrange-rows.ts';
 

@@ -1,12 +1,5 @@
-import type { ReadProblem, ReadWarning } from './log-reading.ts';
-
-/** Where a problem is and what stands there. `say` is a word or number that its message needs. */
-export type Place = {
-  row?: number | null;
-  column?: string | null;
-  value?: string | null;
-  say?: string | number;
-};
+import type { ReadProblem } from '../log-reading.ts';
+import type { Place } from './place.ts';
 
 type Words = { message: (at: Place) => string; hint: string };
 
@@ -121,73 +114,4 @@ export function problem(code: ProblemCode, at: Place = {}): ReadProblem {
     value: at.value ?? null,
     hint: words.hint,
   };
-}
-
-/** What was put right or is worth knowing, in words. */
-export const WARNING_WORDS = {
-  'utf-16-guessed': () => 'Read as UTF-16: the file has no mark that says so.',
-  'nul-tail': ({ say }) => `${say} zero bytes at the end were left out.`,
-  'truncated-line': ({ row }) => `The last line, row ${row}, is cut off and was set aside.`,
-  'no-last-line-end': ({ row }) => `Row ${row}, the last, has no line end: check that it is whole.`,
-  reversed: () => 'The file runs from newest to oldest; it was turned round.',
-  reordered: ({ say }) => `${say} rows stood out of order and were put in order of time.`,
-  'duplicates-dropped': ({ say, row }) =>
-    `${say} repeated rows were left out, the first in row ${row}.`,
-  'spread-in-stamp': ({ say }) => `Rows with the same stamp were spread evenly within ${say}.`,
-  midnight: ({ row }) => `The clock passes midnight in row ${row}.`,
-  'clock-change': ({ row, say }) =>
-    `The clock is set ${say} in row ${row}; time runs on without the step.`,
-  'clock-reset': ({ row }) =>
-    `The clock was set anew in row ${row}; time runs on from the row before.`,
-  'clock-assumed': ({ say }) => `Times without a unit were read as ${say}.`,
-  'date-order-not-needed': () =>
-    'Day and month could be either way round; the times of the run are the same in both.',
-  'sentinel-excluded': ({ row, value, say }) =>
-    `${value} stands for "no reading" and was left out ${say === 1 ? 'once' : `${say} times`}, first in row ${row}.`,
-  'open-sensor': ({ row, say }) =>
-    `${say === 1 ? '1 row has' : `${say} rows have`} no reading, the first in row ${row}.`,
-  'rows-set-aside': ({ row, say }) =>
-    `${say === 1 ? '1 row' : `${say} rows`} could not be read, the first is row ${row}.`,
-  gap: ({ row, say }) => `Nothing was recorded for ${say} before row ${row}.`,
-  'more-gaps': ({ say }) => `${say} more gaps.`,
-  'header-repeated': ({ row, say }) =>
-    say === 1
-      ? `The header comes again once, in row ${row}.`
-      : `The header comes again ${say} times, first in row ${row}.`,
-  'units-converted': ({ row, value }) =>
-    `Readings in another unit were converted to °${value}, the first in row ${row}.`,
-  'channels-disagree': ({ row, say }) => `${say} should agree and do not, first in row ${row}.`,
-  'no-change': ({ say }) => `${say} does not change in the whole record.`,
-  'channel-chosen': ({ column, say }) => `${column} was taken as the run; there is also ${say}.`,
-  'interval-used': ({ say }) => `Times were counted from one reading every ${say}.`,
-  scaled: ({ say }) => `The readings were taken as ${say}.`,
-  'unit-from-letter': ({ column }) =>
-    `The degree sign of ${column} is damaged; its letter was used.`,
-} satisfies Record<string, (at: Place) => string>;
-
-export type WarningCode = keyof typeof WARNING_WORDS;
-
-export function warning(code: WarningCode, at: Place = {}): ReadWarning {
-  const words: (at: Place) => string = WARNING_WORDS[code];
-  return { code, row: at.row ?? null, message: words(at) };
-}
-
-/** Why one row was set aside. */
-export const SKIP_WORDS = {
-  notANumber: (value: string) => `not a number: ${shown(value)}`,
-  noReading: (value: string) => (value === '' ? 'no reading' : `no reading: ${shown(value)}`),
-  notATime: (value: string) => `not a time: ${shown(value)}`,
-  noTime: () => 'no time',
-  cellCount: (have: number, want: number) => `${have} cells where ${want} are expected`,
-  unclosedQuote: () => 'a quote is never closed',
-  headerAgain: () => 'the header again',
-  emptyRow: () => 'empty row',
-  cutOff: () => 'the last line is cut off',
-  repeated: () => 'repeats an earlier row',
-  sentinel: (value: string) => `stands for "no reading": ${shown(value)}`,
-  otherRun: () => 'belongs to another run',
-};
-
-function shown(value: string): string {
-  return value.length > 40 ? `${value.slice(0, 40)}…` : value;
 }

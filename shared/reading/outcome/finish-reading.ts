@@ -1,19 +1,21 @@
-import { toCelsius, toKelvinStep, type TemperatureUnit } from '../units.ts';
+import { toCelsius, toKelvinStep, type TemperatureUnit } from '../../units.ts';
 import type {
   LogChannel,
   LogColumn,
   ReadOptions,
   ReadProblem,
   ReadWarning,
-} from './log-reading.ts';
-import { problem, SKIP_WORDS, warning } from './problem-words.ts';
+} from '../log-reading.ts';
+import { problem } from '../words/problem-words.ts';
+import { SKIP_WORDS } from '../words/skip-words.ts';
+import { warning } from '../words/warning-words.ts';
 import type { QuestionDraft } from './question-draft.ts';
-import { RowList, type RowStore } from './rows/row-store.ts';
-import { keepRows } from './tidy/arrange-rows.ts';
-import { chooseChannel } from './tidy/choose-channel.ts';
-import { askScale, isPlausible, scaleDivisor } from './tidy/choose-scale.ts';
-import { askUnit, rangeOf } from './tidy/choose-unit.ts';
-import { findSentinels } from './tidy/drop-sentinels.ts';
+import { RowList, type RowStore } from '../rows/row-store.ts';
+import { keepRows } from '../tidy/arrange-rows.ts';
+import { chooseChannel } from '../tidy/choose-channel.ts';
+import { askScale, isPlausible, scaleDivisor } from '../tidy/choose-scale.ts';
+import { askUnit, rangeOf } from '../tidy/choose-unit.ts';
+import { findSentinels } from '../tidy/drop-sentinels.ts';
 
 /** 0.2 °F: two roundings to a tenth. */
 const TWIN_K = toKelvinStep(0.2, 'F');

@@ -1,10 +1,10 @@
-import { TICKS_PER_S } from './clock/parse-stamp.ts';
-import type { Layout } from './layout/layout.ts';
-import type { SampleLines } from './layout/sample-lines.ts';
-import type { PreviewRow } from './log-reading.ts';
-import { planRow } from './rows/row-plan.ts';
-import { readSlowRow } from './rows/slow-row.ts';
-import { splitCells } from './text/split-cells.ts';
+import { TICKS_PER_S } from '../clock/parse-stamp.ts';
+import type { Layout } from '../layout/layout.ts';
+import type { SampleLines } from '../layout/sample-lines.ts';
+import type { PreviewRow } from '../log-reading.ts';
+import { planRow } from '../rows/row-plan.ts';
+import { readSlowRow } from '../rows/slow-row.ts';
+import { splitCells } from '../text/split-cells.ts';
 
 const SHOWN = 12;
 

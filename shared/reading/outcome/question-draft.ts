@@ -1,4 +1,4 @@
-import type { QuestionSubject } from './log-reading.ts';
+import type { QuestionSubject } from '../log-reading.ts';
 
 /** A question before its previews are made; the proposal first. */
 export type QuestionDraft = {
