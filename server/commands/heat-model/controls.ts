@@ -5,8 +5,10 @@ import type { Nodes } from './simulate-run.ts';
 /** A change of the heater's power: which way, and what did it. */
 export type Switch = {
   timeS: number;
+  /** From then on, and by how much more than before, W. */
   powerW: number;
-  cause: 'disc' | 'limit' | 'person' | 'one-shot' | 'ground';
+  changeW: number;
+  cause: 'disc' | 'limit' | 'person' | 'one-shot';
 };
 
 /** The parts that decide whether the heater has power, with their faults. */
@@ -22,6 +24,7 @@ export function createControls(machine: Machine, faults: Faults, random: Random)
   let cutAtS = -Infinity;
   let litAtS = machine.relightS;
   let lastW = 0;
+  let openWas = false;
 
   function nextOpening(opening: number): number {
     const lateK = faults.oneLate?.opening === opening ? faults.oneLate.byK : 0;
@@ -68,21 +71,25 @@ export function createControls(machine: Machine, faults: Faults, random: Random)
 
       const leaks = openings >= faults.groundedAfter ? faults.groundedW : 0;
       const fedW = Math.max(controlledW(timeS), leaks);
-      const nowW = lostForGood || off ? 0 : fedW;
+      const open = isDoorOpen(faults, timeS);
+      const nowW = lostForGood || off || open ? 0 : fedW;
       if (nowW !== lastW) {
-        const cause = off
-          ? 'person'
-          : lostForGood
-            ? 'one-shot'
-            : limitWas !== limitClosed
-              ? 'limit'
-              : 'disc';
-        switches.push({ timeS, powerW: nowW, cause });
+        const byPerson = off || open !== openWas;
+        const byLimit = limitWas !== limitClosed;
+        const cause = byPerson ? 'person' : lostForGood ? 'one-shot' : byLimit ? 'limit' : 'disc';
+        switches.push({ timeS, powerW: nowW, changeW: nowW - lastW, cause });
         lastW = nowW;
       }
+      openWas = open;
       return nowW;
     },
+    /** What the bias heater adds to the disc's surroundings, K: it has power while the disc is closed. */
+    biasK: () => (discClosed ? machine.biasK : 0),
   };
+}
+
+export function isDoorOpen({ doorOpen }: Faults, timeS: number): boolean {
+  return doorOpen.some(({ fromS, toS }) => timeS >= fromS && timeS < toS);
 }
 
 function nextState(closed: boolean, tempC: number, disc: Disc): boolean {

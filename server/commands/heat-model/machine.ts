@@ -27,6 +27,8 @@ export type Machine = {
   mixingS: number;
   /** First-order lag of the probe in moving air. */
   probeLagS: number;
+  /** How much a bias heater warms the disc while heat is on, K: it opens that much lower; 0 = none. */
+  biasK: number;
 };
 
 /** What is wrong. A sound machine has SOUND. */
@@ -51,6 +53,8 @@ export type Faults = {
   oneLate: { opening: number; byK: number } | null;
   /** Something one-shot opens at this time, whatever its temperature; Infinity = never. */
   opensForGoodS: number;
+  /** Spans in which the door stands open: no heat, and the motor with its blower stands still. */
+  doorOpen: { fromS: number; toS: number }[];
 };
 
 export const SOUND: Faults = {
@@ -64,6 +68,7 @@ export const SOUND: Faults = {
   scatterK: 0,
   oneLate: null,
   opensForGoodS: Infinity,
+  doorOpen: [],
 };
 
 export const ELECTRIC: Machine = {
@@ -83,6 +88,7 @@ export const ELECTRIC: Machine = {
   fuse: { opensC: 91.1, lagS: 40 },
   mixingS: 4,
   probeLagS: 3,
+  biasK: 0,
 };
 
 export const GAS: Machine = {
@@ -98,6 +104,8 @@ export type Watch = {
   forS: number;
   /** The probe reading at which heat is turned off by hand; Infinity = never. */
   heatOffAtC: number;
+  /** The time at which heat is turned off by hand whatever the reading; left out = never. */
+  heatOffAtS?: number;
   /** How long the record goes on after heat was turned off. */
   afterHeatOffS: number;
 };

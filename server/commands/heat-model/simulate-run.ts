@@ -1,6 +1,6 @@
 import type { Random } from './random.ts';
 import type { Faults, Machine, Watch } from './machine.ts';
-import { createControls, type Switch } from './controls.ts';
+import { createControls, isDoorOpen, type Switch } from './controls.ts';
 
 /** Step of the integration and of `probeC`, s. */
 export const STEP_S = 0.1;
@@ -11,6 +11,8 @@ const VAPOUR_J_PER_KG = 2.4e6;
 export type ModelRun = {
   /** The probe without noise, °C, one value each STEP_S from 0. */
   probeC: Float64Array;
+  /** The air at the outlet, where the probe is, °C. */
+  outletC: Float64Array;
   /** Every change of the heater's power with its cause. */
   switches: Switch[];
   /** When the disc snapped open. */
@@ -33,26 +35,34 @@ export function simulateRun(
   const nodes = coldNodes(machine);
   const steps = Math.round(watch.forS / STEP_S) + 1;
   const probeC = new Float64Array(steps);
+  const outletC = new Float64Array(steps);
   let end = steps;
   let heatOffS: number | null = null;
 
   for (let i = 0; i < end; i++) {
     const timeS = i * STEP_S;
     probeC[i] = nodes.probeC;
-    if (heatOffS === null && nodes.probeC >= watch.heatOffAtC) {
+    outletC[i] = nodes.outletC;
+    if (heatOffS === null && isTurnedOff(watch, timeS, nodes)) {
       heatOffS = timeS;
       end = Math.min(steps, i + 1 + Math.round(watch.afterHeatOffS / STEP_S));
       controls.turnOff();
     }
     const powerW = controls.powerW(timeS, nodes);
-    stepNodes(nodes, machine, { powerW, airShare: airShareAt(faults, timeS) });
+    const airShare = airShareAt(faults, timeS);
+    stepNodes(nodes, machine, { powerW, airShare, biasK: controls.biasK() });
   }
   return {
     probeC: probeC.slice(0, end),
+    outletC: outletC.slice(0, end),
     switches: controls.switches,
     clicksS: controls.clicksS,
     heatOffS,
   };
+}
+
+function isTurnedOff(watch: Watch, timeS: number, { probeC }: Nodes): boolean {
+  return probeC >= watch.heatOffAtC || timeS >= (watch.heatOffAtS ?? Infinity);
 }
 
 /** Temperatures of the nodes, °C, and the water left, kg. */
@@ -72,16 +82,20 @@ function coldNodes({ roomC, waterKg }: Machine): Nodes {
   return { ...cold, fuseC: roomC, probeC: roomC, waterKg };
 }
 
-function airShareAt({ airflow }: Faults, timeS: number): number {
+/** What still moves through a machine at rest: the draught of a warm drum. */
+const DRAUGHT_SHARE = 0.08;
+
+function airShareAt(faults: Faults, timeS: number): number {
+  if (isDoorOpen(faults, timeS)) return DRAUGHT_SHARE;
   let share = 1;
-  for (const step of airflow) if (timeS >= step.fromS) share = step.share;
+  for (const step of faults.airflow) if (timeS >= step.fromS) share = step.share;
   return share;
 }
 
 function stepNodes(
   nodes: Nodes,
   machine: Machine,
-  now: { powerW: number; airShare: number },
+  now: { powerW: number; airShare: number; biasK: number },
 ): void {
   const { roomC } = machine;
   const dryAirKgPerS = machine.airKgPerS * now.airShare;
@@ -106,7 +120,7 @@ function stepNodes(
   nodes.heaterC += ((now.powerW - toAirW) / machine.heaterJPerK) * STEP_S;
   nodes.drumC += (drumW / drumJPerK) * STEP_S;
   nodes.waterKg -= evaporatedKgPerS * STEP_S;
-  nodes.discC += ((outletC - nodes.discC) / machine.disc.lagS) * STEP_S;
+  nodes.discC += ((outletC + now.biasK - nodes.discC) / machine.disc.lagS) * STEP_S;
   // The limit sits on the housing: it feels the heated air and some glow of the coil.
   nodes.boxC +=
     ((0.85 * heatedC + 0.15 * nodes.heaterC - nodes.boxC) / machine.boxLimit.lagS) * STEP_S;

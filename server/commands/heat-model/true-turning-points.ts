@@ -20,8 +20,9 @@ export function trueTurningPoints(run: ModelRun, swingK: number): TrueTurn[] {
   const turns: TrueTurn[] = [];
   for (const { index, isPeak } of extremes(run.probeC, swingK)) {
     const timeS = index * STEP_S;
-    const before = run.switches.filter((change) => change.timeS <= timeS);
-    const cause = before.at(-1);
+    const cause = run.switches.findLast(
+      (change) => change.timeS <= timeS && change.changeW < 0 === isPeak,
+    );
     if (!cause || cause.cause === 'person' || cause.cause === 'one-shot') continue;
     if (!isPeak && turns.length === 0) continue;
     turns.push({
