@@ -3,7 +3,7 @@ import { analyseRun } from '#shared/analysis/analyse-run.ts';
 import type { Series } from '#shared/analysis/series.ts';
 import type { LogReading } from '#shared/reading/log-reading.ts';
 import type { TemperatureUnit } from '#shared/units.ts';
-import { judgingOfSpan, type Judging } from './judging.ts';
+import { judgingOfSpan, type Judging } from '#shared/judging/judging.ts';
 import { packSamples } from './pack-samples.ts';
 import { roomOf } from '#shared/reading/room-of.ts';
 import { sparkPoints } from './spark-points.ts';

@@ -3,7 +3,7 @@ import type { LogReading, ReadOutcome } from '#shared/reading/log-reading.ts';
 import { findParts } from '#shared/reading/find-parts.ts';
 import { traceColumns } from '#shared/reading/preview-trace.ts';
 import type { ReadPreview } from '#shared/schemas/uploads.ts';
-import { judgingOfSpan, type Judging } from './judging.ts';
+import { judgingOfSpan, type Judging } from '#shared/judging/judging.ts';
 import { roomOf } from '#shared/reading/room-of.ts';
 
 const PREVIEW_COLUMNS = 600;

@@ -6,7 +6,7 @@ import type { Person } from '#shared/schemas/people.ts';
 import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
 import type { Note, RunPage } from '#shared/schemas/runs.ts';
 import { createAnalysisRepository } from './analysis-repository.ts';
-import { probeOf } from './judged-by.ts';
+import { probeOf } from '#shared/judging/judged-by.ts';
 import { createNoteRepository } from './note-repository.ts';
 import type { Run } from './run.ts';
 import { createRunRepository } from './run-repository.ts';

@@ -7,7 +7,7 @@ import { createAudit } from '#server/people/audit-repository.ts';
 import { AppError, notFound } from '#server/errors.ts';
 import { createAnalysisRepository } from './analysis-repository.ts';
 import { moveDurably, type DataFolders } from './data-folders.ts';
-import { judgedByAnother, judgingFor, specifiedFor } from './judging-for.ts';
+import { judgedByAnother, judgingFor, specifiedFor } from '#shared/judging/judging-for.ts';
 import type { LogWorker } from './log-worker.ts';
 import type { Run, UploadedFile } from './run.ts';
 import { createRunRepository } from './run-repository.ts';

@@ -12,7 +12,7 @@ import {
   type Span,
 } from './import-log.ts';
 import { inspectLog, type Inspection } from './inspect-log.ts';
-import type { Judging } from './judging.ts';
+import type { Judging } from '#shared/judging/judging.ts';
 
 type LogFile = { path: string; choices: ReadingChoices };
 

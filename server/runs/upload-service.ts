@@ -6,7 +6,7 @@ import type { AcceptUpload } from '#shared/schemas/runs.ts';
 import type { ReadingChoices } from '#shared/schemas/uploads.ts';
 import { createHeavyWork } from './heavy-work.ts';
 import type { Inspection } from './inspect-log.ts';
-import { judgingAtFirst } from './judging-for.ts';
+import { judgingAtFirst } from '#shared/judging/judging-for.ts';
 import type { LogWorker } from './log-worker.ts';
 import type { ReceivedFile } from './receive-file.ts';
 import type { RunService } from './run-service.ts';

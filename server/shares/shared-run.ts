@@ -1,5 +1,5 @@
 import { notFound } from '#server/errors.ts';
-import { probeOf } from '#server/runs/judged-by.ts';
+import { probeOf } from '#shared/judging/judged-by.ts';
 import type { AnalysisRepository } from '#server/runs/analysis-repository.ts';
 import type { RunReadings } from '#server/runs/run-readings.ts';
 import type { RunService } from '#server/runs/run-service.ts';

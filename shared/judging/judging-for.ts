@@ -1,10 +1,9 @@
-import type { MachinePage } from '#shared/schemas/homes.ts';
-import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
-import type { JudgedBy, RunConditions } from '#shared/schemas/runs.ts';
-import { toCelsius } from '#shared/units.ts';
+import type { MachinePage } from '../schemas/homes.ts';
+import type { StoredProbe, StoredRating } from '../schemas/ratings.ts';
+import type { JudgedBy, RunConditions } from '../schemas/runs.ts';
+import { toCelsius } from '../units.ts';
 import { judgedBy, probeOf, ratingOf } from './judged-by.ts';
-import type { Judging } from './judging.ts';
-import type { Run } from './run.ts';
+import type { Judging, JudgingMark } from './judging.ts';
 
 /** What a machine is specified to have for a heat setting; null where nothing is. */
 export function specifiedFor(
@@ -29,7 +28,7 @@ type Said = {
   judged: JudgedBy | null;
   probe: StoredProbe | null;
   conditions: RunConditions;
-  marks: Run['marks'];
+  marks: JudgingMark[];
   minCycles: number;
 };
 

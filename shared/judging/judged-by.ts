@@ -1,7 +1,7 @@
-import type { Probe, Rating } from '#shared/analysis/rating.ts';
-import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
-import type { JudgedBy } from '#shared/schemas/runs.ts';
-import { toCelsius, toKelvinStep } from '#shared/units.ts';
+import type { Probe, Rating } from '../analysis/rating.ts';
+import type { StoredProbe, StoredRating } from '../schemas/ratings.ts';
+import type { JudgedBy } from '../schemas/runs.ts';
+import { toCelsius, toKelvinStep } from '../units.ts';
 
 /** Where no safety is specified: 196 °F, and the heat must be cut 6 °F under it (common practice). */
 const DEFAULT_HIGH_LIMIT_C = toCelsius(196, 'F');

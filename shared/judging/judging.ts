@@ -1,17 +1,20 @@
-import type { AnalysisInput, ReferenceRun } from '#shared/analysis/analysis.ts';
-import type { Load, Probe, Rating } from '#shared/analysis/rating.ts';
-import { toKelvinStep } from '#shared/units.ts';
-import type { Run } from './run.ts';
+import type { AnalysisInput, ReferenceRun } from '../analysis/analysis.ts';
+import type { Load, Probe, Rating } from '../analysis/rating.ts';
+import { toKelvinStep } from '../units.ts';
+import type { MarkKind } from '../analysis/series.ts';
 
 /** Swing threshold of a turning point: 4 °F (common practice). */
 const SWING_K = toKelvinStep(4, 'F');
+
+/** A mark as it is stored and as it crosses the wire. */
+export type JudgingMark = { timeS: number; kind: MarkKind; text?: string | undefined };
 
 /** What an analysis needs beside the readings; plain values, so that it crosses to the worker. */
 export type Judging = {
   rating: Rating | null;
   probe: Probe;
   /** Times in s of the whole record. */
-  marks: Run['marks'];
+  marks: JudgingMark[];
   load: Load | null;
   roomC: number | null;
   minCycles: number;

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { judgedBy, probeOf } from '#server/runs/judged-by.ts';
+import { judgedBy, probeOf } from '#shared/judging/judged-by.ts';
 import type { StoredRating } from '#shared/schemas/ratings.ts';
 
 const THERMOSTAT: StoredRating = {
