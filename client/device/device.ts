@@ -1,0 +1,94 @@
+import type { SendingKind } from '#shared/schemas/sending-kinds.ts';
+import { openDeviceDb, type DeviceDb, type DevicePerson, type KeptThing } from './device-db.ts';
+import { KeepError } from './keep-error.ts';
+import { createKeptThings, NO_THINGS, type Counts, type NewThing } from './kept-things.ts';
+
+/** What a page shows of the things on this device. */
+export type Unsent = Counts & {
+  /** Unsent things of people who are not the one signed in. */
+  others: { name: string; unsent: number }[];
+};
+
+const NOTHING: Unsent = { ...NO_THINGS, others: [] };
+
+export type DeviceParts = {
+  name?: string;
+  nowMs?: () => number;
+  /** Joins the tabs of one browser; undefined: this page is alone. */
+  channel?: Pick<BroadcastChannel, 'postMessage' | 'addEventListener' | 'close'> | undefined;
+};
+
+export type Device = ReturnType<typeof createDevice>;
+
+/** What lies on this phone or computer, for one tab. Opens its store at the first use. */
+export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }: DeviceParts = {}) {
+  let opening: Promise<DeviceDb> | null = null;
+  const db = () => (opening ??= openDeviceDb(name, () => (opening = null)));
+  const things = createKeptThings(db, nowMs);
+  const listeners = new Set<() => void>();
+  let person: DevicePerson | null = null;
+  let unsent = NOTHING;
+
+  async function recount(): Promise<void> {
+    const counts = person ? await things.count(person.id) : NO_THINGS;
+    const next = { ...counts, others: await countOthers() };
+    if (JSON.stringify(next) === JSON.stringify(unsent)) return;
+    unsent = next;
+    for (const tell of listeners) tell();
+  }
+
+  async function countOthers(): Promise<Unsent['others']> {
+    const people = await (await db()).getAll('people');
+    const counts = await things.countByPerson();
+    return people
+      .filter(({ id }) => id !== person?.id && counts.has(id))
+      .map(({ id, name }) => ({ name, unsent: counts.get(id) ?? 0 }));
+  }
+
+  /** Tells this page and the other tabs. */
+  async function changed(): Promise<void> {
+    channel?.postMessage('things');
+    await recount();
+  }
+
+  channel?.addEventListener('message', () => void recount());
+
+  return {
+    db,
+    things,
+    changed,
+    person: () => person,
+
+    /** From now on things are kept for, and sent by, this person. */
+    async setPerson(next: DevicePerson | null): Promise<void> {
+      person = next;
+      if (next) await (await db()).put('people', next);
+      await recount();
+    },
+
+    /**
+     * Puts something by for the server; resolves once it would survive a power cut.
+     * @throws {KeepError} nothing was kept; its message is for the page
+     */
+    async keep<Kind extends SendingKind>(thing: NewThing<Kind>): Promise<KeptThing> {
+      if (!person) throw new KeepError('nobody');
+      const kept = await things.keep(person.id, thing);
+      // The thing is safe already: telling of it does not hold up whoever kept it.
+      void changed();
+      return kept;
+    },
+
+    unsent: () => unsent,
+    subscribe(tell: () => void): () => void {
+      listeners.add(tell);
+      return () => void listeners.delete(tell);
+    },
+
+    async close(): Promise<void> {
+      const open = opening;
+      opening = null;
+      channel?.close();
+      (await open)?.close();
+    },
+  };
+}
