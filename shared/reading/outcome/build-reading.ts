@@ -4,7 +4,10 @@ import type { LogColumn, LogReading, ReadWarning, SkippedRow } from '../log-read
 import { resultHash } from '../result-hash.ts';
 import type { RowFacts } from '../rows/read-rows.ts';
 import { MOST_LISTED, type RowList, type RowStore } from '../rows/row-store.ts';
+import { findDoubts } from '../tidy/find-doubts.ts';
 import { findGaps } from '../tidy/find-gaps.ts';
+import { findLoneReadings } from '../tidy/find-lone-readings.ts';
+import { findOddTimes } from '../tidy/find-odd-times.ts';
 import { warning } from '../words/warning-words.ts';
 import { inCelsius, type FinishedChannel } from './finish-reading.ts';
 import type { LogFile } from './log-file.ts';
@@ -32,7 +35,14 @@ export function buildReading(
   const columns = layout.columns.map((column) =>
     column.index === own.index && answered ? { ...column, unit, unitFrom: 'answered' } : column,
   );
-  const warnings = [...early, ...rowWarnings(store, facts, place, own), ...findGaps(timesS, rows)];
+  const warnings = [
+    ...early,
+    ...rowWarnings(store, facts, place, own),
+    ...findGaps(timesS, rows),
+    ...findOddTimes(timesS, rows),
+    ...findLoneReadings(temps, unit, rows),
+    ...findDoubts(timesS, temps, { unit, clock: layout.clock, column: own.name }),
+  ];
   if (isConstant(temps)) warnings.push(warning('no-change', { say: own.name }));
   return {
     series,

@@ -1,4 +1,4 @@
-import { TICKS_PER_DAY, TICKS_PER_S } from '../clock/parse-stamp.ts';
+import { TICKS_PER_S } from '../clock/parse-stamp.ts';
 import type { Clock, Layout } from '../layout/layout.ts';
 
 /** What to do with a column: the place of a temperature column among its kind, or one of these. */
@@ -40,4 +40,3 @@ export function numberTicks(clock: Clock, value: number): number {
   return Math.abs(ticks - whole) < 1e-4 ? whole : ticks;
 }
 
-export { TICKS_PER_DAY };

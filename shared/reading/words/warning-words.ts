@@ -26,6 +26,20 @@ export const WARNING_WORDS = {
     `${say === 1 ? '1 row has' : `${say} rows have`} no reading, the first in row ${row}.`,
   'rows-set-aside': ({ row, say }) =>
     `${say === 1 ? '1 row' : `${say} rows`} could not be read, the first is row ${row}.`,
+  'uneven-step': ({ row, value, say }) =>
+    `${value === '1' ? '1 time is' : `${value} times are`} off the even step of ${say}, the first in row ${row}: check it.`,
+  'readings-missing': ({ row, value, say }) =>
+    `Readings are missing in ${value === '1' ? '1 place' : `${value} places`} of the even step of ${say}, the first before row ${row}.`,
+  'stands-out': ({ row, value, say }) =>
+    say === 1
+      ? `Row ${row} reads ${value}, far from the readings beside it: check it.`
+      : `${say} readings lie far from those beside them, the first in row ${row}: ${value}.`,
+  'odd-form': ({ row, column, value, say }) =>
+    `${say === 1 ? '1 reading' : `${say} readings`} of ${column} ${say === 1 ? 'has' : 'have'} not the ${value} decimals of the others, the first in row ${row}: check it.`,
+  'unit-doubtful': ({ column, value, say }) =>
+    `${column} was read in ${value === 'K' ? 'K' : `°${value}`} as the file says; its readings look more like ${say}.`,
+  'clock-doubtful': ({ say }) =>
+    `By the clock of the file a reading comes every ${say}: check the unit of its times.`,
   gap: ({ row, say }) => `Nothing was recorded for ${say} before row ${row}.`,
   'more-gaps': ({ say }) => `${say} more gaps.`,
   'header-repeated': ({ row, say }) =>
