@@ -1,6 +1,6 @@
 import { useLocation } from 'react-router-dom';
 import { DeskPage } from './frame.tsx';
-import { KeyLink } from './key.tsx';
+import { KeyLink } from './key-link.tsx';
 import { PageHeading } from './page-heading.tsx';
 
 /** An address that names nothing, or nothing any more. */

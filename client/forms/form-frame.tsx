@@ -1,6 +1,7 @@
 import type { ReactNode, SubmitEventHandler } from 'react';
 import { ErrorSummary, type FormProblem } from '../components/error-summary.tsx';
-import { Key, Word, WordLink } from '../components/key.tsx';
+import { Key, Word } from '../components/key.tsx';
+import { WordLink } from '../components/key-link.tsx';
 import { PageHeading } from '../components/page-heading.tsx';
 
 type SentForm = {

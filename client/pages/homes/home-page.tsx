@@ -4,7 +4,7 @@ import type { HomeListItem, Machine } from '#shared/schemas/homes.ts';
 import { homeQuery } from '../../api/homes.ts';
 import { Crumb } from '../../components/crumb.tsx';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink, WordLink } from '../../components/key.tsx';
+import { KeyLink, WordLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { UnfetchedPage } from '../../components/waiting.tsx';

@@ -4,7 +4,7 @@ import type { HomeListItem } from '#shared/schemas/homes.ts';
 import { homesQuery } from '../../api/homes.ts';
 import { Cells, TextField } from '../../components/field.tsx';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { Empty } from '../../components/printed-paper.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';

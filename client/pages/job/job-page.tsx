@@ -4,7 +4,7 @@ import type { JobPage as Job } from '#shared/schemas/jobs.ts';
 import { jobQuery } from '../../api/jobs.ts';
 import { Fact, Facts } from '../../components/facts.tsx';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { CallbackNotice } from '../../components/notice.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { SectionHead } from '../../components/section-head.tsx';

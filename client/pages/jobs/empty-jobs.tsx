@@ -1,4 +1,4 @@
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { Empty } from '../../components/printed-paper.tsx';
 
 export function EmptyJobs({ mayTake }: { mayTake: boolean }) {

@@ -5,7 +5,7 @@ import { jobsQuery } from '../../api/jobs.ts';
 import { techniciansQuery } from '../../api/people.ts';
 import { Cells, SelectField, TextField, TickField } from '../../components/field.tsx';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
 import { JOB_STATE_WORDS } from '../../format/job-words.ts';

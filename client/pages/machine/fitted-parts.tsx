@@ -1,5 +1,5 @@
 import type { FittedPart, MachinePage } from '#shared/schemas/homes.ts';
-import { KeyLink, WordLink } from '../../components/key.tsx';
+import { KeyLink, WordLink } from '../../components/key-link.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { RATING_KIND_WORDS, ratedWords } from '../../format/rating-words.ts';

@@ -5,7 +5,7 @@ import { machineQuery } from '../../api/machines.ts';
 import { Crumb } from '../../components/crumb.tsx';
 import { Fact, Facts } from '../../components/facts.tsx';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink, WordLink } from '../../components/key.tsx';
+import { KeyLink, WordLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { UnfetchedPage } from '../../components/waiting.tsx';
 import { machineWords } from '../../format/job-words.ts';

@@ -1,4 +1,4 @@
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { mayRunOffice, useSession } from '../frame/session-context.ts';
 
 /** A form of this kind chooses from the shop's ratings; there is none to choose yet. */

@@ -1,5 +1,5 @@
 import { HEAT_SETTINGS, type HeatSetting, type MachinePage } from '#shared/schemas/homes.ts';
-import { WordLink } from '../../components/key.tsx';
+import { WordLink } from '../../components/key-link.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { ratedWords, unitWords } from '../../format/rating-words.ts';
 

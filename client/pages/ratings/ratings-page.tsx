@@ -4,7 +4,7 @@ import { RATING_KINDS, type StoredProbe, type StoredRating } from '#shared/schem
 import { probesQuery } from '../../api/probes.ts';
 import { ratingsQuery } from '../../api/ratings.ts';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { Empty } from '../../components/printed-paper.tsx';
 import { SectionHead } from '../../components/section-head.tsx';

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { RoundsItem } from '#shared/schemas/jobs.ts';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { CallbackNotice } from '../../components/notice.tsx';
 import { JOB_STATE_WORDS, machineWords, quoted } from '../../format/job-words.ts';
 import { daysBetween, timeWords } from '../../format/when.ts';

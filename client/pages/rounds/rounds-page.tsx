@@ -4,7 +4,7 @@ import type { Rounds } from '#shared/schemas/jobs.ts';
 import { daySchema } from '#shared/schemas/primitives.ts';
 import { roundsQuery } from '../../api/visits.ts';
 import { PhoneTabs, SitePage } from '../../components/frame.tsx';
-import { WordLink } from '../../components/key.tsx';
+import { WordLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';

@@ -2,7 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { Navigate } from 'react-router-dom';
 import { peopleQuery } from '../../api/people.ts';
 import { DeskPage } from '../../components/frame.tsx';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
 import { useSession } from '../frame/session-context.ts';

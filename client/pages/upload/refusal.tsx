@@ -2,7 +2,8 @@ import { useState } from 'react';
 import type { Upload } from '#shared/schemas/uploads.ts';
 import { useSendFile } from '../../api/uploads.ts';
 import { ErrorSummary } from '../../components/error-summary.tsx';
-import { Key, WordLink } from '../../components/key.tsx';
+import { Key } from '../../components/key.tsx';
+import { WordLink } from '../../components/key-link.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 
 type Problem = Extract<Upload['reading'], { state: 'refused' }>['problem'];

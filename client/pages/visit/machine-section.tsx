@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import type { FittedPart, MachinePage, SpecifiedRating } from '#shared/schemas/homes.ts';
 import { machineQuery } from '../../api/machines.ts';
-import { WordLink } from '../../components/key.tsx';
+import { WordLink } from '../../components/key-link.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';

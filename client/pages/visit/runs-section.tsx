@@ -3,7 +3,7 @@ import type { VisitPage } from '#shared/schemas/jobs.ts';
 import type { RunCard } from '#shared/schemas/runs.ts';
 import { Spark } from '../../chart/spark.tsx';
 import { CallGlyphs } from '../../components/glyphs.tsx';
-import { KeyLink } from '../../components/key.tsx';
+import { KeyLink } from '../../components/key-link.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { OUTCOME_WORDS } from '../../format/job-words.ts';
 import { timeWords } from '../../format/when.ts';

@@ -3,7 +3,7 @@ import { useParams } from 'react-router-dom';
 import type { VisitPage as Visit } from '#shared/schemas/jobs.ts';
 import { visitQuery } from '../../api/visits.ts';
 import { SitePage } from '../../components/frame.tsx';
-import { WordLink } from '../../components/key.tsx';
+import { WordLink } from '../../components/key-link.tsx';
 import { CallbackNotice } from '../../components/notice.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
