@@ -25,10 +25,12 @@ import { ratingRoutes } from './ratings/rating-routes.ts';
 import { runRoutes } from './runs/run-routes.ts';
 import { uploadRoutes } from './runs/upload-routes.ts';
 import type { Secrets } from './secrets.ts';
+import { sendingRoutes } from './sendings/sending-routes.ts';
 import { shareRoutes } from './shares/share-routes.ts';
 import { wireJobs } from './wiring/wire-jobs.ts';
 import { wirePeople } from './wiring/wire-people.ts';
 import { wireRuns } from './wiring/wire-runs.ts';
+import { wireSendings } from './wiring/wire-sendings.ts';
 
 export type AppParts = {
   db: Knex;
@@ -97,6 +99,7 @@ function createApi(parts: AppParts): Router {
   api.use(probeRoutes(jobs.probeService));
   api.use(jobRoutes(jobs.jobService, jobs.visitService));
   api.use(visitRoutes(jobs.visitService, jobs.roundsService));
+  api.use(sendingRoutes(wireSendings(parts, people), parts.now));
   api.use(uploadRoutes(runs.uploads, runs.receive));
   api.use(runRoutes(runs));
   api.use(shareRoutes({ ...runs, shop: shop.get, publicUrl }));

@@ -11,6 +11,16 @@ type VisitRow = {
   notes: string;
 };
 
+/** A visit with its technician's name, and who edited its notes last. */
+type JoinedRow = VisitRow & {
+  technician: string;
+  version: string | null;
+  edited_by: string | null;
+  edited_at_ms: number | string | null;
+};
+
+export type NotesEdit = { version: string; editedBy: string; editedAtMs: number };
+
 /** Half open: from `fromMs` until before `toMs`. */
 export type Span = { fromMs: number; toMs: number };
 
@@ -20,7 +30,15 @@ export function createVisitRepository(db: Knex) {
   const visits = () =>
     db<VisitRow>('visits')
       .join('users', 'users.id', 'visits.technician_id')
-      .select<(VisitRow & { technician: string })[]>('visits.*', 'users.name as technician');
+      .leftJoin('visit_edits', 'visit_edits.visit_id', 'visits.id')
+      .leftJoin('users as editors', 'editors.id', 'visit_edits.edited_by')
+      .select<JoinedRow[]>(
+        'visits.*',
+        'users.name as technician',
+        'visit_edits.version',
+        'editors.name as edited_by',
+        'visit_edits.edited_at_ms',
+      );
 
   return {
     async find(id: string): Promise<Visit | undefined> {
@@ -61,10 +79,24 @@ export function createVisitRepository(db: Knex) {
     async setSafetyTickedAt(id: string, atMs: number): Promise<void> {
       await db('visits').where({ id }).update({ safety_ticked_at_ms: atMs });
     },
+
+    /** In a transaction: the text and who wrote it belong together. */
+    async setNotes(id: string, notes: string, edit: NotesEdit): Promise<void> {
+      await db('visits').where({ id }).update({ notes });
+      await db('visit_edits')
+        .insert({
+          visit_id: id,
+          version: edit.version,
+          edited_by: edit.editedBy,
+          edited_at_ms: edit.editedAtMs,
+        })
+        .onConflict('visit_id')
+        .merge();
+    },
   };
 }
 
-function toVisit(row: VisitRow & { technician: string }): Visit {
+function toVisit(row: JoinedRow): Visit {
   return {
     id: row.id,
     jobId: row.job_id,
@@ -73,5 +105,8 @@ function toVisit(row: VisitRow & { technician: string }): Visit {
     endsAtMs: Number(row.ends_at_ms),
     safetyTickedAtMs: row.safety_ticked_at_ms === null ? null : Number(row.safety_ticked_at_ms),
     notes: row.notes,
+    notesVersion: row.version ?? '',
+    notesEdited:
+      row.edited_by === null ? null : { by: row.edited_by, atMs: Number(row.edited_at_ms) },
   };
 }

@@ -62,7 +62,8 @@ export function createVisitService(parts: VisitParts) {
       }
       const { startsAtMs, endsAtMs, notes } = asked;
       const times = { startsAtMs, endsAtMs, safetyTickedAtMs: null };
-      const visit = { id: randomUUID(), jobId, technician, ...times, notes };
+      const asBooked = { notes, notesVersion: '', notesEdited: null };
+      const visit = { id: randomUUID(), jobId, technician, ...times, ...asBooked };
       await visits.insert(visit);
       return visit;
     },

@@ -10,7 +10,11 @@ const MOST_NOTES = 100;
 export type NoteService = ReturnType<typeof createNoteService>;
 
 /** Notes at a time and temperature of a run. */
-export function createNoteService(notes: NoteRepository, runs: RunService, now: () => Date) {
+export function createNoteService(
+  notes: NoteRepository,
+  runs: Pick<RunService, 'get'>,
+  now: () => Date,
+) {
   async function checkTime(runId: string, { timeS }: NewNote): Promise<void> {
     const run = await runs.get(runId);
     if (timeS <= run.durationS) return;
@@ -20,13 +24,14 @@ export function createNoteService(notes: NoteRepository, runs: RunService, now: 
   }
 
   return {
-    async add(by: Person, runId: string, note: NewNote): Promise<void> {
+    /** `id`: made where the note was written, where that was not here. */
+    async add(by: Person, runId: string, note: NewNote, id: string = randomUUID()): Promise<void> {
       await checkTime(runId, note);
       if ((await notes.list(runId)).length >= MOST_NOTES) {
         throw new AppError(409, 'full', `A run holds at most ${MOST_NOTES} notes.`);
       }
       const writtenAtMs = now().getTime();
-      await notes.insert({ ...note, id: randomUUID(), runId, userId: by.id, writtenAtMs });
+      await notes.insert({ ...note, id, runId, userId: by.id, writtenAtMs });
     },
 
     async change(runId: string, noteId: string, note: NewNote): Promise<void> {

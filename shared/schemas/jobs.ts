@@ -55,6 +55,9 @@ export const visitSchema = z.object({
   /** When the safety cautions were ticked; null: not yet. */
   safetyTickedAtMs: instantSchema.nullable(),
   notes: z.string(),
+  /** Which state the notes are in: the id of the last edit, '' as booked. */
+  notesVersion: z.string(),
+  notesEdited: z.object({ by: z.string(), atMs: instantSchema }).nullable(),
 });
 export type Visit = z.infer<typeof visitSchema>;
 

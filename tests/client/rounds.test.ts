@@ -25,6 +25,8 @@ function visitAt(startsAtMs: number, technician = 'Tom Birkett', state = 'booked
     endsAtMs: startsAtMs + HOUR_MS,
     safetyTickedAtMs: null,
     notes: '',
+    notesVersion: '',
+    notesEdited: null,
     before: null,
     runs: [],
     job: {

@@ -41,10 +41,28 @@ const probe = {
   name: 'Blue lead',
   kind: 'thermocouple-k',
   unit: 'F',
+  accuracyClass: null,
   accuracy: 2,
   responseS: null,
   calibrationU: null,
   calibratedAtMs: null,
+  notes: '',
+};
+const calibration = {
+  kind: 'ice-and-boiling',
+  madeAtMs: 1,
+  unit: 'F',
+  points: [
+    { reference: null, readings: [32.4] },
+    { reference: null, readings: [211] },
+  ],
+  pressureHPa: 1008,
+  altitudeM: null,
+  referenceName: '',
+  referenceU: null,
+  resolution: 0.1,
+  drift: 1,
+  intervalMonths: 12,
   notes: '',
 };
 const shop = {
@@ -172,6 +190,11 @@ export const CASES: Record<string, Case> = {
   'GET /probes': { expected: signedIn, ...just(() => '/probes') },
   'POST /probes': { expected: desk, ...just(() => '/probes', probe) },
   'PUT /probes/:id': { expected: desk, ...just(({ probeId }) => `/probes/${probeId}`, probe) },
+  'GET /calibrations': { expected: signedIn, ...just(() => '/calibrations') },
+  'POST /probes/:id/calibrations': {
+    expected: desk,
+    ...just(({ probeId }) => `/probes/${probeId}/calibrations`, calibration),
+  },
 
   'GET /jobs': { expected: signedIn, ...just(() => '/jobs') },
   'POST /jobs': {
@@ -199,6 +222,10 @@ export const CASES: Record<string, Case> = {
     ...just(({ visitId }) => `/visits/${visitId}/safety`),
   },
   'GET /rounds': { expected: signedIn, ...just(() => '/rounds') },
+  'POST /sendings': {
+    expected: signedIn,
+    ...just(() => '/sendings', { deviceId: '5f0c1f0e-7d5e-4c3a-9a55-1f6a2f5a9d01', things: [] }),
+  },
 
   'POST /uploads': {
     expected: field,
