@@ -47,6 +47,7 @@ const probe = (name: string, accuracy: number, rest: Partial<DemoProbe>): DemoPr
   name,
   kind: 'thermocouple-k',
   unit: 'F',
+  accuracyClass: null,
   accuracy,
   responseS: 3,
   calibrationU: 0.5,

@@ -56,7 +56,8 @@ function conditionsOf({ things }: DemoStage, run: DemoRun, log: SampleLog): RunC
 async function seedNote(stage: DemoStage, { told }: RunAtVisit, runId: string, note: DemoNote) {
   const { runs, staff } = stage;
   const stored = await runs.runs.get(runId);
-  const columns = await runs.readings.columns(stored, 0, stored.samples);
+  const correction = await runs.runs.correctionOf(runId);
+  const columns = await runs.readings.columns(stored, 0, stored.samples, correction);
   const [, tempC] = needed(
     columns.findLast(([timeS]) => timeS <= note.timeS),
     note.text,

@@ -1,7 +1,11 @@
 import type { Knex } from 'knex';
 import type { StoredProbe } from '#shared/schemas/ratings.ts';
 
-type ProbeRow = Omit<StoredProbe, 'responseS' | 'calibrationU' | 'calibratedAtMs'> & {
+type ProbeRow = Omit<
+  StoredProbe,
+  'accuracyClass' | 'responseS' | 'calibrationU' | 'calibratedAtMs'
+> & {
+  accuracy_class: StoredProbe['accuracyClass'];
   response_s: number | null;
   calibration_u: number | null;
   calibrated_at_ms: number | string | null;
@@ -30,18 +34,22 @@ export function createProbeRepository(db: Knex) {
   };
 }
 
-function toProbe({ response_s, calibration_u, calibrated_at_ms, ...row }: ProbeRow): StoredProbe {
+function toProbe(stored: ProbeRow): StoredProbe {
+  const { accuracy_class, response_s, calibration_u, calibrated_at_ms, ...row } = stored;
   return {
     ...row,
+    accuracyClass: accuracy_class,
     responseS: response_s,
     calibrationU: calibration_u,
     calibratedAtMs: calibrated_at_ms === null ? null : Number(calibrated_at_ms),
   };
 }
 
-function toRow({ responseS, calibrationU, calibratedAtMs, ...probe }: StoredProbe): ProbeRow {
+function toRow(stored: StoredProbe): ProbeRow {
+  const { accuracyClass, responseS, calibrationU, calibratedAtMs, ...probe } = stored;
   return {
     ...probe,
+    accuracy_class: accuracyClass,
     response_s: responseS,
     calibration_u: calibrationU,
     calibrated_at_ms: calibratedAtMs,

@@ -1,5 +1,6 @@
 import { Router } from 'express';
 import { validate } from '#server/validate.ts';
+import { newCalibrationSchema } from '#shared/schemas/calibrations.ts';
 import { newProbeSchema } from '#shared/schemas/ratings.ts';
 import type { ProbeService } from './probe-service.ts';
 
@@ -16,6 +17,15 @@ export function probeRoutes(probes: ProbeService): Router {
 
   router.put('/probes/:id', async (req, res) => {
     res.json(await probes.change(req.params.id, validate(newProbeSchema, req.body)));
+  });
+
+  router.get('/calibrations', async (_req, res) => {
+    res.json(await probes.listCalibrations());
+  });
+
+  router.post('/probes/:id/calibrations', async (req, res) => {
+    const asked = validate(newCalibrationSchema, req.body);
+    res.status(201).json(await probes.calibrate(req.params.id, asked));
   });
 
   return router;

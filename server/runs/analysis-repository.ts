@@ -1,7 +1,13 @@
 import type { Knex } from 'knex';
 import { z } from 'zod';
 import { FINDING_CODES } from '#shared/analysis/analysis.ts';
-import { analysisSchema, judgedBySchema, type StoredAnalysis } from '#shared/schemas/runs.ts';
+import {
+  analysisSchema,
+  judgedBySchema,
+  judgedWithSchema,
+  type JudgedWith,
+  type StoredAnalysis,
+} from '#shared/schemas/runs.ts';
 import type { AnalysisHead, NewAnalysis } from './run.ts';
 
 type HeadRow = {
@@ -13,7 +19,7 @@ type HeadRow = {
   headline: string;
   calls: string;
 };
-type AnalysisRow = HeadRow & { version: string; result: string };
+type AnalysisRow = HeadRow & { version: string; judged_with: string | null; result: string };
 
 const HEAD = ['id', 'run_id', 'made_at_ms', 'judged_by', 'outcome', 'headline', 'calls'] as const;
 const NEWEST_FIRST = [
@@ -39,6 +45,7 @@ export function createAnalysisRepository(db: Knex) {
         version: analysis.version,
         made_at_ms: analysis.madeAtMs,
         judged_by: analysis.judgedBy && JSON.stringify(analysis.judgedBy),
+        judged_with: analysis.judgedWith && JSON.stringify(analysis.judgedWith),
         outcome: analysis.outcome,
         headline: analysis.headline,
         calls: JSON.stringify(analysis.calls),
@@ -49,6 +56,16 @@ export function createAnalysisRepository(db: Knex) {
     async find(id: string): Promise<StoredAnalysis | undefined> {
       const row = await db<AnalysisRow>('analyses').where({ id }).first();
       return row && toAnalysis(row);
+    },
+
+    /** What the newest result of a run was judged with. */
+    async newestJudgedWith(runId: string): Promise<JudgedWith | null> {
+      const row = await db<AnalysisRow>('analyses')
+        .select('judged_with')
+        .where({ run_id: runId })
+        .orderBy(NEWEST_FIRST)
+        .first();
+      return toJudgedWith(row?.judged_with ?? null);
     },
 
     /** Of these runs, newest first, without the results themselves. */
@@ -78,10 +95,15 @@ function toAnalysis(row: AnalysisRow): StoredAnalysis {
     id: row.id,
     madeAtMs: Number(row.made_at_ms),
     judgedBy: toJudgedBy(row.judged_by),
+    judgedWith: toJudgedWith(row.judged_with),
     analysis: analysisSchema.parse(JSON.parse(row.result)),
   };
 }
 
 function toJudgedBy(text: string | null) {
   return text === null ? null : judgedBySchema.parse(JSON.parse(text));
+}
+
+function toJudgedWith(text: string | null) {
+  return text === null ? null : judgedWithSchema.parse(JSON.parse(text));
 }

@@ -1,4 +1,5 @@
 import type { Analysis, Call, FindingCode, Outcome } from '#shared/analysis/analysis.ts';
+import { correctSeries } from '#shared/analysis/correct-series.ts';
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
 import type { Series } from '#shared/analysis/series.ts';
 import type { LogReading } from '#shared/reading/log-reading.ts';
@@ -91,7 +92,7 @@ function importSpan(reading: LogReading, span: Span, judging: Judging): Imported
     toS: endS,
     samples: to - from,
     durationS: endS - startS,
-    spark: sparkPoints(series.timesS, series.tempsC),
+    spark: sparkPoints(series.timesS, correctSeries(series, judging.probe).tempsC),
     packed: [series.timesS, ...recorded.map((temps) => temps.subarray(from, to))].map(packSamples),
     judged: judgeSeries(series, { ...judging, roomC }, startS, endS),
   };

@@ -37,7 +37,9 @@ export function runRoutes({ runs, pages, notes, readings, folders }: RunRoutePar
 
   router.get('/runs/:id/trace', async (req, res) => {
     const { columns, channel } = validate(traceSchema, req.query);
-    const found = await readings.columns(await runs.get(req.params.id), channel, columns);
+    const run = await runs.get(req.params.id);
+    const correction = await runs.correctionOf(run.id);
+    const found = await readings.columns(run, channel, columns, correction);
     const octets = packChunk(Float64Array.from(found.flat()));
     res.type('application/octet-stream').send(Buffer.from(octets.buffer));
   });
@@ -46,7 +48,7 @@ export function runRoutes({ runs, pages, notes, readings, folders }: RunRoutePar
     const { channel } = validate(samplesSchema, req.query);
     const run = await runs.get(req.params.id);
     // Refuses before a header is set.
-    const octets = readings.octets(run, channel);
+    const octets = readings.octets(run, channel, await runs.correctionOf(run.id));
     res.type('application/octet-stream');
     res.set('Content-Length', String(2 * run.samples * Float64Array.BYTES_PER_ELEMENT));
     await pipeline(Readable.from(octets), res);

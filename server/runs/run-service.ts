@@ -1,12 +1,14 @@
 import { randomUUID } from 'node:crypto';
 import { join } from 'node:path';
 import type { Knex } from 'knex';
+import type { ProbeCorrection } from '#shared/analysis/rating.ts';
 import type { Person } from '#shared/schemas/people.ts';
 import type { RunConditions } from '#shared/schemas/runs.ts';
 import { createAudit } from '#server/people/audit-repository.ts';
 import { AppError, notFound } from '#server/errors.ts';
 import { createAnalysisRepository } from './analysis-repository.ts';
 import { moveDurably, type DataFolders } from './data-folders.ts';
+import { judgedWith } from '#shared/judging/judged-with.ts';
 import { judgedByAnother, judgingFor, specifiedFor } from '#shared/judging/judging-for.ts';
 import type { LogWorker } from './log-worker.ts';
 import type { Run, UploadedFile } from './run.ts';
@@ -26,6 +28,8 @@ export type RunParts = {
   now: () => Date;
 };
 
+type SaidOfRun = Pick<LogToImport, 'visitId' | 'conditions' | 'marks' | 'startedAtMs'>;
+
 export type RunService = ReturnType<typeof createRunService>;
 
 export function createRunService({ db, worker, sources, folders, now }: RunParts) {
@@ -33,12 +37,19 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
   const samples = createSampleRepository(db);
   const analyses = createAnalysisRepository(db);
 
-  async function judgingOf(log: Pick<LogToImport, 'visitId' | 'conditions' | 'marks'>) {
-    const { machine } = await sources.visitFacts(log.visitId);
+  async function judgingOf(log: SaidOfRun) {
+    const { machine, visit } = await sources.visitFacts(log.visitId);
     const { minCycles } = await sources.shop();
-    const probe = await findProbe(log.conditions);
+    const used = await judgedWithOf(log.conditions, log.startedAtMs ?? visit.startsAtMs);
     const judged = specifiedFor(machine, log.conditions.setting);
-    return { machine, judged, said: { ...log, probe, minCycles } };
+    return { machine, judged, used, said: { ...log, judgedWith: used, minCycles } };
+  }
+
+  /** Before the file is read its clock is not known; the visit tells the day, which is all that drift asks. */
+  async function judgedWithOf(conditions: RunConditions, atMs: number) {
+    const probe = await findProbe(conditions);
+    const calibrations = probe ? await sources.listCalibrations(probe.id) : [];
+    return judgedWith(probe, calibrations, atMs);
   }
 
   async function findProbe({ probeId }: RunConditions) {
@@ -50,7 +61,7 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
 
   /** A file becomes runs: all of it, or nothing. @returns the runs' ids, in the order of the spans */
   async function importRuns(by: Person, log: LogToImport): Promise<string[]> {
-    const { judged, said } = await judgingOf(log);
+    const { judged, used, said } = await judgingOf(log);
 
     // [2 read] [3 analyse] in the worker, from the same bytes that were looked at
     const { path, choices, spans, resultHash } = log;
@@ -62,7 +73,7 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
     const kept = join(folders.uploads, log.id);
     await moveDurably(path, kept);
     try {
-      return await storeRuns({ db, now }, by, { log, read, judged, startedAtMs });
+      return await storeRuns({ db, now }, by, { log, read, judged, used, startedAtMs });
     } catch (error) {
       await moveDurably(kept, path);
       throw error;
@@ -89,7 +100,7 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
    */
   async function judgeAgain(by: Person, id: string, ratingId: string | null): Promise<void> {
     const run = await get(id);
-    const { machine, judged: own, said } = await judgingOf(run);
+    const { machine, judged: own, used, said } = await judgingOf(run);
     const rating = (await sources.listRatings()).find((each) => each.id === ratingId);
     if (ratingId !== null && !rating) {
       throw new AppError(400, 'no-rating', 'Choose a rating of the list.');
@@ -103,6 +114,7 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
       runId: id,
       madeAtMs: await laterThanAll(id),
       judgedBy: judged,
+      judgedWith: used,
     });
     const details = { rating: judged?.name ?? 'none' };
     await createAudit(
@@ -129,7 +141,12 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
     return file;
   }
 
-  return { importRuns, get, judgeAgain, fileOf };
+  /** What the newest result added to the probe's readings. */
+  async function correctionOf(id: string): Promise<ProbeCorrection | null> {
+    return (await analyses.newestJudgedWith(id))?.correction ?? null;
+  }
+
+  return { importRuns, get, judgeAgain, fileOf, correctionOf };
 }
 
 function imported(answer: ImportAnswer): Imported {

@@ -1,5 +1,6 @@
 import type { Customer, Home, MachinePage } from '#shared/schemas/homes.ts';
 import type { Visit } from '#shared/schemas/jobs.ts';
+import type { StoredCalibration } from '#shared/schemas/calibrations.ts';
 import type { Person, Shop } from '#shared/schemas/people.ts';
 import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
 
@@ -16,6 +17,8 @@ export type VisitFacts = {
 export type RunSources = {
   visitFacts(visitId: string): Promise<VisitFacts>;
   findProbe(id: string): Promise<StoredProbe | undefined>;
+  /** Of one probe, in the order that they were recorded in. */
+  listCalibrations(probeId: string): Promise<StoredCalibration[]>;
   findPerson(id: string): Promise<Person | undefined>;
   listRatings(): Promise<StoredRating[]>;
   shop(): Promise<Shop>;

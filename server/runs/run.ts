@@ -1,7 +1,12 @@
 import { z } from 'zod';
 import type { TemperatureUnit } from '#shared/units.ts';
 import { temperatureUnitSchema } from '#shared/schemas/primitives.ts';
-import { markSchema, type JudgedBy, type RunConditions } from '#shared/schemas/runs.ts';
+import {
+  markSchema,
+  type JudgedBy,
+  type JudgedWith,
+  type RunConditions,
+} from '#shared/schemas/runs.ts';
 import { readingChoicesSchema } from '#shared/schemas/uploads.ts';
 import type { Judged } from './import-log.ts';
 
@@ -55,6 +60,7 @@ export type NewAnalysis = Judged & {
   runId: string;
   madeAtMs: number;
   judgedBy: JudgedBy | null;
+  judgedWith: JudgedWith | null;
 };
 
 /** What a list needs of an analysis. */

@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import { createAudit } from '#server/people/audit-repository.ts';
 import type { Person } from '#shared/schemas/people.ts';
-import type { JudgedBy, RunConditions } from '#shared/schemas/runs.ts';
+import type { JudgedBy, JudgedWith, RunConditions } from '#shared/schemas/runs.ts';
 import type { ReadingChoices } from '#shared/schemas/uploads.ts';
 import { createAnalysisRepository } from './analysis-repository.ts';
 import type { ImportedRun, Span } from './import-log.ts';
@@ -33,6 +33,7 @@ type Accepted = {
   log: LogToImport;
   read: Imported;
   judged: JudgedBy | null;
+  used: JudgedWith | null;
   /** When the record's first reading was taken. */
   startedAtMs: number;
 };
@@ -72,7 +73,7 @@ type Stored = { part: ImportedRun; run: Run };
 function storeRows(
   { db, now }: { db: Knex; now: () => Date },
   by: Person,
-  { log, read, judged }: Accepted,
+  { log, read, judged, used }: Accepted,
   stored: Stored[],
 ): Promise<void> {
   return db.transaction(async (trx) => {
@@ -93,6 +94,7 @@ function storeRows(
         runId: run.id,
         madeAtMs: run.acceptedAtMs,
         judgedBy: judged,
+        judgedWith: used,
       });
     }
     const details = { file: log.id, runs: stored.length };

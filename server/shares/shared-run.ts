@@ -43,7 +43,7 @@ export function createSharedRuns({ runs, analyses, readings, sources }: SharedRu
       judgedBy: judged.judgedBy,
       analysis: judged.analysis,
       notes: share.notes,
-      trace: await readings.columns(run, 0, TRACE_COLUMNS),
+      trace: await readings.columns(run, 0, TRACE_COLUMNS, judged.judgedWith?.correction ?? null),
     };
   };
 }

@@ -12,6 +12,7 @@ import { createJobService } from '#server/jobs/job-service.ts';
 import { createRoundsService } from '#server/jobs/rounds-service.ts';
 import { createVisitRepository } from '#server/jobs/visit-repository.ts';
 import { createVisitService } from '#server/jobs/visit-service.ts';
+import { createCalibrationRepository } from '#server/ratings/calibration-repository.ts';
 import { createProbeRepository } from '#server/ratings/probe-repository.ts';
 import { createProbeService } from '#server/ratings/probe-service.ts';
 import { createRatingRepository } from '#server/ratings/rating-repository.ts';
@@ -30,6 +31,7 @@ export function wireJobs({ db, now }: AppParts, { people, shop }: PeopleWiring) 
   const fittedParts = createFittedPartRepository(db);
   const ratings = createRatingRepository(db);
   const probes = createProbeRepository(db);
+  const calibrations = createCalibrationRepository(db);
   const jobs = createJobRepository(db);
   const visits = createVisitRepository(db);
 
@@ -51,12 +53,13 @@ export function wireJobs({ db, now }: AppParts, { people, shop }: PeopleWiring) 
   });
   return {
     probes,
+    calibrations,
     ratings,
     customerService: createCustomerService(customers),
     homeService: createHomeService({ homes, customers, machines }),
     machineService,
     ratingService: createRatingService(ratings),
-    probeService: createProbeService(probes),
+    probeService: createProbeService(probes, calibrations, now),
     jobService: createJobService({ ...common, machines }),
     visitService: createVisitService({ ...common, people, machines: machineService }),
     roundsService: createRoundsService({ ...common, fittedParts, ratings, shop }),

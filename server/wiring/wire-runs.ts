@@ -25,6 +25,7 @@ export function wireRuns(parts: AppParts, { people, shop, audit }: PeopleWiring,
   const sources: RunSources = {
     visitFacts: jobs.visitService.facts,
     findProbe: jobs.probes.find,
+    listCalibrations: jobs.calibrations.listOf,
     findPerson: people.find,
     listRatings: jobs.ratings.list,
     shop: shop.get,

@@ -1,8 +1,9 @@
 import type { MachinePage } from '../schemas/homes.ts';
-import type { StoredProbe, StoredRating } from '../schemas/ratings.ts';
-import type { JudgedBy, RunConditions } from '../schemas/runs.ts';
+import type { StoredRating } from '../schemas/ratings.ts';
+import type { JudgedBy, JudgedWith, RunConditions } from '../schemas/runs.ts';
 import { toCelsius } from '../units.ts';
-import { judgedBy, probeOf, ratingOf } from './judged-by.ts';
+import { judgedBy, ratingOf } from './judged-by.ts';
+import { probeToJudgeWith } from './judged-with.ts';
 import type { Judging, JudgingMark } from './judging.ts';
 
 /** What a machine is specified to have for a heat setting; null where nothing is. */
@@ -26,18 +27,18 @@ export function judgedByAnother(
 
 type Said = {
   judged: JudgedBy | null;
-  probe: StoredProbe | null;
+  judgedWith: JudgedWith | null;
   conditions: RunConditions;
   marks: JudgingMark[];
   minCycles: number;
 };
 
 /** Rating, probe and what the technician said, as the engine takes them. */
-export function judgingFor({ judged, probe, conditions, marks, minCycles }: Said): Judging {
+export function judgingFor({ judged, judgedWith, conditions, marks, minCycles }: Said): Judging {
   const { roomTemp, roomUnit, load } = conditions;
   return {
     rating: ratingOf(judged),
-    probe: probeOf(probe),
+    probe: probeToJudgeWith(judgedWith),
     marks,
     load,
     roomC: roomTemp === null ? null : toCelsius(roomTemp, roomUnit),
@@ -52,7 +53,7 @@ export function judgingAtFirst(machine: MachinePage, minCycles: number): Judging
   const rating = ratingOf(specifiedFor(machine, 'high') ?? judged);
   return {
     rating,
-    probe: probeOf(null),
+    probe: probeToJudgeWith(null),
     marks: [],
     load: null,
     roomC: null,

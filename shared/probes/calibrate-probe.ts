@@ -4,9 +4,11 @@ import { boilingPointC, boilingSlopeKPerHPa, standardPressureHPa } from './boili
 import { coverageFactor, ofResolution, rectangular } from './combine-uncertainty.ts';
 import { fitCorrection, type ComparedPoint } from './fit-correction.ts';
 
+export const CALIBRATION_KINDS = ['ice-and-boiling', 'reference'] as const;
+
 /** What was written down when a probe was calibrated, in °C, K and hPa. */
 export type CalibrationRecord = {
-  kind: 'ice-and-boiling' | 'reference';
+  kind: (typeof CALIBRATION_KINDS)[number];
   /** Ice and boiling: exactly these two in this order, with no reference. Else what the reference showed at each. */
   points: { referenceC: number | null; readingsC: number[] }[];
   /** Boiling only: air pressure at the place, or else the altitude, m. */

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { PROBE_CLASSES } from '../probes/probe-class.ts';
 import { displayUnitSchema, idSchema, instantSchema, neededWords, words } from './primitives.ts';
 
 export const RATING_KINDS = [
@@ -55,6 +56,8 @@ export const newProbeSchema = z.object({
   name: neededWords(60, 'a name'),
   kind: z.enum(PROBE_KINDS),
   unit: displayUnitSchema,
+  /** Its class by a standard, where it has one: proposes the accuracy. */
+  accuracyClass: z.enum(PROBE_CLASSES).nullable(),
   /** ± accuracy in `unit` steps. */
   accuracy: step,
   /** Response time in moving air, s. */

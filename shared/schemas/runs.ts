@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import { FINDING_CODES } from '../analysis/analysis.ts';
+import { CALIBRATION_KINDS } from '../probes/calibrate-probe.ts';
+import { CALIBRATION_STANDINGS } from '../probes/probe-in-use.ts';
 import { heatSettingSchema } from './homes.ts';
 import {
   idSchema,
@@ -126,10 +128,42 @@ export const judgedBySchema = z.object({
 });
 export type JudgedBy = z.infer<typeof judgedBySchema>;
 
+const correctionSchema = z.object({
+  aboutC: z.number(),
+  interceptK: z.number(),
+  slope: z.number(),
+  interceptErrorK: z.number(),
+  slopeError: z.number(),
+  correlation: z.number(),
+});
+
+/** How good the probe was known to be, in K and s, with its name; kept with the analysis. */
+export const judgedWithSchema = z.object({
+  probeId: idSchema,
+  name: z.string(),
+  accuracyK: z.number(),
+  calibrationUK: z.number(),
+  correction: correctionSchema.nullable(),
+  responseS: z.number().nullable(),
+  /** The calibration in force then, used or set aside. */
+  calibration: z
+    .object({
+      id: idSchema,
+      kind: z.enum(CALIBRATION_KINDS),
+      madeAtMs: instantSchema,
+      dueAtMs: instantSchema,
+      standing: z.enum(CALIBRATION_STANDINGS),
+    })
+    .nullable(),
+});
+export type JudgedWith = z.infer<typeof judgedWithSchema>;
+
 export const storedAnalysisSchema = z.object({
   id: idSchema,
   madeAtMs: instantSchema,
   judgedBy: judgedBySchema.nullable(),
+  /** null where no probe was named, or before there was such a thing. */
+  judgedWith: judgedWithSchema.nullable(),
   analysis: analysisSchema,
 });
 export type StoredAnalysis = z.infer<typeof storedAnalysisSchema>;

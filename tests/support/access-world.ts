@@ -44,6 +44,7 @@ const PROBE = {
   name: 'Red lead',
   kind: 'thermocouple-k',
   unit: 'F',
+  accuracyClass: null,
   accuracy: 2,
   responseS: 3,
   calibrationU: null,

@@ -65,9 +65,17 @@ export function acceptance(upload: Upload, given: Partial<AcceptUpload> = {}): A
 }
 
 /** From a log to the id of its one run. */
-export async function makeRun(agent: Agent, visitId: string, log: string): Promise<string> {
+export async function makeRun(
+  agent: Agent,
+  visitId: string,
+  log: string,
+  said: Partial<RunConditions> = {},
+): Promise<string> {
   const upload = await sendLog(agent, visitId, log);
-  const accepted = await agent.post(`/api/uploads/${upload.id}/accept`).send(acceptance(upload));
+  const conditions = { ...CONDITIONS, ...said };
+  const accepted = await agent
+    .post(`/api/uploads/${upload.id}/accept`)
+    .send(acceptance(upload, { conditions }));
   expect(accepted.status).toBe(201);
   return accepted.body.runIds[0];
 }

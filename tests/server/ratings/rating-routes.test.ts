@@ -11,6 +11,7 @@ const PROBE = {
   name: 'Red lead',
   kind: 'thermocouple-k',
   unit: 'C',
+  accuracyClass: null,
   accuracy: 1.1,
   responseS: 4.5,
   calibrationU: 0.35,
