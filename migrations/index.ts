@@ -4,6 +4,7 @@ import * as homes from './002-homes.ts';
 import * as jobs from './003-jobs.ts';
 import * as runs from './004-runs.ts';
 import * as probeCalibrations from './005-probe-calibrations.ts';
+import * as sendings from './006-sendings.ts';
 
 type Migration = { name: string; up(db: Knex): Promise<void>; down(db: Knex): Promise<void> };
 
@@ -13,6 +14,7 @@ const MIGRATIONS: Migration[] = [
   { name: '003-jobs', ...jobs },
   { name: '004-runs', ...runs },
   { name: '005-probe-calibrations', ...probeCalibrations },
+  { name: '006-sendings', ...sendings },
 ];
 
 /** A fixed list, so that names and order are the same from source, in tests and in the built server. */

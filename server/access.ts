@@ -85,8 +85,6 @@ export const RULES: readonly Rule[] = [
   { method: 'PUT', path: '/probes/:id', who: DESK },
   { method: 'GET', path: '/calibrations', who: ALL },
   { method: 'POST', path: '/probes/:id/calibrations', who: DESK },
-  { method: 'GET', path: '/calibrations', who: ALL },
-  { method: 'POST', path: '/probes/:id/calibrations', who: DESK },
 
   { method: 'GET', path: '/jobs', who: ALL },
   { method: 'POST', path: '/jobs', who: DESK },

@@ -222,6 +222,10 @@ export const CASES: Record<string, Case> = {
     ...just(({ visitId }) => `/visits/${visitId}/safety`),
   },
   'GET /rounds': { expected: signedIn, ...just(() => '/rounds') },
+  'POST /sendings': {
+    expected: signedIn,
+    ...just(() => '/sendings', { deviceId: '5f0c1f0e-7d5e-4c3a-9a55-1f6a2f5a9d01', things: [] }),
+  },
 
   'POST /uploads': {
     expected: field,
