@@ -9,6 +9,9 @@ const EARLY_SHARE = 0.3;
 const LATE_SHARE = 0.55;
 /** Share of the rise still to come that the model itself may be wrong by. */
 const MODEL_SHARE = 0.35;
+/** On-times, and s, for which a machine that cut out before may heat again before it is another thing. */
+const LONG_TIMES = 3;
+const LONG_S = 120;
 
 /**
  * The exhaust levels off under the opens band: no turn came, and the upper bound of where it is heading lies below it.
@@ -16,13 +19,14 @@ const MODEL_SHARE = 0.35;
  * Assumes an empty drum (a damp load holds the exhaust down and is `too-short`) and a rise that ends as a first-order
  * response. A drum is not exactly that, so part of the rise still to come is added to the bound.
  *
- * Evidence: asymptoteC, asymptoteUK, bandLowC, lastC, durationS.
+ * Evidence: asymptoteC, asymptoteUK, bandLowC, lastC, durationS, cutOutsBefore (of the same run: heat that was lost on
+ * the way).
  */
 export function findBelowCutOut(facts: RunFacts): Finding | null {
   const { rating, load } = facts.input;
   const leg = facts.legs.at(-1) ?? null;
   const rise = riseOf(leg, facts);
-  if (!rating || load === 'damp' || facts.cutOuts.length > 0 || !leg || !rise) return null;
+  if (!rating || load === 'damp' || !leg || !rise || !isLong(rise, facts)) return null;
   const heading = asymptoteOf(rise, facts);
   if (!heading) return null;
   const { lowC } = bandOf('cut-out', rating);
@@ -37,8 +41,17 @@ export function findBelowCutOut(facts: RunFacts): Finding | null {
       bandLowC: lowC,
       lastC: rise.to.tempC,
       durationS: rise.to.timeS - rise.from.timeS,
+      cutOutsBefore: facts.cutOuts.length,
     },
   };
+}
+
+/** After cut-outs of its own a machine has lost heat only where it heats for much longer than before. */
+function isLong({ from, to }: RunLeg, { cutOuts, cycles }: RunFacts): boolean {
+  if (cutOuts.length === 0) return true;
+  if (cycles.length === 0) return false;
+  const longestS = cycles.reduce((longest, { onS }) => Math.max(longest, onS), 0);
+  return to.timeS - from.timeS > Math.max(LONG_S, LONG_TIMES * longestS);
 }
 
 /** The rise that nobody cut short: the last heating leg, or the one before a fall that a person made. */

@@ -21,11 +21,11 @@ import { findTooShort } from './too-short.ts';
  * mixed, in-band, too-close and too-short stands alone.
  */
 export function findFindings(facts: RunFacts): Finding[] {
-  const named = [
-    ...findHeatFaults(facts),
-    ...findThermostatFaults(facts),
-    ...findMissingHeat(facts),
-  ];
+  const heat = findHeatFaults(facts);
+  // Heat that stays on under the band is no heat that is missing.
+  const staysOn = heat.some(({ code }) => code === 'heat-stays-on');
+  const missing = staysOn ? [] : findMissingHeat(facts);
+  const named = [...heat, ...findThermostatFaults(facts), ...missing];
   if (named.length > 0) return named;
   // Points that were not called say nothing of a band.
   if (!facts.input.rating || facts.probeTooSlow) return [findTooShort(facts)];

@@ -13,6 +13,11 @@ const HANG_TIMES = 3;
 const HIDDEN_CYCLE_READINGS = 8;
 /** Readings that a fall must span to be a measure, where some do. */
 const SURE_READINGS = 4;
+/** A fall to be judged by where it heads for lasts this long, s, and this many times what the drum alone takes. */
+const LONG_FALL_S = 100;
+const LONG_FALL_TIMES = 1.2;
+/** Share of the way from the room up to the peak that is far above the room. */
+const FAR_SHARE = 0.55;
 /** Share of the rated differential that a fall must cover to be a measure for others. */
 const LEAST_FALL_SHARE = 0.5;
 
@@ -20,10 +25,11 @@ const LEAST_FALL_SHARE = 0.5;
  * The thermostat opened and some heat stays on: the exhaust hangs above the reset band, falls too slowly, or levels
  * off below band and allowance.
  *
- * Assumes equal airflow through the run, so that clean falls pass equal temperatures at equal rates; where no clean
- * fall is there to go by, a first-order fall with the heating leg's τ from the peak to the rated reset.
+ * Assumes equal airflow through the run, so that clean falls pass equal temperatures at equal rates (the run's own, or
+ * those of the machine's clean run); where no clean fall is there to go by, a first-order fall with the heating leg's
+ * τ from the peak to the rated reset, and an asymptote (Newton's law of cooling) far above the room.
  *
- * Evidence: how (hangs, falls-slowly, levels-off), hangS, usualOffS, fallRateKPerS, usualRateKPerS, shareOfUsualRate,
+ * Evidence: how (hangs, falls-slowly, levels-off, keeps-off-room), hangS, usualOffS, fallRateKPerS, usualRateKPerS, shareOfUsualRate,
  * atC, asymptoteC, asymptoteUK, roomC; those that do not apply are null.
  */
 export function findHeatStaysOn(facts: RunFacts): Finding | null {
@@ -59,7 +65,8 @@ function falling(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Ev
   return (
     hangs(leg, falls, facts, rating) ??
     slowFall(leg, falls.undisturbed, facts) ??
-    levelsOff(leg, facts, rating)
+    levelsOff(leg, facts, rating) ??
+    keepsOffRoom(leg, falls, facts, rating)
   );
 }
 
@@ -89,11 +96,21 @@ function usualOff(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): n
   }
   if (shortestS < Infinity) return shortestS;
   if (others.length > 0) return median(others.map(offTime));
-  const { roomC } = facts;
   const opened = leg.from.tempC + totalU(facts, leg.from) >= bandOf('cut-out', rating).lowC;
-  const tauS = falls.slowestTauS;
-  if (!opened || tauS === null || roomC === null || roomC >= rating.closesC) return null;
-  return tauS * Math.log((leg.from.tempC - roomC) / (rating.closesC - roomC));
+  const { reference } = facts.input;
+  if (opened && reference?.fall) return reference.offS;
+  return opened ? drumFallTime(leg, falls.slowestTauS, facts, rating) : null;
+}
+
+/** How long the drum alone, without the air's quicker part, takes from the peak to the rated reset, s. */
+function drumFallTime(
+  leg: RunLeg,
+  drumTauS: number | null,
+  { roomC }: RunFacts,
+  rating: Rating,
+): number | null {
+  if (drumTauS === null || roomC === null || roomC >= rating.closesC) return null;
+  return drumTauS * Math.log((leg.from.tempC - roomC) / (rating.closesC - roomC));
 }
 
 function offTime({ from, to }: RunLeg): number {
@@ -132,6 +149,24 @@ function levelsOff(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | nul
   const lowestC = fit.asymptoteC - 2 * fit.asymptoteErrorK - totalU(facts, to);
   if (lowestC <= bandOf('reset', rating).lowC) return null;
   return { how: 'levels-off' };
+}
+
+/**
+ * The fall spans at least one τ, lasts longer than the whole drum takes by itself, and heads for a temperature whose
+ * lower bound is far above the room: no clean fall is needed to go by.
+ *
+ * A clean fall is quick at first (air) and slow later (drum), so that its first part alone seems to head for half-way
+ * between peak and room: only a long one is asked, and more than half-way is "far above".
+ */
+function keepsOffRoom(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Evidence | null {
+  const { fit, from } = leg;
+  const { roomC } = facts;
+  const drumS = drumFallTime(leg, falls.slowestTauS, facts, rating);
+  if (!fit || roomC === null || drumS === null || from.tempC <= rating.closesC) return null;
+  if (fit.toS - fit.fromS < fit.tauS) return null;
+  if (lasted(leg, facts) < Math.max(LONG_FALL_S, LONG_FALL_TIMES * drumS)) return null;
+  const lowestC = fit.asymptoteC - 2 * fit.asymptoteErrorK;
+  return lowestC > roomC + FAR_SHARE * (from.tempC - roomC) ? { how: 'keeps-off-room' } : null;
 }
 
 function toFinding(leg: RunLeg, facts: RunFacts, seen: Evidence): Finding {

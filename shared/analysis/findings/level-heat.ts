@@ -1,15 +1,20 @@
+import type { Point } from '../analysis.ts';
 import { fitResponse } from '../fit-response.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
-import type { RunFacts, RunLeg } from '../run-facts.ts';
+import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
 import { median } from '../statistics/quantile.ts';
 import { ALIKE_PEAKS_K } from './slow-fall.ts';
-import { firstCrossing, hidesTurn, lasted, spanWithTail, totalU } from './trace.ts';
+import { firstCrossing, hidesTurn, isDisturbed, lasted, spanWithTail, totalU } from './trace.ts';
 
 /** How long the exhaust must stay level before it is not just slow to turn, s. */
 export const SETTLED_S = 120;
 /** A rise that stops this far short of where it was heading has lost heat on the way, K (12 °F). */
 const SHORT_OF_K = 12 / 1.8;
+/** A valley this much over the machine's own resets is no reset of theirs, K (2 °F). */
+const OVER_OWN_K = 2 / 1.8;
+/** A last rise of this many on-times is no rise to a cut-out. */
+const LONG_TIMES = 3;
 
 /** Whether the last rise went level under the allowance though the thermostat must have opened. */
 export function staysLevel(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
@@ -61,14 +66,26 @@ function rangeWithin(facts: RunFacts, { fromS, toS }: { fromS: number; toS: numb
 /** After a cut-out the exhaust turned up again well above any reset, and stays: heat that no reset brought back. */
 function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   const { from, to } = leg;
-  if (from.turnedBy !== 'machine' || to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
-  const highestResetC = facts.resets
-    .filter(({ timeS }) => timeS < from.timeS)
-    .reduce((high, { tempC }) => Math.max(high, tempC), bandOf('reset', rating).highC);
-  const above = from.tempC - totalU(facts, from) > highestResetC + ALIKE_PEAKS_K;
-  if (!above || lasted(leg, facts) < SETTLED_S) return false;
+  if (from.turnedBy !== 'machine' || to.turnedBy !== 'end' || isDisturbed(leg, facts)) return false;
   if (to.tempC > bandOf('cut-out', rating).highEndC) return false;
-  return true;
+  const lastedS = lasted(leg, facts);
+  if (lastedS < SETTLED_S) return false;
+  const { highC } = bandOf('reset', rating);
+  const own = facts.resets.filter(({ timeS }) => timeS < from.timeS);
+  const highestC = own.reduce((high, { tempC }) => Math.max(high, tempC), highC);
+  if (from.tempC - totalU(facts, from) > highestC + ALIKE_PEAKS_K) return true;
+  // Over its own resets by less, but for much longer than it ever heated.
+  const isLong = facts.cycles.length > 0 && lastedS > LONG_TIMES * longestOn(facts);
+  return isLong && from.tempC > highC && own.every((reset) => standsOver(from, reset));
+}
+
+/** Whether a valley lies over a reset of the same probe by more than both are uncertain, and a little. */
+function standsOver(valley: Extreme, reset: Point): boolean {
+  return valley.tempC - reset.tempC > Math.hypot(valley.uK, reset.uK) + OVER_OWN_K;
+}
+
+function longestOn({ cycles }: RunFacts): number {
+  return cycles.reduce((longestS, { onS }) => Math.max(longestS, onS), 0);
 }
 
 /** The last rise reached the machine's own cut-outs and stayed there, under the allowance, with none. */

@@ -1,7 +1,7 @@
 import type { Finding, Point } from '../analysis.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
-import type { RunFacts } from '../run-facts.ts';
+import type { RunFacts, SwitchInstant } from '../run-facts.ts';
 import { totalUncertainty } from '../judge-point.ts';
 import { judgedPoints, mean, type JudgedPoints } from './judged-points.ts';
 
@@ -58,23 +58,34 @@ function byPoints(kind: Point['kind'], judged: JudgedPoints, rating: Rating): Pl
   return null;
 }
 
-/** The disc feels the air late by no more than the allowance, so a switch that far outside is not its lag. */
+/**
+ * The disc feels the air late by no more than the allowance, so a switch that far outside is not its lag. Taken only
+ * where the instants are known to better than half the tolerance, as for a call; what is unknown of them may be common
+ * to all (the machine's lags), so that it does not average out.
+ */
 function bySwitches(
   kind: Point['kind'],
   judged: JudgedPoints,
   facts: RunFacts,
   rating: Rating,
 ): Place | null {
-  const tempsC = judged.points
-    .map(({ switchTempC }) => switchTempC)
-    .filter((tempC) => tempC !== null);
-  if (tempsC.length < judged.points.length) return null;
+  const switches = switchesOf(judged, facts);
+  if (switches.length < judged.points.length) return null;
+  const ownUK = mean(switches.map(({ uK }) => uK));
   const { lowC, highC } = bandOf(kind, rating);
-  const meanC = mean(tempsC);
+  if (ownUK >= (highC - lowC) / 4) return null;
+  const meanC = mean(switches.map(({ tempC }) => tempC));
   // A switch instant is no better known than the turn that it leads to.
-  const meanUK = totalUncertainty(2 * judged.meanUK, facts.input.probe, meanC);
+  const uK = Math.max(ownUK, 2 * judged.meanUK);
+  const meanUK = totalUncertainty(uK, facts.input.probe, meanC);
   const allowanceK = kind === 'cut-out' ? rating.overshootK : rating.undershootK;
   if (meanC - meanUK > highC + allowanceK) return { meanC, meanUK, side: 'high', by: 'switches' };
   if (meanC + meanUK < lowC - allowanceK) return { meanC, meanUK, side: 'low', by: 'switches' };
   return null;
+}
+
+/** The switch instants of the points, where the record shows them. */
+function switchesOf({ points }: JudgedPoints, { extremes }: RunFacts): SwitchInstant[] {
+  const byTime = new Map(extremes.map(({ timeS, switched }) => [timeS, switched]));
+  return points.flatMap(({ timeS }) => byTime.get(timeS) ?? []);
 }

@@ -36,10 +36,22 @@ function runsAway(leg: RunLeg, upThere: Extreme[], facts: RunFacts, rating: Rati
   const { highEndC } = bandOf('cut-out', rating);
   if (to.tempC >= rating.highLimitC) return true;
   const uK = Math.min(totalU(facts, to), totalU(facts, { ...to, uK: 2 * facts.noiseK }));
-  if (to.tempC - uK <= highEndC && !staysAbove(leg, facts, highEndC)) return false;
+  const reachedC = Math.min(to.tempC, highestShown(leg, facts));
+  if (reachedC - uK <= highEndC && !staysAbove(leg, facts, highEndC)) return false;
   if (to.turnedBy === 'machine') return upThere.every((own) => own === to) && !comesBack(facts, to);
   const highestC = upThere.reduce((high, { tempC }) => Math.max(high, tempC), -Infinity);
   return to.tempC > highestC + BEYOND_OWN_K + uK;
+}
+
+/** The highest that the smoothed record shows in a leg, with its noise, °C: where a fit alone goes higher, it errs. */
+function highestShown(leg: RunLeg, { binned }: RunFacts): number {
+  const { timesS, smoothC, smoothNoiseK } = binned;
+  const { fromS, toS } = spanOf(leg);
+  let highestC = -Infinity;
+  for (let i = firstAtOrAfter(timesS, fromS); i < timesS.length && timesS[i]! <= toS; i++) {
+    highestC = Math.max(highestC, smoothC[i]!);
+  }
+  return highestC + 2 * smoothNoiseK;
 }
 
 /** By hand a peak may be badly located while the readings themselves leave no doubt. */

@@ -1,5 +1,6 @@
 import type { Evidence } from '../analysis.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
+import { mean } from './judged-points.ts';
 import { firstCrossing, isDisturbed, nearestLegs, spanOf } from './trace.ts';
 
 /** A fall at equal temperature that takes this many times the run's cleanest keeps some heat … */
@@ -30,56 +31,113 @@ export function undisturbedFalls(facts: RunFacts): RunLeg[] {
 }
 
 /**
- * Evidence that a fall is slow at equal temperature against the run's cleanest one from a like peak; null where it is
- * not, or where none compares.
+ * Evidence that a fall is slow at equal temperature against the run's cleanest one from a like peak, or against that
+ * of the machine's clean run; null where it is not, or where none compares.
  */
 export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidence | null {
   const others = nearestLegs(falls, leg).filter(
     (other) => isAlike(leg, other) && !isAsFast(leg, other),
   );
-  if (others.length === 0) return null;
   const compared = others.flatMap((other) => [
     ...comparedFalls(leg, other, facts),
     ...comparedWholes(leg, other),
   ]);
-  const cleanest = compared.reduce<(typeof compared)[number] | null>(
-    (best, one) => (best && best.times >= one.times ? best : one),
-    null,
-  );
-  // Between a few readings of a coarse record a whole cycle may hide.
-  const leastExtraS = Math.max(LEAST_EXTRA_S, HIDING_READINGS * facts.spacingS);
-  if (!cleanest || cleanest.times < SLOW_TIMES || cleanest.extraS < leastExtraS) return null;
+  const slow = [...compared, ...comparedReference(leg, facts)].filter(({ times, extraS }) => {
+    // Between a few readings of a coarse record a whole cycle may hide.
+    const leastExtraS = Math.max(LEAST_EXTRA_S, HIDING_READINGS * facts.spacingS);
+    return times >= SLOW_TIMES && extraS >= leastExtraS;
+  });
+  const [slowest] = slow.sort((a, b) => b.times - a.times);
+  const found = slowest ?? slowFromHere(leg, falls);
+  return found && toEvidence(found);
+}
+
+function toEvidence({ spanK, ownS, times, middleC }: Compared): Evidence {
   return {
     how: 'falls-slowly',
-    fallRateKPerS: cleanest.spanK / cleanest.ownS,
-    usualRateKPerS: (cleanest.spanK / cleanest.ownS) * cleanest.times,
-    shareOfUsualRate: 1 / cleanest.times,
-    atC: cleanest.middleC,
+    fallRateKPerS: spanK / ownS,
+    usualRateKPerS: (spanK / ownS) * times,
+    shareOfUsualRate: 1 / times,
+    atC: middleC,
+  };
+}
+
+/** A fall beside another, through the same span. */
+type Compared = { times: number; extraS: number; ownS: number; spanK: number; middleC: number };
+
+/** Falls of each kind that it takes where one by itself is a matter of a few readings. */
+const LEAST_EACH = 2;
+/** The quickest slow fall takes this many times the slowest clean one. */
+const APART_TIMES = 1.3;
+/** A hidden cycle is a second fall and its heat: more than this many falls in all. */
+const HIDDEN_CYCLE_FALLS = 1.5;
+
+/**
+ * A fall between like turns in a coarse record: slow where every such fall from it on is, and none before it was. What
+ * takes so much longer that a whole cycle may hide between its readings is left alone.
+ */
+function slowFromHere(leg: RunLeg, falls: RunLeg[]): Compared | null {
+  const like = falls.filter((other) => areWholeAlike(leg, other) && isAlike(leg, other));
+  const beforeS = like.filter(({ from }) => from.timeS < leg.from.timeS).map(lengthOf);
+  const sinceS = like.filter(({ from }) => from.timeS >= leg.from.timeS).map(lengthOf);
+  if (beforeS.length < LEAST_EACH || sinceS.length < LEAST_EACH) return null;
+  if (Math.min(...sinceS) < APART_TIMES * Math.max(...beforeS)) return null;
+  const usualS = mean(beforeS);
+  const ownS = mean(sinceS);
+  const extraS = ownS - usualS;
+  if (ownS < SLOW_TIMES * usualS || extraS < LEAST_EXTRA_S) return null;
+  if (Math.max(...sinceS) - usualS > HIDDEN_CYCLE_FALLS * usualS) return null;
+  const spanK = leg.from.tempC - leg.to.tempC;
+  const middleC = (leg.from.tempC + leg.to.tempC) / 2;
+  return { times: ownS / usualS, extraS, ownS, spanK, middleC };
+}
+
+function lengthOf({ from, to }: RunLeg): number {
+  return to.timeS - from.timeS;
+}
+
+/** The same against the machine's clean run, from a like peak, where both are clear of their corners. */
+function comparedReference(leg: RunLeg, facts: RunFacts): Compared[] {
+  const fall = facts.input.reference?.fall;
+  if (!fall || Math.abs(leg.from.tempC - fall.fromC) > ALIKE_PEAKS_K) return [];
+  const { topC, footC } = clearSpan(leg.from.tempC, leg.to.tempC, fall.fromC, fall.toC);
+  if (topC - footC < LEAST_SPAN_K) return [];
+  const ownS = fallTime(leg, facts, topC, footC);
+  const otherS = fall.tauS * Math.log((topC - fall.asymptoteC) / (footC - fall.asymptoteC));
+  if (ownS === null || !(otherS > 0)) return [];
+  return [toCompared(ownS, otherS, topC, footC)];
+}
+
+/** What two falls both pass, a fifth of it left out at either end. */
+function clearSpan(fromC: number, toC: number, otherFromC: number, otherToC: number) {
+  const highC = Math.min(fromC, otherFromC);
+  const lowC = Math.max(toC, otherToC);
+  return { topC: highC - 0.2 * (highC - lowC), footC: lowC + 0.2 * (highC - lowC) };
+}
+
+function toCompared(ownS: number, otherS: number, topC: number, footC: number): Compared {
+  return {
+    times: ownS / otherS,
+    extraS: ownS - otherS,
+    ownS,
+    spanK: topC - footC,
+    middleC: (topC + footC) / 2,
   };
 }
 
 /** How much longer a fall takes than another through the span that both pass clear of their corners. */
-function comparedFalls(leg: RunLeg, other: RunLeg, facts: RunFacts) {
-  const highC = Math.min(leg.from.tempC, other.from.tempC);
-  const lowC = Math.max(leg.to.tempC, other.to.tempC);
-  const topC = highC - 0.2 * (highC - lowC);
-  const footC = lowC + 0.2 * (highC - lowC);
+function comparedFalls(leg: RunLeg, other: RunLeg, facts: RunFacts): Compared[] {
+  const { topC, footC } = clearSpan(leg.from.tempC, leg.to.tempC, other.from.tempC, other.to.tempC);
   if (topC - footC < LEAST_SPAN_K) return [];
   const ownS = fallTime(leg, facts, topC, footC);
   const otherS = fallTime(other, facts, topC, footC);
   if (ownS === null || otherS === null || otherS < LEAST_READINGS * facts.spacingS) return [];
-  const spanK = topC - footC;
-  return [
-    { times: ownS / otherS, extraS: ownS - otherS, ownS, spanK, middleC: (topC + footC) / 2 },
-  ];
+  return [toCompared(ownS, otherS, topC, footC)];
 }
 
 /** A cheap first look that settles nearly every pair of a sound machine's falls: alike from turn to turn, and as fast. */
 function isAsFast(leg: RunLeg, other: RunLeg): boolean {
-  return (
-    areWholeAlike(leg, other) &&
-    leg.to.timeS - leg.from.timeS < AS_FAST_TIMES * (other.to.timeS - other.from.timeS)
-  );
+  return areWholeAlike(leg, other) && lengthOf(leg) < AS_FAST_TIMES * lengthOf(other);
 }
 
 /** Whether two falls both end in a turn of the machine, and near each other. */
@@ -89,10 +147,10 @@ function areWholeAlike(leg: RunLeg, other: RunLeg): boolean {
 }
 
 /** The same of two whole falls between like turns: the turns are located better than a coarse record crosses levels. */
-function comparedWholes(leg: RunLeg, other: RunLeg) {
+function comparedWholes(leg: RunLeg, other: RunLeg): Compared[] {
   if (!areWholeAlike(leg, other)) return [];
-  const ownS = leg.to.timeS - leg.from.timeS;
-  const otherS = other.to.timeS - other.from.timeS;
+  const ownS = lengthOf(leg);
+  const otherS = lengthOf(other);
   const spanK = leg.from.tempC - leg.to.tempC;
   const middleC = (leg.from.tempC + leg.to.tempC) / 2;
   return [{ times: ownS / otherS, extraS: ownS - otherS, ownS, spanK, middleC }];
