@@ -77,14 +77,29 @@ function withPoint(text: string, decimal: Decimal): string | null {
   );
 }
 
+/** "0,125" groups nothing. */
 function ungroup(digits: string, mark: Decimal): string | null {
-  const grouped = mark === '.' ? /^[+-]?\d{1,3}(\.\d{3})+$/ : /^[+-]?\d{1,3}(,\d{3})+$/;
+  const grouped = mark === '.' ? /^[+-]?[1-9]\d{0,2}(\.\d{3})+$/ : /^[+-]?[1-9]\d{0,2}(,\d{3})+$/;
   return grouped.test(digits) ? digits.replaceAll(mark, '') : null;
 }
 
 function mixed(digits: string, grouping: Decimal): string | null {
   const shape = grouping === '.' ? /^[+-]?\d{1,3}(\.\d{3})+,\d*$/ : /^[+-]?\d{1,3}(,\d{3})+\.\d*$/;
   return shape.test(digits) ? digits.replaceAll(grouping, '').replace(',', '.') : null;
+}
+
+/** No plain number is written so. */
+const ODD_FORM = 99;
+
+/** How many decimals a cell's number is written with; a number with an exponent has none of a plain form. */
+export function decimalsOf(cell: string, decimal: Decimal): number {
+  const text = plain(cell);
+  if (/\de[+-]?\d/i.test(text)) return ODD_FORM;
+  const mark = text.lastIndexOf(decimal);
+  if (mark < 0) return /\d[.,]\d/.test(text) ? ODD_FORM : 0;
+  let digits = 0;
+  while (/\d/.test(text[mark + 1 + digits] ?? '')) digits++;
+  return digits === 0 ? ODD_FORM : digits;
 }
 
 /** Foreign digits, minus signs and spaces as ASCII. */

@@ -10,6 +10,9 @@ import { elapsedClock, rowsClock } from './elapsed-clock.ts';
 import { minutesClock } from './minutes-clock.ts';
 import type { DateOrder } from './parse-stamp.ts';
 
+/** This share of odd times is damage, more of them is a way of writing. */
+const FEW = 0.02;
+
 export type ClockChoice = {
   kind: 'clock';
   clock: Clock;
@@ -83,7 +86,9 @@ function timeClock(input: ClockInput, time: SampleColumn): ClockResult {
   const filled = time.cells.filter((cell) => cell !== '');
   const threeFields = filled.filter((cell) => /:\d{2}:\d{2}/.test(cell)).length;
   if (threeFields * 2 <= filled.length) return minutesClock(input, time);
-  const clock: Clock = { kind: 'time-of-day', column: time.index };
+  // one time of two fields among those of three has lost a mark
+  const minutesToo = filled.length - threeFields > Math.max(1, filled.length * FEW);
+  const clock: Clock = { kind: 'time-of-day', column: time.index, minutesToo };
   return { kind: 'clock', clock, words: 'h:mm:ss', orders: [], warnings: [] };
 }
 

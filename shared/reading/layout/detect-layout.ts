@@ -5,11 +5,13 @@ import type { DateOrder } from '../clock/parse-stamp.ts';
 import type { Answers, LogColumn, ReadProblem, ReadWarning } from '../log-reading.ts';
 import { problem } from '../words/problem-words.ts';
 import type { QuestionDraft } from '../outcome/question-draft.ts';
+import { cellSpan } from './cell-span.ts';
 import { chooseDecimal } from './choose-decimal.ts';
 import { chooseDelimiter } from './choose-delimiter.ts';
 import { columnNames, roleOfName } from './column-roles.ts';
 import { findTable, type SampleColumn, type Table } from './find-table.ts';
 import type { Clock, Layout } from './layout.ts';
+import { usualDecimals } from './usual-decimals.ts';
 import type { SampleLines } from './sample-lines.ts';
 
 export type LayoutResult =
@@ -60,7 +62,8 @@ function planRows(sample: SampleLines, table: Table, known: Understood): LayoutR
       table.columns[tempColumns[0]!]!,
       tempColumns.map((i) => columns[i]!.unit),
     ),
-    neededCells: neededCells(table, names.length),
+    usualDecimals: tempColumns.map((i) => usualDecimals(table.columns[i]!, decimal)),
+    ...cellSpan(table, names.length),
     header: table.header,
     firstRow: first.row,
     firstByte: first.from,
@@ -185,12 +188,4 @@ function suffixOf({ cells }: SampleColumn, units: LogColumn['unit'][]): string {
   const match = CELL_UNIT.exec(plain(said));
   if (!match || units.some((unit) => unit !== cellUnit(match))) return '';
   return /\d(\s*[^\d\s.,][^\d]*)$/.exec(said)?.[1] ?? '';
-}
-
-/** Cells that a row must have: all but the last columns of words, or of nothing. */
-function neededCells({ columns, width }: Table, named: number): number {
-  if (named > width) return width;
-  let needed = width;
-  while (needed > 1 && ['text', 'empty'].includes(columns[needed - 1]!.kind)) needed--;
-  return needed;
 }

@@ -24,6 +24,8 @@ export type Table = {
   firstLine: number;
   /** Lines above the header. */
   preamble: string[];
+  /** Sampled lines from the first row of readings on, split. */
+  lines: SplitLine[];
 };
 
 /**
@@ -52,6 +54,7 @@ export function findTable(
     header: found?.header ?? null,
     unitRow: found?.unitRow ?? null,
     firstLine: found ? found.to + 1 : firstLine,
+    lines: lines.slice(firstLine),
     preamble: headLines.slice(0, found?.from ?? firstLine).filter((line) => line.trim() !== ''),
   };
 }

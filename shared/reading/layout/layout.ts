@@ -7,7 +7,7 @@ import type { Delimiter } from '../text/split-cells.ts';
 export type Clock =
   | { kind: 'stamp'; column: number; order: DateOrder }
   | { kind: 'date-time'; dateColumn: number; column: number; order: DateOrder }
-  | { kind: 'time-of-day'; column: number }
+  | { kind: 'time-of-day'; column: number; minutesToo: boolean }
   | { kind: 'minutes'; column: number; hoursFirst: boolean }
   | { kind: 'elapsed'; column: number; ticksPerUnit: number }
   | { kind: 'unix'; column: number; ticksPerUnit: number }
@@ -26,8 +26,12 @@ export type Layout = {
   tempColumns: number[];
   /** What follows the number in each cell of a temperature column, " °F"; "" where nothing does. */
   cellSuffix: string;
+  /** Decimals that nearly every reading has, by temperature column; -1 where they vary. */
+  usualDecimals: number[];
   /** Cells from here on may be missing without a doubt about which one is. */
   neededCells: number;
+  /** A row with more cells than this, filled or not, has one too many. */
+  mostCells: number;
   /** Header cells, trimmed; null where there is no header. */
   header: string[] | null;
   /** Row number and byte of the first row of readings. */

@@ -15,6 +15,10 @@ import { previewRows } from './preview-rows.ts';
 
 const WALL_CLOCKS = new Set(['stamp', 'date-time', 'unix', 'serial']);
 
+/** More readings of another form than this are a way of writing. */
+const FEW = 2;
+const FEW_SHARE = 0.02;
+
 /** What is told of a log that was read: its series, and everything set aside or put right. */
 export function buildReading(
   file: LogFile,
@@ -37,7 +41,7 @@ export function buildReading(
   );
   const warnings = [
     ...early,
-    ...rowWarnings(store, facts, place, own),
+    ...rowWarnings(layout, store, facts, place, own),
     ...findGaps(timesS, rows),
     ...findOddTimes(timesS, rows),
     ...findLoneReadings(temps, unit, rows),
@@ -74,6 +78,7 @@ function timesOf({ ticks, count }: RowStore): Float64Array {
 }
 
 function rowWarnings(
+  layout: Layout,
   store: RowStore,
   facts: RowFacts,
   place: number,
@@ -90,6 +95,12 @@ function rowWarnings(
   const again = facts.headersAgain;
   if (again.length > 0)
     warnings.push(warning('header-repeated', { row: again[0]!, say: again.length }));
+  const odd = facts.oddForms[place]!;
+  if (odd.row !== null && odd.count <= Math.max(FEW, store.count * FEW_SHARE)) {
+    const usual = layout.usualDecimals[place];
+    const at = { row: odd.row, column: own.name, value: String(usual), say: odd.count };
+    warnings.push(warning('odd-form', at));
+  }
   if (facts.convertedRow !== null) {
     warnings.push(warning('units-converted', { row: facts.convertedRow, value: own.unit ?? '' }));
   }

@@ -145,6 +145,7 @@ export class QuickClock {
       if (third > 60) cursor.good = false;
       return (first * 3600 + second * 60 + third) * TICKS_PER_S + this.readFraction();
     }
+    if (clock.kind === 'time-of-day' && !clock.minutesToo) cursor.good = false;
     const minutesFirst = clock.kind === 'minutes' && !clock.hoursFirst;
     const seconds = minutesFirst ? first * 60 + second : first * 3600 + second * 60;
     return seconds * TICKS_PER_S + this.readFraction();

@@ -12,7 +12,11 @@ export class QuickRow {
   ticks = 0;
   /** One a temperature column; NaN where its cell is empty. */
   readonly temps: Float64Array;
+  /** Decimals of each reading. */
+  readonly decimals: Int8Array;
   anyEmpty = false;
+  /** A reading has other decimals than its column's. */
+  anyOdd = false;
 
   private readonly cursor: ByteCursor;
   private readonly clock: QuickClock;
@@ -20,6 +24,9 @@ export class QuickRow {
   private readonly delimiter: number;
   private readonly bySpaces: boolean;
   private readonly suffix: Uint8Array;
+  /** Rows may end with a delimiter. */
+  private readonly mayTrail: boolean;
+  private readonly usualDecimals: Int8Array;
 
   /** @param suffix what follows the number in each cell of a temperature column */
   constructor(bytes: Uint8Array, { layout, actions }: RowPlan, suffix: Uint8Array) {
@@ -29,7 +36,10 @@ export class QuickRow {
     this.actions = actions;
     this.delimiter = layout.delimiter.charCodeAt(0);
     this.suffix = suffix;
+    this.mayTrail = layout.mostCells > actions.length;
     this.temps = new Float64Array(layout.tempColumns.length);
+    this.decimals = new Int8Array(layout.tempColumns.length);
+    this.usualDecimals = Int8Array.from(layout.usualDecimals);
   }
 
   /** Where the row that was read ends: the place of its line end. */
@@ -51,6 +61,7 @@ export class QuickRow {
     cursor.good = true;
     this.ticks = 0;
     this.anyEmpty = false;
+    this.anyOdd = false;
     let cells = 0;
     while (cells < width) {
       cursor.skipSpaces();
@@ -65,7 +76,7 @@ export class QuickRow {
         if (before !== SPACE && before !== TAB) return false;
         continue;
       }
-      if (byte !== this.delimiter) return false;
+      if (byte !== this.delimiter || (cells === width && !this.mayTrail)) return false;
       cursor.at++;
     }
     return cells === width && this.atLineEnd();
@@ -115,10 +126,13 @@ export class QuickRow {
     const byte = cursor.at < cursor.end ? bytes[cursor.at]! : LF;
     if (byte === this.delimiter || byte === LF || byte === CR) {
       this.temps[place] = NaN;
+      this.decimals[place] = -1;
       this.anyEmpty = true;
       return;
     }
     this.temps[place] = cursor.readNumber();
+    this.decimals[place] = cursor.decimals;
+    if (cursor.decimals !== this.usualDecimals[place]) this.anyOdd = true;
     for (let i = 0; i < suffix.length; i++) cursor.expect(suffix[i]!);
   }
 }

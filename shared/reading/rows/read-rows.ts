@@ -27,6 +27,8 @@ export type RowFacts = {
   headersAgain: number[];
   convertedRow: number | null;
   bareRow: number | null;
+  /** Readings with other decimals than their column's, by temperature column. */
+  oddForms: { count: number; row: number | null }[];
   /** What the first reading's zone adds, for the wall clock. */
   offsetTicks: number;
   /** Rows read by the careful reader. */
@@ -49,6 +51,7 @@ class RowsReader {
     headersAgain: [],
     convertedRow: null,
     bareRow: null,
+    oddForms: [],
     offsetTicks: 0,
     carefulRows: 0,
   };
@@ -60,6 +63,7 @@ class RowsReader {
     const { text, layout } = input;
     this.input = input;
     this.plan = planRow(layout);
+    this.facts.oddForms = layout.tempColumns.map(() => ({ count: 0, row: null }));
     const lineBytes = Math.max(4, lineEnd(text.bytes, layout.firstByte) - layout.firstByte);
     const likely = Math.ceil((text.bytes.length / lineBytes) * 1.05);
     this.store = new RowStore(layout.tempColumns.length, likely);
@@ -105,12 +109,23 @@ class RowsReader {
     const { temps } = quick;
     for (let k = 0; k < temps.length; k++) store.temps[k]![n] = temps[k]!;
     if (quick.anyEmpty) this.noteEmpty(temps, row);
+    if (quick.anyOdd) this.noteOdd(quick.decimals, row);
     store.count = n + 1;
   }
 
   private noteEmpty(temps: Float64Array, row: number): void {
     for (let k = 0; k < temps.length; k++) {
       if (Number.isNaN(temps[k])) this.store.noReading[k]!.add(row, SKIP_WORDS.noReading(''));
+    }
+  }
+
+  private noteOdd(decimals: ArrayLike<number>, row: number): void {
+    const { usualDecimals } = this.plan.layout;
+    for (const [k, form] of this.facts.oddForms.entries()) {
+      const usual = usualDecimals[k]!;
+      if (usual < 0 || decimals[k]! < 0 || decimals[k] === usual) continue;
+      form.count++;
+      form.row ??= row;
     }
   }
 
@@ -162,6 +177,7 @@ class RowsReader {
       const why = read.whyNot[k];
       if (why) store.noReading[k]!.add(row, why);
     }
+    this.noteOdd(read.decimals, row);
     store.count = n + 1;
     return null;
   }
@@ -176,6 +192,7 @@ function rejection(cells: string[], unclosed: boolean, layout: Layout, read: Slo
   if (cells.length < layout.neededCells || filled > width) {
     return SKIP_WORDS.cellCount(Math.max(filled, Math.min(cells.length, width)), width);
   }
+  if (cells.length > layout.mostCells) return SKIP_WORDS.cellCount(cells.length, width);
   return null;
 }
 

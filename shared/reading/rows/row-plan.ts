@@ -39,4 +39,3 @@ export function numberTicks(clock: Clock, value: number): number {
   // 0.1 s is 100,000 µs; the product may miss it by its last bit
   return Math.abs(ticks - whole) < 1e-4 ? whole : ticks;
 }
-

@@ -1,4 +1,4 @@
-import { parseNumber, plain } from '../cells/parse-number.ts';
+import { decimalsOf, parseNumber, plain } from '../cells/parse-number.ts';
 import {
   parseClock,
   parseDate,
@@ -26,6 +26,8 @@ export type SlowRow = {
   converted: boolean;
   /** A cell without a unit in a column whose cells say theirs. */
   bareTemps: boolean;
+  /** Decimals of each reading; -1 where there is none. */
+  decimals: number[];
 };
 
 /** Reads one row's cells by the layout, in every writing that the cell parsers know. */
@@ -40,6 +42,7 @@ export function readSlowRow(cells: string[], plan: RowPlan, rowOrder: number): S
     tooLargeColumn: null,
     converted: false,
     bareTemps: false,
+    decimals: [],
   };
   readTime(cells, plan, rowOrder, row);
   for (const column of layout.tempColumns) readTemp(cells[column] ?? '', layout, column, row);
@@ -84,6 +87,7 @@ const HOURS = /^(\d{1,4}):(\d{2}):(\d{2})(?:[.,:](\d{1,9}))?$/;
 
 function clockTicksOf(text: string, { clock, decimal }: Layout): number {
   if (clock.kind === 'time-of-day' || clock.kind === 'minutes') {
+    if (clock.kind === 'time-of-day' && !clock.minutesToo && MINUTES.test(text)) return NaN;
     return timeTicks(text, clock.kind === 'minutes' && !clock.hoursFirst);
   }
   const number = parseNumber(text, decimal);
@@ -125,6 +129,7 @@ function readTemp(cell: string, layout: Layout, column: number, row: SlowRow): v
     why = number.kind === 'text' ? SKIP_WORDS.notANumber(text) : noReading(text);
   }
   row.temps.push(temp);
+  row.decimals.push(Number.isNaN(temp) ? -1 : decimalsOf(cell, layout.decimal));
   row.whyNot.push(why);
 }
 

@@ -4,13 +4,17 @@ import type { Place } from './place.ts';
 /** What was put right or is worth knowing, in words. */
 export const WARNING_WORDS = {
   'utf-16-guessed': () => 'Read as UTF-16: the file has no mark that says so.',
-  'nul-tail': ({ say }) => `${say} zero bytes at the end were left out.`,
+  'nul-tail': ({ say }) =>
+    `${say === 1 ? '1 zero byte at the end was' : `${say} zero bytes at the end were`} left out.`,
   'truncated-line': ({ row }) => `The last line, row ${row}, is cut off and was set aside.`,
   'no-last-line-end': ({ row }) => `Row ${row}, the last, has no line end: check that it is whole.`,
   reversed: () => 'The file runs from newest to oldest; it was turned round.',
-  reordered: ({ say }) => `${say} rows stood out of order and were put in order of time.`,
+  reordered: ({ say }) =>
+    `${say === 1 ? '1 row' : `${say} rows`} stood out of order and ${say === 1 ? 'was' : 'were'} put in order of time.`,
   'duplicates-dropped': ({ say, row }) =>
-    `${say} repeated rows were left out, the first in row ${row}.`,
+    say === 1
+      ? `Row ${row} repeats an earlier row and was left out.`
+      : `${say} repeated rows were left out, the first in row ${row}.`,
   'spread-in-stamp': ({ say }) => `Rows with the same stamp were spread evenly within ${say}.`,
   midnight: ({ row }) => `The clock passes midnight in row ${row}.`,
   'clock-change': ({ row, say }) =>
@@ -41,7 +45,7 @@ export const WARNING_WORDS = {
   'clock-doubtful': ({ say }) =>
     `By the clock of the file a reading comes every ${say}: check the unit of its times.`,
   gap: ({ row, say }) => `Nothing was recorded for ${say} before row ${row}.`,
-  'more-gaps': ({ say }) => `${say} more gaps.`,
+  'more-gaps': ({ say }) => `There ${say === 1 ? 'is 1 more gap' : `are ${say} more gaps`}.`,
   'header-repeated': ({ row, say }) =>
     say === 1
       ? `The header comes again once, in row ${row}.`

@@ -40,6 +40,7 @@ function bothReaders(bytes: Uint8Array) {
       unread: store.unread.rows,
       noReading: store.noReading.map(({ rows: list }) => list),
       offsetTicks: rows.facts.offsetTicks,
+      oddForms: rows.facts.oddForms,
     };
   });
 }
