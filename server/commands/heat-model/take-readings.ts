@@ -50,23 +50,54 @@ export function takeProbeReadings(run: ModelRun, method: ProbeMethod, random: Ra
   return readings;
 }
 
+/** How a person reads a display against a stopwatch. */
+export type HandMethod = {
+  /** Usual time between two readings, s, and how much it varies either way. */
+  spacingS: number;
+  hurryS: number;
+  /** Rounding of the display, °F. */
+  step: number;
+  noiseK: number;
+  /** Share of the turns near which one more reading is taken. */
+  nearTurns: number;
+};
+
+export const BY_HAND: HandMethod = {
+  spacingS: 15,
+  hurryS: 5,
+  step: 1,
+  noiseK: 0.1,
+  nearTurns: 0.85,
+};
+
 /**
  * A person with a thermometer and a stopwatch: a reading every 10 to 20 s in whole °F, and one more soon after most
  * turns, since the eye sees the needle stop.
  */
-export function takeHandReadings(run: ModelRun, turns: TrueTurn[], random: Random): Readings {
+export function takeHandReadings(
+  run: ModelRun,
+  turns: TrueTurn[],
+  random: Random,
+  method: HandMethod = BY_HAND,
+): Readings {
   const endS = (run.probeC.length - 1) * STEP_S;
+  const { spacingS, hurryS, step, noiseK } = method;
   const moments = [0];
   let nextS = 0;
-  while ((nextS += random.between(10, 20)) <= endS) moments.push(nextS);
+  while ((nextS += random.between(spacingS - hurryS, spacingS + hurryS)) <= endS) {
+    moments.push(nextS);
+  }
   for (const turn of turns) {
-    if (random.chance(0.85)) moments.push(turn.timeS + random.between(-1.5, 2.5));
+    if (random.chance(method.nearTurns)) moments.push(turn.timeS + random.between(-1.5, 2.5));
   }
   const timesS = spread(moments.map(Math.round), endS);
   const temps = timesS.map((timeS) =>
     roundTo(
-      fromCelsius(probeAt(run, timeS + random.between(-0.4, 0.4)) + 0.1 * random.gaussian(), 'F'),
-      1,
+      fromCelsius(
+        probeAt(run, timeS + random.between(-0.4, 0.4)) + noiseK * random.gaussian(),
+        'F',
+      ),
+      step,
     ),
   );
   return { unit: 'F', timesS, temps };

@@ -1,5 +1,5 @@
-import type { ModelRun } from './simulate-run.ts';
-import { STEP_S } from './simulate-run.ts';
+import type { Switch } from './controls.ts';
+import { STEP_S, type ModelRun } from './simulate-run.ts';
 
 export type TrueTurn = {
   kind: 'cut-out' | 'reset';
@@ -12,28 +12,49 @@ export type TrueTurn = {
   flatToS: number;
 };
 
+/** Any extreme of the noise-free probe, and the change of the heater that made it; null where the air did. */
+export type TrueExtreme = {
+  kind: 'peak' | 'valley';
+  timeS: number;
+  tempC: number;
+  index: number;
+  cause: Switch | null;
+};
+
 /**
  * The turning points of the noise-free probe: extremes that stand out from both sides by the threshold. A turn that a
- * person or a one-shot part made does not count, and the first rise from cold starts no reset.
+ * person, a one-shot part or the air alone made does not count, and the first rise from cold starts no reset.
  */
 export function trueTurningPoints(run: ModelRun, swingK: number): TrueTurn[] {
   const turns: TrueTurn[] = [];
-  for (const { index, isPeak } of extremes(run.probeC, swingK)) {
-    const timeS = index * STEP_S;
-    const cause = run.switches.findLast(
-      (change) => change.timeS <= timeS && change.changeW < 0 === isPeak,
-    );
+  for (const { kind, timeS, tempC, index, cause } of trueExtremes(run, swingK)) {
     if (!cause || cause.cause === 'person' || cause.cause === 'one-shot') continue;
-    if (!isPeak && turns.length === 0) continue;
+    if (kind === 'valley' && turns.length === 0) continue;
     turns.push({
-      kind: isPeak ? 'cut-out' : 'reset',
+      kind: kind === 'peak' ? 'cut-out' : 'reset',
       timeS,
-      tempC: run.probeC[index] ?? 0,
+      tempC,
       switchTimeS: cause.timeS,
       ...flatSpan(run.probeC, index),
     });
   }
   return turns;
+}
+
+/** All extremes that stand out from both sides by the threshold, whatever made them, in time order. */
+export function trueExtremes(run: ModelRun, swingK: number): TrueExtreme[] {
+  let usedS = -Infinity;
+  return extremes(run.probeC, swingK).map(({ index, isPeak }) => {
+    const timeS = index * STEP_S;
+    const last = run.switches.findLast(
+      (change) => change.timeS <= timeS && change.changeW < 0 === isPeak,
+    );
+    // A change that an earlier extreme has answered already makes no second one.
+    const cause = last && last.timeS > usedS ? last : null;
+    if (cause) usedS = cause.timeS;
+    const tempC = run.probeC[index] ?? 0;
+    return { kind: isPeak ? 'peak' : 'valley', timeS, tempC, index, cause };
+  });
 }
 
 function extremes(tempsC: Float64Array, swingK: number): { index: number; isPeak: boolean }[] {
@@ -57,7 +78,8 @@ function extremes(tempsC: Float64Array, swingK: number): { index: number; isPeak
   return found;
 }
 
-function flatSpan(tempsC: Float64Array, at: number): { flatFromS: number; flatToS: number } {
+/** The span around an index in which the probe stays within 0.25 °F of what it shows there. */
+export function flatSpan(tempsC: Float64Array, at: number): { flatFromS: number; flatToS: number } {
   const near = (i: number) => Math.abs((tempsC[i] ?? Infinity) - tempsC[at]!) <= 0.25 / 1.8;
   let from = at;
   let to = at;

@@ -1,115 +1,81 @@
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
-import type { AnalysisInput, FindingCode } from '#shared/analysis/analysis.ts';
-import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
-import type { Mark } from '#shared/analysis/series.ts';
-import { createRandom } from '#server/commands/heat-model/random.ts';
-import { simulateRun, type ModelRun } from '#server/commands/heat-model/simulate-run.ts';
-import { trueTurningPoints } from '#server/commands/heat-model/true-turning-points.ts';
-import { matchTurns, type FoundTurn } from './match-turns.ts';
-import { METHODS, type Method } from './methods.ts';
+import { addCodes, addTurns, isRightSet } from './add-run.ts';
+import { readArguments, type AccuracyArguments } from './arguments.ts';
+import { inspectRun } from './inspect-run.ts';
+import { makeRuns, type ReadRun } from './make-runs.ts';
 import { findPeaksPlainly, judgePlainly } from './peak-finder.ts';
-import { plansOf, type Plan } from './plans.ts';
-import { emptyTally, printTallies, type Tally } from './tally.ts';
-import { trueCodes } from './true-codes.ts';
-import { seriesOf } from './story-input.ts';
+import { LEGEND, printRows } from './print-table.ts';
+import { addTally, emptyTally, type Tally } from './tally.ts';
+import { trueCodes, type TrueCodes } from './truth/true-codes.ts';
 
-const ACCURACY_F = 2;
-/** Seeds from 1 are for tuning; those reported are from here on. */
-const REPORTED_FROM = 101;
-
-/** Arguments: number of seeds (default 3), first seed, and `wrong` to list each wrong headline. */
+/** The engine, and beside it the plain peak finder, on seeded runs with known truth; see README.md. */
 export function bench(args: string[]): void {
-  const seeds = Number(args[0] ?? 3);
-  const from = Number(args[1] ?? REPORTED_FROM);
-  const tallies = METHODS.map(({ name }) => ({ name, ours: emptyTally(), plain: emptyTally() }));
-  for (let seed = from; seed < from + seeds; seed++) {
-    for (const plan of plansOf(seed)) judgePlan(plan, seed, tallies, args.includes('wrong'));
+  const asked = readArguments(args);
+  if (asked.inspect) {
+    for (const run of makeRuns(asked)) inspectRun(run);
+    return;
   }
-  printTallies(tallies, `seeds ${from} to ${from + seeds - 1}`);
+  const tables = createTables();
+  for (const run of makeRuns(asked)) judgeRun(run, tables, asked);
+  printTables(tables, asked);
 }
 
-type Named = { name: string; ours: Tally; plain: Tally };
+type Table = Map<string, Tally>;
+type Tables = { methods: Table; codes: Table; plans: Table; plain: Table; plainCodes: Table };
 
-function judgePlan(plan: Plan, seed: number, tallies: Named[], list: boolean): void {
-  const run = simulateRun(plan.machine, plan.faults, plan.watch, createRandom(seed));
-  const needed = trueTurningPoints(run, 4.6 / 1.8);
-  const accepted = trueTurningPoints(run, 3.4 / 1.8);
-  const truth = trueCodes(plan, trueTurningPoints(run, 4 / 1.8));
-  const input = inputOf(plan, run);
-  METHODS.forEach((method, m) => {
-    const tally = tallies[m]!;
-    const random = createRandom(seed * 7919 + m);
-    const series = seriesOf(method.read(run, accepted, random));
-    const analysis = analyseRun(series, input);
-    const headline = analysis.findings[0]!.code;
-    addTurns(tally.ours, [...analysis.cutOuts, ...analysis.resets], { needed, accepted, method });
-    addHeadline(tally.ours, headline, truth);
-    const peaks = findPeaksPlainly(series);
-    addTurns(tally.plain, peaks, { needed, accepted, method });
-    addHeadline(tally.plain, judgePlainly(series, peaks), truth);
-    if (list && !truth.allowed.includes(headline)) {
-      console.log(
-        `seed ${seed} ${plan.name}, ${method.name}: ${analysis.findings.map(({ code }) => code).join(' ')} for ${truth.allowed.join('/')}`,
-      );
-    }
-  });
+function createTables(): Tables {
+  const table = (): Table => new Map();
+  return { methods: table(), codes: table(), plans: table(), plain: table(), plainCodes: table() };
 }
 
-export function inputOf(plan: Plan, run: ModelRun): AnalysisInput {
-  const clicks = plan.clicksMarked ? run.clicksS : [];
-  const marks: Mark[] = clicks.map((timeS) => ({ timeS, kind: 'click' }));
-  if (run.heatOffS !== null) marks.push({ timeS: run.heatOffS, kind: 'heat-off' });
-  return {
-    rating: DEFAULT_RATING,
-    probe: {
-      accuracyK: ACCURACY_F / 1.8,
-      calibrationUK: 0,
-      correction: null,
-      responseS: plan.machine.probeLagS,
-    },
-    marks,
-    load: plan.load,
-    roomC: plan.machine.roomC,
-    minCycles: 3,
-    swingK: 4 / 1.8,
-    reference: null,
-  };
+function judgeRun(run: ReadRun, tables: Tables, asked: AccuracyArguments): void {
+  const { seen, series, input } = run;
+  const truth = trueCodes(seen);
+  const code = truth.expected[0] ?? 'near a limit';
+
+  const analysis = analyseRun(series, input);
+  const found = analysis.findings.map((finding) => finding.code);
+  const ours = emptyTally();
+  addTurns(ours, [...analysis.cutOuts, ...analysis.resets], seen);
+  addCodes(ours, found, truth);
+  addTo(tables.methods, seen.method.name, ours);
+  addTo(tables.codes, code, ours);
+  addTo(tables.plans, seen.plan.name, ours);
+
+  const peaks = findPeaksPlainly(series);
+  const plain = emptyTally();
+  addTurns(plain, peaks, seen);
+  addCodes(plain, [judgePlainly(series, peaks, input)], truth);
+  addTo(tables.plain, seen.method.name, plain);
+  addTo(tables.plainCodes, code, plain);
+  if (asked.wrong) tellWrong(run, found, truth);
 }
 
-type Truth = {
-  needed: Parameters<typeof matchTurns>[1];
-  accepted: Parameters<typeof matchTurns>[2];
-  method: Method;
-};
-
-function addTurns(tally: Tally, found: FoundTurn[], { needed, accepted, method }: Truth): void {
-  const { pairs, hits, missed, invented } = matchTurns(found, needed, accepted, method.withinS);
-  tally.hits += hits;
-  tally.missed += missed;
-  tally.invented += invented;
-  for (const { truth, point } of pairs) {
-    const errorF = Math.abs(point.tempC - truth.tempC) * 1.8;
-    tally.errorsF.push(errorF);
-    if (point.uK !== undefined) {
-      tally.uF.push(point.uK * 1.8);
-      if (errorF <= point.uK * 1.8) tally.covered++;
-    }
-    if (typeof point.switchTimeS === 'number') {
-      tally.switchErrorsS.push(Math.abs(point.switchTimeS - truth.switchTimeS));
-    }
-  }
+function addTo(table: Table, name: string, tally: Tally): void {
+  const sum = table.get(name) ?? emptyTally();
+  addTally(sum, tally);
+  table.set(name, sum);
 }
 
-function addHeadline(
-  tally: Tally,
-  headline: FindingCode,
-  truth: ReturnType<typeof trueCodes>,
-): void {
-  tally.runs++;
-  if (truth.allowed.includes(headline)) tally.right++;
-  if (truth.faulty && headline === 'in-band') tally.falselyInBand++;
-  const unnamed: FindingCode[] = ['in-band', 'too-close', 'too-short', 'mixed'];
-  if (truth.sound && !unnamed.includes(headline)) tally.falseAlarms++;
-  if (headline === 'runaway' && !truth.allowed.includes('runaway')) tally.falseRunaways++;
-  if (headline !== 'runaway' && truth.allowed[0] === 'runaway') tally.missedRunaways++;
+function tellWrong({ seed, seen }: ReadRun, found: string[], truth: TrueCodes): void {
+  const headline = truth.headlines.some((code) => code === found[0]);
+  if (headline && isRightSet(found as TrueCodes['expected'], truth)) return;
+  const right = `${truth.expected.join(' ')}${truth.allowed.length > 0 ? ` (or ${truth.allowed.join(' ')})` : ''}`;
+  console.log(
+    `${headline ? 'set ' : 'HEAD'} seed ${seed} "${seen.plan.name}", ${seen.method.name}: ${found.join(' ')} for ${right}`,
+  );
+}
+
+function printTables(tables: Tables, { from, seeds, plans }: AccuracyArguments): void {
+  const rows = (table: Table) => [...table].map(([name, tally]) => ({ name, tally }));
+  console.log(`\naccuracy, seeds ${from} to ${from + seeds - 1}\n${LEGEND}`);
+  printRows('engine, by method', rows(tables.methods));
+  printRows('engine, by expected headline', rows(tables.codes).sort(byName), false);
+  if (plans) printRows('engine, by plan', rows(tables.plans), false);
+  printRows('plain peak finder, by method', rows(tables.plain));
+  printRows('plain peak finder, by headline', rows(tables.plainCodes).sort(byName), false);
+}
+
+function byName(a: { name: string }, b: { name: string }): number {
+  return a.name < b.name ? -1 : 1;
 }

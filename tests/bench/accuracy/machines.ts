@@ -1,8 +1,17 @@
 import { toCelsius } from '#shared/units.ts';
-import { ELECTRIC, GAS, SOUND, type Machine } from '#server/commands/heat-model/machine.ts';
+import {
+  ELECTRIC,
+  GAS,
+  SOUND,
+  type Faults,
+  type Machine,
+} from '#server/commands/heat-model/machine.ts';
 import { createRandom, type Random } from '#server/commands/heat-model/random.ts';
-import { simulateRun } from '#server/commands/heat-model/simulate-run.ts';
+import { simulateRun, type ModelRun } from '#server/commands/heat-model/simulate-run.ts';
 import { trueTurningPoints } from '#server/commands/heat-model/true-turning-points.ts';
+
+/** A temperature that nothing in a machine reaches, °C. */
+export const NEVER_C = 600;
 
 /** A machine of its own, empty, with the usual spread of sizes, air and lags. */
 export function randomMachine(random: Random): Machine {
@@ -26,6 +35,47 @@ export function randomMachine(random: Random): Machine {
   };
 }
 
+/** A machine with heat to spare: it gets past its thermostat when that does not open. */
+export function hotMachine(random: Random): Machine {
+  return { ...randomMachine(random), powerW: 6000, airKgPerS: 0.064, leak: 0.06 };
+}
+
+/** An electric one with heat to spare: a grounded coil goes on heating it at once. */
+export function hotElectric(random: Random): Machine {
+  return { ...hotMachine(random), relightS: 0 };
+}
+
+/** The machine with a thermostat that never opens. */
+export function neverOpening(machine: Machine): Machine {
+  return { ...machine, disc: { ...machine.disc, opensC: NEVER_C } };
+}
+
+/** Nor anything else that could cut the heat. */
+export function nothingOpening(machine: Machine): Machine {
+  return {
+    ...neverOpening(machine),
+    boxLimit: { ...machine.boxLimit, opensC: NEVER_C },
+    fuse: { ...machine.fuse, opensC: NEVER_C },
+  };
+}
+
+/**
+ * Power at which the outlet levels off at a temperature, W: an empty machine's rise is proportional to its power, so
+ * one long run tells it.
+ */
+export function powerForLevel(machine: Machine, levelF: number): number {
+  const watch = { forS: 4000, heatOffAtC: Infinity, afterHeatOffS: 0 };
+  const run = simulateRun(nothingOpening(machine), SOUND, watch, createRandom(1));
+  const levelC = run.outletC.at(-1) ?? machine.roomC;
+  return (machine.powerW * (toCelsius(levelF, 'F') - machine.roomC)) / (levelC - machine.roomC);
+}
+
+/** The run of a machine that nobody turns off, without chance in it. */
+export function unattended(machine: Machine, faults: Faults, forS = 1800): ModelRun {
+  const watch = { forS, heatOffAtC: Infinity, afterHeatOffS: 0 };
+  return simulateRun(machine, { ...faults, scatterK: 0 }, watch, createRandom(1));
+}
+
 /**
  * The disc that makes the *exhaust* of a sound machine turn at the given temperatures, °F: what the probe shows
  * runs ahead of the disc by an amount that differs from machine to machine.
@@ -39,7 +89,7 @@ export function withTurnsAt(
   let disc = { ...aimC, lagS: random.between(3, 10) };
   for (let round = 0; round < 4; round++) {
     const found = usualTurns({ ...machine, disc });
-    if (!found) break;
+    if (!found || areNear(found, aimC)) break;
     disc = {
       ...disc,
       opensC: disc.opensC + aimC.opensC - found.cutOutC,
@@ -49,9 +99,15 @@ export function withTurnsAt(
   return { ...machine, disc };
 }
 
+function areNear(
+  found: { cutOutC: number; resetC: number },
+  aimC: { opensC: number; closesC: number },
+) {
+  return Math.abs(found.cutOutC - aimC.opensC) < 0.1 && Math.abs(found.resetC - aimC.closesC) < 0.1;
+}
+
 function usualTurns(machine: Machine): { cutOutC: number; resetC: number } | null {
-  const watch = { forS: 1500, heatOffAtC: Infinity, afterHeatOffS: 0 };
-  const turns = trueTurningPoints(simulateRun(machine, SOUND, watch, createRandom(1)), 1);
+  const turns = trueTurningPoints(unattended({ ...machine, waterKg: 0 }, SOUND, 1300), 1);
   const cutOut = turns.findLast(({ kind }) => kind === 'cut-out');
   const reset = turns.findLast(({ kind }) => kind === 'reset');
   return cutOut && reset ? { cutOutC: cutOut.tempC, resetC: reset.tempC } : null;

@@ -1,14 +1,20 @@
-import type { FindingCode } from '#shared/analysis/analysis.ts';
+import type { AnalysisInput, FindingCode } from '#shared/analysis/analysis.ts';
+import { bandOf } from '#shared/analysis/judge-point.ts';
+import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import type { Series } from '#shared/analysis/series.ts';
-import { fromCelsius } from '#shared/units.ts';
+import { middle } from './truth/true-points.ts';
 import type { FoundTurn } from './match-turns.ts';
 
+/** Half the width of the moving average, s, and the prominence asked for, K: the best of those tried on seeds 1–10. */
+const HALF_WIDTH_S = 2.5;
+const PROMINENCE_K = 4 / 1.8;
+
 /**
- * The thing to beat: a moving average of 5 s, peaks and valleys by prominence, and plain thresholds on them. It is what
- * a general-purpose peak finder with a page of rules would say.
+ * The thing to beat: a median of three against wild readings, a moving average, peaks and valleys by prominence. It is
+ * what a general-purpose peak finder with a page of rules would do.
  */
 export function findPeaksPlainly({ timesS, tempsC }: Series): FoundTurn[] {
-  const smoothC = movingAverage(timesS, tempsC, 2.5);
+  const smoothC = movingAverage(timesS, medianOfThree(tempsC), HALF_WIDTH_S);
   const found: FoundTurn[] = [];
   let low = 0;
   let high = 0;
@@ -16,12 +22,12 @@ export function findPeaksPlainly({ timesS, tempsC }: Series): FoundTurn[] {
   smoothC.forEach((tempC, i) => {
     if (tempC > smoothC[high]!) high = i;
     if (tempC < smoothC[low]!) low = i;
-    if (direction >= 0 && smoothC[high]! - tempC >= 4 / 1.8) {
+    if (direction >= 0 && smoothC[high]! - tempC >= PROMINENCE_K) {
       if (direction === 1)
         found.push({ kind: 'cut-out', timeS: timesS[high]!, tempC: smoothC[high]! });
       direction = -1;
       low = i;
-    } else if (direction <= 0 && tempC - smoothC[low]! >= 4 / 1.8) {
+    } else if (direction <= 0 && tempC - smoothC[low]! >= PROMINENCE_K) {
       if (direction === -1 && found.length > 0)
         found.push({ kind: 'reset', timeS: timesS[low]!, tempC: smoothC[low]! });
       direction = 1;
@@ -29,6 +35,14 @@ export function findPeaksPlainly({ timesS, tempsC }: Series): FoundTurn[] {
     }
   });
   return found;
+}
+
+function medianOfThree(tempsC: Float64Array): Float64Array {
+  return tempsC.map((tempC, i) => {
+    const before = tempsC[i - 1] ?? tempC;
+    const after = tempsC[i + 1] ?? tempC;
+    return Math.max(Math.min(before, tempC), Math.min(Math.max(before, tempC), after));
+  });
 }
 
 function movingAverage(timesS: Float64Array, tempsC: Float64Array, halfS: number): Float64Array {
@@ -42,27 +56,57 @@ function movingAverage(timesS: Float64Array, tempsC: Float64Array, halfS: number
   });
 }
 
-/** A headline by plain thresholds on the peaks, °F, for the default rating. */
-export function judgePlainly(series: Series, turns: FoundTurn[]): FindingCode {
-  const tempsF = Array.from(series.tempsC, (tempC) => fromCelsius(tempC, 'F'));
+const K_PER_F = 1 / 1.8;
+
+/** A headline by plain thresholds on the peaks and the rating. */
+export function judgePlainly(
+  series: Series,
+  turns: FoundTurn[],
+  input: AnalysisInput,
+): FindingCode {
+  const rating = input.rating ?? DEFAULT_RATING;
+  const opens = bandOf('cut-out', rating);
+  const closes = bandOf('reset', rating);
   const of = (kind: FoundTurn['kind']) =>
-    turns.filter((turn) => turn.kind === kind).map(({ tempC }) => fromCelsius(tempC, 'F'));
+    turns.filter((turn) => turn.kind === kind).map(({ tempC }) => tempC);
   const cutOuts = of('cut-out');
   const resets = of('reset');
-  const highest = Math.max(...tempsF);
-  if (highest > 177) return 'runaway';
-  if (highest - (tempsF[0] ?? 0) < 15) return 'no-heat';
+  const seconds = series.timesS.at(-1) ?? 0;
+  const smoothC = medianOfThree(series.tempsC);
+  const highestC = smoothC.reduce((high, tempC) => Math.max(high, tempC), -Infinity);
+  const lastC = smoothC.at(-1) ?? 0;
+  if (highestC > opens.highEndC + 3 * K_PER_F && highestC > Math.max(...cutOuts.slice(0, -1)) + 3)
+    return 'runaway';
+  if (seconds > 300 && highestC - (smoothC[0] ?? 0) < 15 * K_PER_F) return 'no-heat';
+  if (cutOuts.length > 0 && lastC < closes.lowEndC - 5 * K_PER_F) return 'heat-lost';
   if (cutOuts.length === 0)
-    return highest < 150 && series.timesS.length > 500 ? 'below-cut-out' : 'too-short';
-  if ((tempsF.at(-1) ?? 0) < 100) return 'heat-lost';
-  const meanOf = (values: number[]) =>
-    values.reduce((sum, value) => sum + value, 0) / values.length;
-  const spread = Math.max(...cutOuts) - Math.min(...cutOuts);
-  if (cutOuts.length > 8 && meanOf(cutOuts) < 145) return 'limit-cycling';
-  if (spread > 12) return 'scattered';
-  if (meanOf(cutOuts) > 165) return 'opens-high';
-  if (meanOf(cutOuts) < 150) return 'opens-low';
-  if (resets.length > 0 && meanOf(resets) > 135) return 'closes-high';
-  if (resets.length > 0 && meanOf(resets) < 120) return 'closes-low';
-  return cutOuts.length >= 2 && resets.length >= 1 ? 'in-band' : 'too-short';
+    return highestC < opens.lowC && seconds > 600 ? 'below-cut-out' : 'too-short';
+  return judgeTurns(cutOuts.length > 1 ? cutOuts.slice(1) : cutOuts, resets, rating);
+}
+
+function judgeTurns(
+  cutOuts: number[],
+  resets: number[],
+  rating: typeof DEFAULT_RATING,
+): FindingCode {
+  const opens = bandOf('cut-out', rating);
+  const closes = bandOf('reset', rating);
+  const opensC = meanOf(cutOuts);
+  const swingK = opensC - (resets.length > 0 ? middle(resets) : -Infinity);
+  if (cutOuts.length > 3 && opensC < opens.lowC && swingK < 0.7 * (rating.opensC - rating.closesC))
+    return 'limit-cycling';
+  const change = cutOuts.length > 3 ? cutOuts.at(-1)! - cutOuts[0]! : 0;
+  if (Math.abs(change) > rating.opensTolK) return 'drifting';
+  if (Math.max(...cutOuts) - Math.min(...cutOuts) > 12 * K_PER_F) return 'scattered';
+  if (opensC > opens.highEndC) return 'opens-high';
+  if (opensC < opens.lowEndC) return 'opens-low';
+  if (resets.length > 0 && meanOf(resets) > closes.highEndC) return 'closes-high';
+  if (resets.length > 0 && meanOf(resets) < closes.lowEndC) return 'closes-low';
+  if (cutOuts.length < 1 || resets.length < 1) return 'too-short';
+  const inside = opensC < opens.highC && meanOf(resets) > closes.lowC;
+  return inside ? 'in-band' : 'too-close';
+}
+
+function meanOf(values: number[]): number {
+  return values.reduce((sum, value) => sum + value, 0) / values.length;
 }

@@ -1,0 +1,135 @@
+import type { Mark } from '#shared/analysis/series.ts';
+import { STEP_S, type ModelRun } from '#server/commands/heat-model/simulate-run.ts';
+import {
+  flatSpan,
+  trueExtremes,
+  trueTurningPoints,
+  type TrueExtreme,
+  type TrueTurn,
+} from '#server/commands/heat-model/true-turning-points.ts';
+import type { Method } from './methods.ts';
+import type { Plan } from './plan.ts';
+
+/** The threshold of a turning point, and how near it either answer is accepted, K. */
+export const SWING_K = 4 / 1.8;
+const NEAR_K = 0.6 / 1.8;
+
+/** A run as one method's probe truly showed it, without noise, from the record's begin. */
+export type SeenRun = {
+  plan: Plan;
+  method: Method;
+  run: ModelRun;
+  marks: Mark[];
+  responseS: number;
+  /** Turning points at the threshold; those that must be found; those that may be. */
+  turns: TrueTurn[];
+  needed: TrueTurn[];
+  accepted: TrueTurn[];
+};
+
+export function seeRun(plan: Plan, whole: ModelRun, method: Method, lagS: number | null): SeenRun {
+  const responseS = lagS ?? plan.machine.probeLagS;
+  const shown = lagS === null ? whole : throughProbe(whole, lagS);
+  const run = cutRecord(shown, plan.recordFromS);
+  const clear = trueTurningPoints(run, Math.max(SWING_K + NEAR_K, method.neededSwingK));
+  const accepted = [
+    ...trueTurningPoints(run, SWING_K - NEAR_K),
+    ...alikeOneShots(run),
+    ...turnsOfTheAir(run),
+  ];
+  return {
+    plan,
+    method,
+    run,
+    responseS,
+    marks: marksOf(plan, run),
+    turns: trueTurningPoints(run, SWING_K),
+    needed: clear.filter((turn, i) => isResolved(turn, clear[i - 1], clear[i + 1], method)),
+    accepted: accepted.sort((a, b) => a.timeS - b.timeS),
+  };
+}
+
+/** The same run through another probe: a first-order lag behind the air at the outlet. */
+export function throughProbe(run: ModelRun, lagS: number): ModelRun {
+  const probeC = new Float64Array(run.outletC.length);
+  let tempC = run.outletC[0] ?? 0;
+  run.outletC.forEach((airC, i) => {
+    probeC[i] = tempC;
+    tempC += ((airC - tempC) / lagS) * STEP_S;
+  });
+  return { ...run, probeC };
+}
+
+/** The record that begins some time after the start; changes of the heater before it keep their (negative) times. */
+export function cutRecord(run: ModelRun, fromS: number): ModelRun {
+  if (fromS === 0) return run;
+  const first = Math.min(run.probeC.length - 2, Math.round(fromS / STEP_S));
+  const shiftS = first * STEP_S;
+  return {
+    probeC: run.probeC.slice(first),
+    outletC: run.outletC.slice(first),
+    switches: run.switches.map((change) => ({ ...change, timeS: change.timeS - shiftS })),
+    clicksS: run.clicksS.map((timeS) => timeS - shiftS).filter((timeS) => timeS >= 0),
+    heatOffS: run.heatOffS === null ? null : run.heatOffS - shiftS,
+  };
+}
+
+/** Marks as a person taps them: to the second. */
+function marksOf(plan: Plan, run: ModelRun): Mark[] {
+  const endS = (run.probeC.length - 1) * STEP_S;
+  const marks: Mark[] = plan.marks.map((mark) => ({
+    ...mark,
+    timeS: mark.timeS - plan.recordFromS,
+  }));
+  if (plan.clicksMarked)
+    marks.push(...run.clicksS.map((timeS): Mark => ({ timeS, kind: 'click' })));
+  if (run.heatOffS !== null) marks.push({ timeS: run.heatOffS, kind: 'heat-off' });
+  for (const { fromS } of plan.faults.doorOpen) {
+    marks.push({ timeS: fromS - plan.recordFromS, kind: 'door' });
+  }
+  return marks
+    .map((mark) => ({ ...mark, timeS: Math.round(mark.timeS) }))
+    .filter(({ timeS }) => timeS >= 0 && timeS <= endS)
+    .sort((a, b) => a.timeS - b.timeS);
+}
+
+/** Turns between which too few readings lie are not asked for. */
+function isResolved(
+  turn: TrueTurn,
+  before: TrueTurn | undefined,
+  after: TrueTurn | undefined,
+  { leastLegS }: Method,
+): boolean {
+  const sinceS = turn.timeS - (before?.timeS ?? -Infinity);
+  return sinceS >= leastLegS && (after?.timeS ?? Infinity) - turn.timeS >= leastLegS;
+}
+
+/** A one-shot part that opens where the machine's own cut-outs lie leaves no trace of what it was. */
+function alikeOneShots(run: ModelRun): TrueTurn[] {
+  const own = trueTurningPoints(run, SWING_K).filter(({ kind }) => kind === 'cut-out');
+  return trueExtremes(run, SWING_K - NEAR_K)
+    .filter(
+      ({ kind, cause, tempC }) =>
+        kind === 'peak' &&
+        cause?.cause === 'one-shot' &&
+        own.some((turn) => Math.abs(turn.tempC - tempC) < 5 / 1.8),
+    )
+    .map((extreme) => asTurn(run, extreme));
+}
+
+/** Turns that the air made while the heater did nothing: a blower that stops, a duct taken off, a drum that warms. */
+function turnsOfTheAir(run: ModelRun): TrueTurn[] {
+  return trueExtremes(run, SWING_K - NEAR_K)
+    .filter(({ cause }) => cause === null)
+    .map((extreme) => asTurn(run, extreme));
+}
+
+function asTurn(run: ModelRun, { kind, timeS, tempC, index, cause }: TrueExtreme): TrueTurn {
+  return {
+    kind: kind === 'peak' ? 'cut-out' : 'reset',
+    timeS,
+    tempC,
+    switchTimeS: cause?.timeS ?? timeS,
+    ...flatSpan(run.probeC, index),
+  };
+}
