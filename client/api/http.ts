@@ -27,12 +27,26 @@ const UNREACHABLE: Problem = {
   message: 'The shop’s server does not answer. Check the connection, then try again.',
 };
 
+/** Gives what lies on the device where the server cannot be asked. The customer's page goes without one. */
+export type Shelf = <T>(
+  url: string,
+  ask: () => Promise<unknown>,
+  check: (answer: unknown) => T,
+) => Promise<T>;
+
+let shelf: Shelf = async (_url, ask, check) => check(await ask());
+
+export function setShelf(next: Shelf): void {
+  shelf = next;
+}
+
 export async function fetchJson<T>(
   schema: Checker<T>,
   url: string,
   options: { signal?: AbortSignal } = {},
 ): Promise<T> {
-  return schema.parse(await answerOf(await send(url, options)));
+  const ask = async () => answerOf(await send(url, options));
+  return shelf(url, ask, (answer) => schema.parse(answer));
 }
 
 export async function postJson<T>(schema: Checker<T>, url: string, body?: unknown): Promise<T> {
@@ -62,9 +76,17 @@ export async function fetchBytes(
   url: string,
   options: { signal?: AbortSignal } = {},
 ): Promise<ArrayBuffer> {
-  const response = await send(url, options);
-  if (!response.ok) throw await refusalOf(response);
-  return response.arrayBuffer();
+  const ask = async () => {
+    const response = await send(url, options);
+    if (!response.ok) throw await refusalOf(response);
+    return response.arrayBuffer();
+  };
+  return shelf(url, ask, toBytes);
+}
+
+function toBytes(answer: unknown): ArrayBuffer {
+  if (answer instanceof ArrayBuffer) return answer;
+  throw new TypeError('what was kept is not octets');
 }
 
 function sendJson(method: string, url: string, body: unknown) {

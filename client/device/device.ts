@@ -1,6 +1,13 @@
 import type { SendingKind } from '#shared/schemas/sending-kinds.ts';
-import { openDeviceDb, type DeviceDb, type DevicePerson, type KeptThing } from './device-db.ts';
+import {
+  openDeviceDb,
+  type DeviceDb,
+  type DevicePerson,
+  type KeptSession,
+  type KeptThing,
+} from './device-db.ts';
 import { KeepError } from './keep-error.ts';
+import { createKeptAnswers } from './kept-answers.ts';
 import { createKeptThings, NO_THINGS, type Counts, type NewThing } from './kept-things.ts';
 
 /** What a page shows of the things on this device. */
@@ -25,6 +32,7 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
   let opening: Promise<DeviceDb> | null = null;
   const db = () => (opening ??= openDeviceDb(name, () => (opening = null)));
   const things = createKeptThings(db, nowMs);
+  const answers = createKeptAnswers(db, nowMs);
   const listeners = new Set<() => void>();
   let person: DevicePerson | null = null;
   let unsent = NOTHING;
@@ -51,18 +59,56 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
     await recount();
   }
 
+  /** Readings before convenience: in a full store, what was read makes room for what was made. */
+  async function keepWithRoom(personId: string, thing: NewThing): Promise<KeptThing> {
+    try {
+      return await things.keep(personId, thing);
+    } catch (error) {
+      if (!(error instanceof KeepError) || error.problem !== 'full') throw error;
+      await answers.clear();
+      return things.keep(personId, thing);
+    }
+  }
+
   channel?.addEventListener('message', () => void recount());
 
   return {
     db,
     things,
+    answers,
     changed,
     person: () => person,
 
-    /** From now on things are kept for, and sent by, this person. */
-    async setPerson(next: DevicePerson | null): Promise<void> {
+    /** From now on things are kept for, and sent by, this person. `answer`: what the server said of the session. */
+    async open(next: DevicePerson, answer: unknown): Promise<void> {
       person = next;
-      if (next) await (await db()).put('people', next);
+      const tx = (await db()).transaction(['people', 'session'], 'readwrite');
+      const session = { personId: next.id, fetchedAtMs: nowMs(), answer };
+      await Promise.all([
+        tx.objectStore('people').put(next),
+        tx.objectStore('session').put(session, 'session'),
+        tx.done,
+      ]);
+      await answers.sweep(next.id);
+      await recount();
+    },
+
+    /** The session as the server gave it last, for opening without it. */
+    async keptSession(): Promise<KeptSession | undefined> {
+      return (await db()).get('session', 'session');
+    },
+
+    /** As `open`, with what lies here already. */
+    async reopen(known: DevicePerson): Promise<void> {
+      person = known;
+      await recount();
+    },
+
+    /** Signed out: what was read goes, what is not sent stays for when the person comes back. */
+    async leave(): Promise<void> {
+      person = null;
+      await (await db()).delete('session', 'session');
+      await answers.clear();
       await recount();
     },
 
@@ -72,7 +118,7 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
      */
     async keep<Kind extends SendingKind>(thing: NewThing<Kind>): Promise<KeptThing> {
       if (!person) throw new KeepError('nobody');
-      const kept = await things.keep(person.id, thing);
+      const kept = await keepWithRoom(person.id, thing);
       // The thing is safe already: telling of it does not hold up whoever kept it.
       void changed();
       return kept;

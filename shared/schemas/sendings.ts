@@ -24,6 +24,8 @@ export type Thing = z.infer<typeof thingSchema>;
 
 export const sendingsSchema = z.object({
   deviceId: idSchema,
+  /** Whose things they are; the session may be somebody else's by now. Null: an older client, which did not say. */
+  personId: idSchema.nullable().default(null),
   clientVersion: z.string().max(40).default(''),
   /** Each is read on its own: one that cannot be read does not hold up the others. */
   things: z.array(z.unknown()).max(MOST_THINGS),
@@ -40,6 +42,8 @@ export type ThingAnswer = { id: string } & (
   /** Something that belongs before it has not come yet; the device keeps it and sends it again. */
   | { status: 'waiting'; message: string }
 );
+
+export type Sendings = z.input<typeof sendingsSchema>;
 
 export type SendingsAnswer = { serverNowMs: number; answers: ThingAnswer[] };
 

@@ -1,0 +1,70 @@
+import { ApiError, type Shelf } from '../api/http.ts';
+import type { AsOf } from './as-of.ts';
+import type { Device } from './device.ts';
+
+/** What the screens on site need; nothing else of the shop lies on a phone (ASVS 14.3.3). */
+const ON_SITE = [
+  /^\/api\/rounds(\?day=[\d-]+)?$/,
+  /^\/api\/(visits|machines|jobs|runs)\/[\w-]+$/,
+  /^\/api\/machines\/[\w-]+\/runs$/,
+  /^\/api\/runs\/[\w-]+\/trace\?columns=\d+$/,
+  /^\/api\/(ratings|probes|calibrations)$/,
+];
+
+/** On a bad line a page that lies here already is shown after so long; the line's answer follows when it comes. */
+const PATIENCE_MS = 4_000;
+
+/** Neither the server nor anything before it answered. A proxy says so with 502 to 504. */
+export function isAway(error: unknown): boolean {
+  return error instanceof ApiError && [0, 502, 503, 504].includes(error.status);
+}
+
+/** Keeps the server's answers as they come, and gives them where it cannot be asked. */
+export function createShelf(device: Device, asOf: AsOf, onLate: (url: string) => void): Shelf {
+  async function keep(url: string, answer: unknown): Promise<void> {
+    const person = device.person();
+    if (person) await device.answers.put(person.id, url, answer);
+  }
+
+  async function find<T>(url: string, check: (answer: unknown) => T) {
+    const person = device.person();
+    const kept = person ? await device.answers.find(person.id, url) : undefined;
+    if (!kept) return undefined;
+    try {
+      return { data: check(kept.answer), fetchedAtMs: kept.fetchedAtMs };
+    } catch {
+      // An older version put it there in another shape: as good as not kept.
+      return undefined;
+    }
+  }
+
+  return async (url, ask, check) => {
+    if (!ON_SITE.some((pattern) => pattern.test(url))) return check(await ask());
+    let isLate = false;
+    const asked = ask().then((answer) => {
+      const data = check(answer);
+      // Not waited for: a full store is no reason to hold an answer back.
+      keep(url, answer).catch(() => device.answers.clear());
+      asOf.set(url, null);
+      if (isLate) onLate(url);
+      return data;
+    });
+    const kept = await find(url, check);
+    if (!kept) return asked;
+    const served = () => {
+      asOf.set(url, kept.fetchedAtMs);
+      return kept.data;
+    };
+    const late = new Promise<typeof kept.data>((resolve) => {
+      const timer = setTimeout(() => {
+        isLate = true;
+        resolve(served());
+      }, PATIENCE_MS);
+      void asked.catch(() => {}).finally(() => clearTimeout(timer));
+    });
+    return Promise.race([late, asked]).catch((error: unknown) => {
+      if (isAway(error)) return served();
+      throw error;
+    });
+  };
+}
