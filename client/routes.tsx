@@ -96,6 +96,14 @@ const deskPages: RouteObject[] = [
     async () => (await import('./pages/ratings/probe-form-page.tsx')).EditProbePage,
     'probes/:id',
   ),
+  page(
+    async () => (await import('./pages/ratings/calibrations-page.tsx')).CalibrationsPage,
+    'probes/:id/calibrations',
+  ),
+  page(
+    async () => (await import('./pages/ratings/calibration-form-page.tsx')).NewCalibrationPage,
+    'probes/:id/calibrations/new',
+  ),
   page(async () => (await import('./pages/shop/shop-page.tsx')).ShopPage, 'shop'),
   page(
     async () => (await import('./pages/shop/add-person-page.tsx')).AddPersonPage,

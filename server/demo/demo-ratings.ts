@@ -1,3 +1,4 @@
+import type { NewCalibration } from '#shared/schemas/calibrations.ts';
 import type { NewProbe, NewRating } from '#shared/schemas/ratings.ts';
 
 /** All figures are invented for makes that do not exist. */
@@ -59,11 +60,39 @@ const probe = (name: string, accuracy: number, rest: Partial<DemoProbe>): DemoPr
 
 export const DEMO_PROBES: DemoProbe[] = [
   probe('K1', 2, { notes: 'Ada’s van' }),
-  probe('K2', 2, { notes: 'Tom’s van', daysAgo: 71 }),
+  probe('K2', 2, { notes: 'Tom’s van', calibrationU: null, daysAgo: null }),
   probe('V4', 4, {
     kind: 'other',
     notes: 'Spare: reads whole degrees',
     calibrationU: null,
     daysAgo: null,
   }),
+];
+
+/** How one of the probes was calibrated, by name. */
+export const DEMO_CALIBRATIONS: {
+  probe: string;
+  daysAgo: number;
+  calibration: Omit<NewCalibration, 'madeAtMs'>;
+}[] = [
+  {
+    probe: 'K2',
+    daysAgo: 71,
+    calibration: {
+      kind: 'ice-and-boiling',
+      unit: 'F',
+      points: [
+        { reference: null, readings: [31.9, 32.0, 31.9] },
+        { reference: null, readings: [211.1, 211.0, 211.2] },
+      ],
+      pressureHPa: 1009,
+      altitudeM: null,
+      referenceName: '',
+      referenceU: null,
+      resolution: 0.1,
+      drift: 1,
+      intervalMonths: 12,
+      notes: 'Kettle and flask on the bench',
+    },
+  },
 ];

@@ -3,7 +3,7 @@ import type { Machine } from '#shared/schemas/homes.ts';
 import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
 import { DEMO_HOMES, type DemoMachine } from './demo-homes.ts';
 import { DEMO_SHOP } from './demo-people.ts';
-import { DEMO_PROBES, DEMO_RATINGS } from './demo-ratings.ts';
+import { DEMO_CALIBRATIONS, DEMO_PROBES, DEMO_RATINGS } from './demo-ratings.ts';
 import { needed } from './seed-people.ts';
 
 const DAY_MS = 86_400_000;
@@ -30,6 +30,7 @@ export async function seedHomes(jobs: JobsWiring, nowMs: number): Promise<DemoTh
     const calibratedAtMs = daysAgo === null ? null : nowMs - daysAgo * DAY_MS;
     probes.set(probe.name, await jobs.probeService.create({ ...probe, calibratedAtMs }));
   }
+  await seedCalibrations(jobs, probes, nowMs);
   const machines = new Map<string, Machine>();
   for (const told of DEMO_HOMES) {
     const { customer: name, phone, notes, address, access } = told;
@@ -74,4 +75,16 @@ async function seedMachine(
     });
   }
   return created;
+}
+
+async function seedCalibrations(
+  jobs: JobsWiring,
+  probes: DemoThings['probes'],
+  nowMs: number,
+): Promise<void> {
+  for (const { probe, daysAgo, calibration } of DEMO_CALIBRATIONS) {
+    const { id } = needed(probes.get(probe), probe);
+    const madeAtMs = nowMs - daysAgo * DAY_MS;
+    await jobs.probeService.calibrate(id, { ...calibration, madeAtMs });
+  }
 }

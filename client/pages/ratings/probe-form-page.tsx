@@ -1,8 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
-import { useNavigate, useParams } from 'react-router-dom';
-import { z } from 'zod';
-import { newProbeSchema, PROBE_KINDS, type StoredProbe } from '#shared/schemas/ratings.ts';
-import { probesQuery, useSaveProbe } from '../../api/probes.ts';
+import { useParams } from 'react-router-dom';
+import { PROBE_KINDS, type StoredProbe } from '#shared/schemas/ratings.ts';
+import { probesQuery } from '../../api/probes.ts';
 import {
   Cells,
   PickField,
@@ -15,16 +14,9 @@ import { NothingHere } from '../../components/nothing-here.tsx';
 import { UnfetchedPage } from '../../components/waiting.tsx';
 import { FormFrame, FormHead } from '../../forms/form-frame.tsx';
 import { typedNumber } from '../../forms/typed-number.ts';
-import { useCheckedForm } from '../../forms/use-checked-form.ts';
 import { PROBE_KIND_WORDS } from '../../format/rating-words.ts';
-import { dayOf, instantAt } from '../../format/when.ts';
-import { useSession } from '../frame/session-context.ts';
-
-/** The day of the last calibration is typed as a day; noon in the shop's zone stands for it. */
-const typedProbeSchema = newProbeSchema
-  .omit({ calibratedAtMs: true })
-  .extend({ calibratedOn: z.string() });
-type TypedProbe = z.input<typeof typedProbeSchema>;
+import { ClassField } from './class-field.tsx';
+import { useProbeForm } from './use-probe-form.ts';
 
 export function NewProbePage() {
   return <ProbeForm probe={null} />;
@@ -38,40 +30,10 @@ export function EditProbePage() {
   return probe ? <ProbeForm probe={probe} /> : <NothingHere />;
 }
 
-function typedProbe(probe: StoredProbe | null, unit: 'F' | 'C', zone: string) {
-  if (probe === null) {
-    const blank = { name: '', kind: 'thermocouple-k' as const, unit, notes: '', calibratedOn: '' };
-    return { ...blank, responseS: null, calibrationU: null };
-  }
-  const { calibratedAtMs, ...rest } = probe;
-  return { ...rest, calibratedOn: calibratedAtMs === null ? '' : dayOf(calibratedAtMs, zone) };
-}
-
 const UNITS = [
   { value: 'F', words: '°F' },
   { value: 'C', words: '°C' },
 ];
-
-function useProbeForm(probe: StoredProbe | null) {
-  const { unit, zone } = useSession().shop;
-  const saveProbe = useSaveProbe(probe?.id ?? null);
-  const navigate = useNavigate();
-  return useCheckedForm<TypedProbe, z.output<typeof typedProbeSchema>>({
-    schema: typedProbeSchema,
-    defaultValues: typedProbe(probe, unit, zone),
-    fieldNames: { calibratedAtMs: 'calibratedOn' },
-    figures: {
-      accuracy: 'the accuracy',
-      responseS: 'the response time',
-      calibrationU: 'its uncertainty',
-    },
-    save: async ({ calibratedOn, ...changed }) => {
-      const calibratedAtMs = calibratedOn === '' ? null : instantAt(calibratedOn, '12:00', zone);
-      await saveProbe.mutateAsync({ ...changed, calibratedAtMs });
-      await navigate('/ratings');
-    },
-  });
-}
 
 function ProbeForm({ probe }: { probe: StoredProbe | null }) {
   const form = useProbeForm(probe);
@@ -111,12 +73,13 @@ function ProbeForm({ probe }: { probe: StoredProbe | null }) {
             error={fault('unit')}
             className="col-span-2 desk:col-span-1"
           />
+          <ClassField form={form} />
           <TextField
             label="Accuracy, ±"
             inputMode="decimal"
             {...register('accuracy', typedNumber)}
             error={fault('accuracy')}
-            hint="as its maker states it"
+            hint="as its maker states it, meter and all"
           />
           <TextField
             label="Response time in moving air, s"
@@ -126,7 +89,7 @@ function ProbeForm({ probe }: { probe: StoredProbe | null }) {
             hint="leave empty if not known"
           />
           <TextField
-            label="Last calibrated on"
+            label="Certificate of"
             type="date"
             {...register('calibratedOn')}
             error={fault('calibratedOn')}
@@ -136,7 +99,7 @@ function ProbeForm({ probe }: { probe: StoredProbe | null }) {
             inputMode="decimal"
             {...register('calibrationU', typedNumber)}
             error={fault('calibrationU')}
-            hint="k = 2, from the certificate"
+            hint="k = 2, from a certificate that gives no corrections"
           />
           <TextAreaField
             label="Notes"

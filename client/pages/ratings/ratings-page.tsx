@@ -1,6 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router-dom';
+import type { StoredCalibration } from '#shared/schemas/calibrations.ts';
 import { RATING_KINDS, type StoredProbe, type StoredRating } from '#shared/schemas/ratings.ts';
+import { calibrationsQuery } from '../../api/calibrations.ts';
 import { probesQuery } from '../../api/probes.ts';
 import { ratingsQuery } from '../../api/ratings.ts';
 import { DeskPage } from '../../components/frame.tsx';
@@ -18,6 +20,7 @@ export function RatingsPage() {
   const mayChange = mayRunOffice(useSession());
   const ratings = useQuery(ratingsQuery());
   const probes = useQuery(probesQuery());
+  const calibrations = useQuery(calibrationsQuery());
   return (
     <DeskPage>
       <div className="flex flex-wrap items-end justify-between gap-3 pb-5">
@@ -40,7 +43,13 @@ export function RatingsPage() {
       <div className="pt-11">
         {probes.isPending && <Waiting>Fetching the probes…</Waiting>}
         {probes.isError && <Failed error={probes.error} onRetry={probes.refetch} />}
-        {probes.data && <Probes probes={probes.data} mayChange={mayChange} />}
+        {probes.data && (
+          <Probes
+            probes={probes.data}
+            calibrations={calibrations.data ?? []}
+            mayChange={mayChange}
+          />
+        )}
       </div>
     </DeskPage>
   );
@@ -132,7 +141,13 @@ function RatingRow({ rating, mayChange }: { rating: StoredRating; mayChange: boo
   );
 }
 
-function Probes({ probes, mayChange }: { probes: StoredProbe[]; mayChange: boolean }) {
+type ProbesProps = {
+  probes: StoredProbe[];
+  calibrations: StoredCalibration[];
+  mayChange: boolean;
+};
+
+function Probes({ probes, calibrations, mayChange }: ProbesProps) {
   return (
     <section>
       <SectionHead state="their accuracy decides what can be called">Probes</SectionHead>
@@ -141,7 +156,7 @@ function Probes({ probes, mayChange }: { probes: StoredProbe[]; mayChange: boole
           No probe yet. Without one a run is judged as if its readings were exact.
         </p>
       )}
-      <ProbeRows probes={probes} mayChange={mayChange} />
+      <ProbeRows probes={probes} calibrations={calibrations} mayChange={mayChange} />
       {mayChange && (
         <div className="pt-5">
           <KeyLink to="/probes/new">Add a probe</KeyLink>

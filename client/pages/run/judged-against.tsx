@@ -9,12 +9,13 @@ import { SectionHead } from '../../components/section-head.tsx';
 import { Failed } from '../../components/waiting.tsx';
 import { dateWords, timeWords } from '../../format/when.ts';
 import { judgedWords } from './about-run.ts';
+import { JudgedWithProbe } from './judged-with-probe.tsx';
 
 type JudgedAgainstProps = { run: RunPage; unit: DisplayUnit; zone: string };
 
 /** What the run was judged by, and a way to judge it by something else. */
 export function JudgedAgainst({ run, unit, zone }: JudgedAgainstProps) {
-  const { judgedBy, madeAtMs, analysis } = run.analysis;
+  const { judgedBy, judgedWith, madeAtMs, analysis } = run.analysis;
   return (
     <section aria-labelledby="judged">
       <SectionHead id="judged">Judged against</SectionHead>
@@ -30,6 +31,9 @@ export function JudgedAgainst({ run, unit, zone }: JudgedAgainstProps) {
         </dl>
       ) : (
         <p className="py-3 text-body">No rating is known, so no point is called.</p>
+      )}
+      {judgedWith && (
+        <JudgedWithProbe used={judgedWith} judgedAtMs={madeAtMs} unit={unit} zone={zone} />
       )}
       <p className="py-2 text-small text-print">
         Judged {whenWords(madeAtMs, zone)} by engine {analysis.version}.
