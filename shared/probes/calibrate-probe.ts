@@ -97,7 +97,10 @@ export function calibrationCorrection({ correction }: ProbeCalibration, tempC: n
 }
 
 /** The boiling point that a record goes by, °C, and how well it is known by the pressure alone, K. */
-export function boilingOf({ pressureHPa, altitudeM }: CalibrationRecord) {
+export function boilingOf({
+  pressureHPa,
+  altitudeM,
+}: Pick<CalibrationRecord, 'pressureHPa' | 'altitudeM'>) {
   const airHPa = pressureHPa ?? standardPressureHPa(altitudeM ?? 0);
   const halfHPa = pressureHPa === null ? WEATHER_HALF_HPA : BAROMETER_HALF_HPA;
   const errorK = rectangular(halfHPa * boilingSlopeKPerHPa(airHPa));

@@ -1,7 +1,12 @@
 import { Cells, TextField } from '../../components/field.tsx';
 import type { FormPart } from '../../forms/use-checked-form.ts';
+import { boilingOf } from '#shared/probes/calibrate-probe.ts';
 import type { DisplayUnit } from '#shared/units.ts';
+import { formatStep } from '#shared/wording/format.ts';
 import { REFERENCE_ROWS } from './typed-calibration.ts';
+
+/** Boiling point known by the altitude alone, near sea level: k = 2, K. */
+const WEATHER_UK = 2 * boilingOf({ pressureHPa: null, altitudeM: 0 }).errorK;
 
 type Named = `points.${number}.reference` | `points.${number}.readings`;
 type Bath = 'pressureHPa' | 'altitudeM';
@@ -50,7 +55,7 @@ export function BathCells({
         inputMode="decimal"
         {...register('altitudeM')}
         error={fault('altitudeM')}
-        hint="Weather then adds about 1.5 °F to what is not known of boiling."
+        hint={`Weather then leaves the boiling point uncertain by ±\u00a0${formatStep(WEATHER_UK, unit)}.`}
         className="max-desk:col-span-2"
       />
     </Cells>
@@ -110,7 +115,7 @@ function PointCells({
   return (
     <>
       <TextField
-        label={`Point ${i + 1}: reference, °${unit}`}
+        label={`Reference ${i + 1}, °${unit}`}
         inputMode="decimal"
         autoComplete="off"
         {...register(`points.${i}.reference`)}

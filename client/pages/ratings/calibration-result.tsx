@@ -12,6 +12,7 @@ import { addsWords, BUDGET_WORDS } from '../../format/calibration-words.ts';
 /** What follows from a calibration: the sentence, the points it rests on, and the uncertainty part by part. */
 export function CalibrationResult({ calibration }: { calibration: NewCalibration }) {
   const { unit } = calibration;
+  const isBaths = calibration.kind === 'ice-and-boiling';
   const result = calibrateProbe(calibrationRecord(calibration));
   const budget = budgetOf(calibration);
   const added = addsWords(calibrationCorrection(result, JUDGED_ABOUT_C), unit);
@@ -35,7 +36,7 @@ export function CalibrationResult({ calibration }: { calibration: NewCalibration
       >
         {budget.parts.map(({ name, standard }) => (
           <tr key={name}>
-            <Td>{BUDGET_WORDS[name] ?? name}</Td>
+            <Td>{name === 'calibration' && isBaths ? 'Drift' : BUDGET_WORDS[name]}</Td>
             <Td figure>{formatStep(2 * standard, unit)}</Td>
           </tr>
         ))}
