@@ -3,6 +3,7 @@ import { sampleLines } from './layout/sample-lines.ts';
 import type { ReadOptions, ReadOutcome } from './log-reading.ts';
 import { askWith } from './outcome/ask-with.ts';
 import type { LogFile } from './outcome/log-file.ts';
+import { refuseAnswers } from './outcome/refuse-answers.ts';
 import { refuseEarly, refuseLongLines } from './outcome/refuse-early.ts';
 import { readInOrder } from './outcome/settle-date-order.ts';
 import { decodeText } from './text/decode-text.ts';
@@ -17,6 +18,8 @@ import { textDecoderFor } from './text/split-lines.ts';
  */
 export function readLog(bytes: Uint8Array, options: ReadOptions = {}): ReadOutcome {
   const answers = options.answers ?? {};
+  const wrong = refuseAnswers(answers);
+  if (wrong) return { kind: 'refused', problem: wrong };
   const text = decodeText(bytes, answers.encoding);
   const decode = textDecoderFor(text.encoding);
   const early = refuseEarly(bytes, text);

@@ -9,7 +9,11 @@ type Fields = { first: number; second: number };
  */
 export function minutesClock(input: ClockInput, column: SampleColumn): ClockResult {
   const answer = input.answers.clock;
-  if (answer === 'm:ss' || answer === 'h:mm') return asForm(column, answer);
+  if (answer === 'm:ss') return asForm(column, answer);
+  // the other two answer a later question, about hours
+  if (answer === 'h:mm' || answer === 'h:mm:ss' || answer === '12-hour') {
+    return asForm(column, 'h:mm');
+  }
   const title = input.titles[column.index]!.toLowerCase();
   if (/m+:ss|min.*sec|elapsed|stop.?watch|since|run.?time/.test(title))
     return asForm(column, 'm:ss');

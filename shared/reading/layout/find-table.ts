@@ -174,7 +174,8 @@ function lineBelow(lines: string[], index: number): number {
 }
 
 function splitHeader(line: string, { delimiter, width }: DelimiterChoice): string[] {
-  const { cells } = splitCells(line.replace(/^\s*#\s*/, ''), delimiter);
+  const split = splitCells(line.replace(/^\s*#\s*/, ''), delimiter);
+  const cells = split.cells.map((cell) => cell.replace(/\s*\n\s*/g, ' '));
   return delimiter === ' ' && cells.length !== width ? line.trim().split(/\s{2,}|\t+/) : cells;
 }
 

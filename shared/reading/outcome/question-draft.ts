@@ -5,4 +5,6 @@ export type QuestionDraft = {
   about: QuestionSubject;
   message: string;
   options: { answer: string; label: string }[];
+  /** Answers to an earlier question about the same, which leave this one open. */
+  follows?: string[];
 };

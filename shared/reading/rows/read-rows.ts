@@ -6,6 +6,7 @@ import { SKIP_WORDS } from '../words/skip-words.ts';
 import { splitCells } from '../text/split-cells.ts';
 import { lineEnd, pastLineEnd } from '../text/split-lines.ts';
 import type { LogText } from '../text/decode-text.ts';
+import { joinQuoted, type JoinedRow } from './join-quoted.ts';
 import { QuickRow } from './quick-row.ts';
 import { planRow, type RowPlan } from './row-plan.ts';
 import { RowStore } from './row-store.ts';
@@ -58,6 +59,8 @@ class RowsReader {
   private readonly input: RowsInput;
   private readonly plan: RowPlan;
   private readonly quick: QuickRow | null;
+  /** The row that was read last, where its quotes reach over lines. */
+  private joined: JoinedRow | null = null;
 
   constructor(input: RowsInput) {
     const { text, layout } = input;
@@ -87,7 +90,8 @@ class RowsReader {
         const to = lineEnd(bytes, at);
         const wrong = this.readCarefully(at, to, row);
         if (wrong) return { kind: 'problem', problem: wrong };
-        at = pastLineEnd(bytes, to);
+        at = pastLineEnd(bytes, this.joined?.to ?? to);
+        row += this.joined?.lines.length ?? 0;
       }
       row++;
       if (--untilProgress === 0) {
@@ -136,11 +140,15 @@ class RowsReader {
   private readCarefully(from: number, to: number, row: number): ReadProblem | null {
     const { input, store, plan, facts } = this;
     const { layout } = plan;
+    this.joined = null;
     const line = input.decode(input.text.bytes, from, to);
     if (line.trim() === '') return null;
     if (line.includes('\0')) return problem('nul-inside', { row });
     facts.carefulRows++;
-    const { cells, unclosed } = splitCells(line, layout.delimiter);
+    const own = splitCells(line, layout.delimiter);
+    this.joined = own.unclosed ? this.joinNote(from) : null;
+    const cells = this.joined?.cells ?? own.cells;
+    const unclosed = own.unclosed && this.joined === null;
     if (cells.every((cell) => cell === '')) {
       store.passedOver.add(row, SKIP_WORDS.emptyRow());
       return null;
@@ -156,6 +164,23 @@ class RowsReader {
     if (why !== null) store.unread.add(row, why);
     else return this.pushSlow(read, cells, row);
     return null;
+  }
+
+  /** A note of several lines; null where a line of it is a reading, so that a stray quote costs its own row only. */
+  private joinNote(from: number): JoinedRow | null {
+    const { text, layout, decode } = this.input;
+    const joined = joinQuoted(text.bytes, from, layout.delimiter, decode);
+    if (!joined || !this.isRow(joined.cells)) return null;
+    const isReading = (line: string) => {
+      const { cells } = splitCells(line, layout.delimiter);
+      return cells.length > 1 && this.isRow(cells);
+    };
+    return joined.lines.some(isReading) ? null : joined;
+  }
+
+  private isRow(cells: string[]): boolean {
+    const { layout } = this.plan;
+    return rejection(cells, false, layout, readSlowRow(cells, this.plan, 0)) === null;
   }
 
   private pushSlow(read: SlowRow, cells: string[], row: number): ReadProblem | null {

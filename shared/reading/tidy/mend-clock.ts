@@ -7,6 +7,13 @@ import type { RowStore } from '../rows/row-store.ts';
 import { medianStepTicks } from './arrange-rows.ts';
 
 const HOUR = 3600 * TICKS_PER_S;
+/** What summer time moves clocks by: an hour, on Lord Howe Island half of one (IANA time zone database). */
+const SUMMER_TIME = [HOUR, HOUR / 2];
+/** Clocks go forward between these times of day: a time without a date has no more to go by. */
+const EARLIEST_ADVANCE = 0.9 * HOUR;
+const LATEST_ADVANCE = 4 * HOUR;
+/** Readings further apart than a third of this say nothing of an hour. */
+const LONGEST_SLACK = HOUR / 6;
 /** A step of more than this, either way, is a clock that was set, not a pause. */
 const SET_ANEW = 300 * TICKS_PER_DAY;
 
@@ -27,6 +34,7 @@ export function mendClock(store: RowStore, clock: Clock, answers: Answers): Mend
 /** A time of day that falls by more than 12 hours has passed midnight. */
 function passMidnight(store: RowStore, answers: Answers): MendResult {
   const { ticks, rows, count } = store;
+  const step = medianStepTicks(store);
   const warnings: ReadWarning[] = [];
   const isTwelveHour = answers.clock === '12-hour';
   let addedTicks = 0;
@@ -34,8 +42,12 @@ function passMidnight(store: RowStore, answers: Answers): MendResult {
   for (let i = 1; i < count; i++) {
     const written = ticks[i]!;
     const fall = before - written;
+    const set = settingTicks(before, -fall, step, before >= EARLIEST_ADVANCE);
     before = written;
-    if (fall > 11.5 * HOUR && fall <= 12 * HOUR) {
+    if (set !== 0) {
+      addedTicks -= set;
+      warnings.push(clockChange(rows[i]!, set));
+    } else if (fall > 11.5 * HOUR && fall <= 12 * HOUR && answers.clock !== 'h:mm:ss') {
       if (!isTwelveHour) return askHalves(rows[i]!);
       addedTicks += 12 * HOUR;
     } else if (fall > 12 * HOUR) {
@@ -62,6 +74,7 @@ function askHalves(row: number): MendResult {
         { answer: '12-hour', label: '12-hour clock' },
         { answer: 'h:mm:ss', label: '24-hour clock' },
       ],
+      follows: ['h:mm'],
     },
   };
 }
@@ -75,14 +88,13 @@ function passSettings(store: RowStore, hasWallClock: boolean): ReadWarning[] {
   for (let i = 1; i < count; i++) {
     const written = ticks[i]!;
     const change = written - before;
-    const hour = hasWallClock ? hourChange(before, change, step) : 0;
+    const set = hasWallClock ? settingTicks(before, change, step, isChangeDay(before)) : 0;
     if (Math.abs(change) > SET_ANEW) {
       addedTicks += step - change;
       warnings.push(warning('clock-reset', { row: rows[i]! }));
-    } else if (hour !== 0) {
-      addedTicks -= hour * HOUR;
-      const say = hour < 0 ? 'back by an hour' : 'forward by an hour';
-      warnings.push(warning('clock-change', { row: rows[i]!, say }));
+    } else if (set !== 0) {
+      addedTicks -= set;
+      warnings.push(clockChange(rows[i]!, set));
     }
     before = written;
     ticks[i] = written + addedTicks;
@@ -90,14 +102,22 @@ function passSettings(store: RowStore, hasWallClock: boolean): ReadWarning[] {
   return warnings;
 }
 
-/** -1 or 1 where a wall clock was set back or forward by an hour, on the hour, between two readings. */
-function hourChange(beforeTicks: number, change: number, step: number): number {
+/** By how much a wall clock was set back or forward, on the hour, between two readings, µs; 0 where it was not. */
+function settingTicks(before: number, change: number, step: number, mayAdvance: boolean): number {
   const slack = Math.max(3 * step, TICKS_PER_S);
-  const toHour = HOUR - (beforeTicks % HOUR);
-  if (toHour > slack) return 0;
-  if (change < 0 && change + HOUR >= 0 && change + HOUR <= slack) return -1;
-  const early = beforeTicks % TICKS_PER_DAY < 4 * HOUR;
-  return early && isChangeDay(beforeTicks) && change - HOUR > 0 && change - HOUR <= slack ? 1 : 0;
+  const toHour = HOUR - (before % HOUR);
+  if (toHour > slack || slack > LONGEST_SLACK) return 0;
+  for (const by of SUMMER_TIME) {
+    if (change < 0 && change + by >= 0 && change + by <= slack) return -by;
+    const isEarly = before % TICKS_PER_DAY < LATEST_ADVANCE;
+    if (mayAdvance && isEarly && change - by > 0 && change - by <= slack) return by;
+  }
+  return 0;
+}
+
+function clockChange(row: number, ticks: number): ReadWarning {
+  const by = Math.abs(ticks) === HOUR ? 'an hour' : 'half an hour';
+  return warning('clock-change', { row, say: `${ticks < 0 ? 'back' : 'forward'} by ${by}` });
 }
 
 /** Clocks go forward on a Sunday, early in the day; any other pause of an hour is a pause. */

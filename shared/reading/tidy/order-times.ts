@@ -43,7 +43,7 @@ function isRising({ ticks, count }: RowStore): boolean {
   for (let i = 1; i < count; i++) {
     const step = ticks[i]! - ticks[i - 1]!;
     if (!(step > 0 && step < most)) return false;
-    if (step > hour && step < 2 * hour) return false;
+    if (step > hour / 2 && step < 2 * hour) return false;
   }
   return true;
 }

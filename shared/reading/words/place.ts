@@ -4,4 +4,6 @@ export type Place = {
   column?: string | null;
   value?: string | null;
   say?: string | number;
+  /** What a question is about. */
+  about?: string;
 };

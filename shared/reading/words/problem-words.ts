@@ -65,9 +65,8 @@ export const PROBLEM_WORDS = {
     hint: 'Choose one of the columns that the file has.',
   },
   'unknown-answer': {
-    message: ({ column, value, say }) =>
-      `"${value}" is no answer about ${column}. Possible: ${say}.`,
-    hint: 'Choose one of the answers offered.',
+    message: ({ about, value, say }) => `"${value}" is no answer about ${about}. Possible: ${say}.`,
+    hint: 'Give one of those, or none: then it is asked where it matters.',
   },
   'column-count': {
     message: ({ row, say }) => `Row ${row} has ${say}.`,
