@@ -1,14 +1,20 @@
 import type { AnalysisInput } from '#shared/analysis/analysis.ts';
 import type { Series } from '#shared/analysis/series.ts';
-import { createRandom } from '#server/commands/heat-model/random.ts';
-import { simulateRun } from '#server/commands/heat-model/simulate-run.ts';
+import { createRandom, type Random } from '#server/commands/heat-model/random.ts';
+import { simulateRun, type ModelRun } from '#server/commands/heat-model/simulate-run.ts';
 import type { Readings } from '#server/commands/heat-model/take-readings.ts';
+import { trueTurningPoints } from '#server/commands/heat-model/true-turning-points.ts';
 import type { AccuracyArguments } from './arguments.ts';
-import { METHODS } from './methods.ts';
+import { METHODS, type Method } from './methods.ts';
 import { inputOf, type Plan } from './plan.ts';
 import { plansOf } from './plans.ts';
-import { seeRun, type SeenRun } from './see-run.ts';
+import { cutRecord, seeRun, throughProbe, type SeenRun } from './see-run.ts';
 import { seriesOf } from './story-input.ts';
+
+/** A swing that a person with a display notices, K. */
+const NOTICED_K = 3.4 / 1.8;
+/** Share of the turns that must be far enough apart for the readings. */
+const LEAST_SHOWN = 0.75;
 
 /** A run read by one method, ready to be judged. */
 export type ReadRun = {
@@ -31,22 +37,32 @@ function* readPlan(plan: Plan, seed: number, named: string): Generator<ReadRun> 
   for (const [m, method] of METHODS.entries()) {
     if (!method.name.includes(named) || method.spacingS > plan.mostSpacingS) continue;
     const random = createRandom(seed * 7919 + 31 * m + plan.name.length);
-    const seen = seeRun(plan, whole, method, method.lagS(random));
-    if (isTooCoarse(seen)) continue;
-    const readings = method.read(seen.run, seen.accepted, random);
-    yield {
-      seed,
-      seen,
-      readings,
-      series: seriesOf(readings),
-      input: inputOf(plan, seen.marks, seen.responseS),
-    };
+    const run = readRun(plan, whole, method, random);
+    if (!isTooCoarse(run.seen)) yield { seed, ...run };
   }
+}
+
+function readRun(plan: Plan, whole: ModelRun, method: Method, random: Random) {
+  const lagS = method.lagS(random);
+  const shown = lagS === null ? whole : throughProbe(whole, lagS);
+  const record = cutRecord(shown, { fromS: plan.recordFromS, toS: Infinity });
+  const readings = method.read(record, trueTurningPoints(record, NOTICED_K), random);
+  const kept = readings.timesS.filter((_, i) => readings.temps[i] !== null);
+  const span = {
+    fromS: plan.recordFromS + (kept[0] ?? 0),
+    toS: plan.recordFromS + (kept.at(-1) ?? 0),
+  };
+  const responseS = lagS ?? plan.machine.probeLagS;
+  const seen = seeRun(plan, shown, method, { responseS, span });
+  return {
+    seen,
+    readings,
+    series: seriesOf(readings),
+    input: inputOf(plan, seen.marks, responseS),
+  };
 }
 
 /** Where most rounds are over between a few readings, the record is of nothing. */
 function isTooCoarse({ needed, turns }: SeenRun): boolean {
   return turns.length > 3 && needed.length < LEAST_SHOWN * turns.length;
 }
-
-const LEAST_SHOWN = 0.75;

@@ -27,10 +27,19 @@ export type SeenRun = {
   accepted: TrueTurn[];
 };
 
-export function seeRun(plan: Plan, whole: ModelRun, method: Method, lagS: number | null): SeenRun {
-  const responseS = lagS ?? plan.machine.probeLagS;
-  const shown = lagS === null ? whole : throughProbe(whole, lagS);
-  const run = cutRecord(shown, plan.recordFromS);
+/**
+ * What a method's readings could show of a run.
+ *
+ * @param shown the run through the method's probe, from the start from cold
+ * @param span first and last reading, s after the start from cold
+ */
+export function seeRun(
+  plan: Plan,
+  shown: ModelRun,
+  method: Method,
+  told: { responseS: number; span: { fromS: number; toS: number } },
+): SeenRun {
+  const run = cutRecord(shown, told.span);
   const clear = trueTurningPoints(run, Math.max(SWING_K + NEAR_K, method.neededSwingK));
   const accepted = [
     ...trueTurningPoints(run, SWING_K - NEAR_K),
@@ -41,8 +50,8 @@ export function seeRun(plan: Plan, whole: ModelRun, method: Method, lagS: number
     plan,
     method,
     run,
-    responseS,
-    marks: marksOf(plan, run),
+    responseS: told.responseS,
+    marks: marksOf(plan, run, told.span.fromS),
     turns: trueTurningPoints(run, SWING_K),
     needed: clear.filter((turn, i) => isResolved(turn, clear[i - 1], clear[i + 1], method)),
     accepted: accepted.sort((a, b) => a.timeS - b.timeS),
@@ -60,32 +69,34 @@ export function throughProbe(run: ModelRun, lagS: number): ModelRun {
   return { ...run, probeC };
 }
 
-/** The record that begins some time after the start; changes of the heater before it keep their (negative) times. */
-export function cutRecord(run: ModelRun, fromS: number): ModelRun {
-  if (fromS === 0) return run;
-  const first = Math.min(run.probeC.length - 2, Math.round(fromS / STEP_S));
+/** Part of a run as a record of its own; changes of the heater before it keep their (negative) times. */
+export function cutRecord(run: ModelRun, { fromS, toS }: { fromS: number; toS: number }): ModelRun {
+  const first = Math.round(fromS / STEP_S);
+  const past = Math.min(run.probeC.length, Math.round(toS / STEP_S) + 1);
   const shiftS = first * STEP_S;
+  const endS = (past - 1) * STEP_S;
   return {
-    probeC: run.probeC.slice(first),
-    outletC: run.outletC.slice(first),
-    switches: run.switches.map((change) => ({ ...change, timeS: change.timeS - shiftS })),
-    clicksS: run.clicksS.map((timeS) => timeS - shiftS).filter((timeS) => timeS >= 0),
-    heatOffS: run.heatOffS === null ? null : run.heatOffS - shiftS,
+    probeC: run.probeC.slice(first, past),
+    outletC: run.outletC.slice(first, past),
+    switches: run.switches
+      .filter(({ timeS }) => timeS <= endS)
+      .map((change) => ({ ...change, timeS: change.timeS - shiftS })),
+    clicksS: run.clicksS
+      .filter((timeS) => timeS >= shiftS && timeS <= endS)
+      .map((timeS) => timeS - shiftS),
+    heatOffS: run.heatOffS === null || run.heatOffS > endS ? null : run.heatOffS - shiftS,
   };
 }
 
 /** Marks as a person taps them: to the second. */
-function marksOf(plan: Plan, run: ModelRun): Mark[] {
+function marksOf(plan: Plan, run: ModelRun, fromS: number): Mark[] {
   const endS = (run.probeC.length - 1) * STEP_S;
-  const marks: Mark[] = plan.marks.map((mark) => ({
-    ...mark,
-    timeS: mark.timeS - plan.recordFromS,
-  }));
+  const marks: Mark[] = plan.marks.map((mark) => ({ ...mark, timeS: mark.timeS - fromS }));
   if (plan.clicksMarked)
     marks.push(...run.clicksS.map((timeS): Mark => ({ timeS, kind: 'click' })));
   if (run.heatOffS !== null) marks.push({ timeS: run.heatOffS, kind: 'heat-off' });
-  for (const { fromS } of plan.faults.doorOpen) {
-    marks.push({ timeS: fromS - plan.recordFromS, kind: 'door' });
+  for (const open of plan.faults.doorOpen) {
+    marks.push({ timeS: open.fromS - fromS, kind: 'door' });
   }
   return marks
     .map((mark) => ({ ...mark, timeS: Math.round(mark.timeS) }))

@@ -138,6 +138,8 @@ function loneLastPeak(random: Random): Told {
   return {
     machine: hotMachine(random),
     faults: { oneLate: { opening, byK: random.between(11, 15) }, scatterK: 0 },
+    // Between two readings by hand it may be over.
+    mostSpacingS: 10,
     finish: (plan) => endAfterTurn(plan, 2 * opening - 1, random.between(15, 30)),
   };
 }

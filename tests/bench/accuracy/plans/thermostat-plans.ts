@@ -1,5 +1,5 @@
 import type { Random } from '#server/commands/heat-model/random.ts';
-import { hotMachine } from '../machines.ts';
+import { hotMachine, unattended } from '../machines.ts';
 import type { Maker, Told } from '../plan.ts';
 
 /** Runs that cycle by themselves at the wrong temperature, or at no steady one; plain ones and thin ones. */
@@ -68,22 +68,22 @@ export const THERMOSTAT_PLANS: Maker[] = [
   {
     name: 'drifts up',
     meant: 'drifting',
-    make: (random) => drifts(random, [149.5, 152], [0.8, 1.2]),
+    make: (random) => drifts(random, [149.5, 152], [7, 15]),
   },
   {
     name: 'drifts down',
     meant: 'drifting',
-    make: (random) => drifts(random, [158, 160], [-1.2, -0.8]),
+    make: (random) => drifts(random, [158, 162], [-15, -7]),
   },
   {
     name: 'drifts a little',
     meant: 'drifting',
-    make: (random) => drifts(random, [151, 154], [0.25, 0.75]),
+    make: (random) => drifts(random, [151, 154], [2, 7.5]),
   },
   {
     name: 'drifts, too hot',
     meant: 'drifting',
-    make: (random) => ({ ...drifts(random, [170, 173], [0.8, 1.2]), machine: hotMachine(random) }),
+    make: (random) => ({ ...drifts(random, [170, 173], [7, 12]), machine: hotMachine(random) }),
   },
   { name: 'scatters', meant: 'scattered', make: (random) => scatters(random, [3.3, 5]) },
   { name: 'scatters a little', meant: 'scattered', make: (random) => scatters(random, [1.5, 2.9]) },
@@ -121,10 +121,17 @@ function hot(random: Random, cutOutF: Span, resetF: Span): Told {
   return { machine, ...turning(random, cutOutF, resetF, 1500) };
 }
 
-function drifts(random: Random, cutOutF: Span, driftK: Span): Told {
+/** By so many °F over the record; the drift a cycle follows from how many cycles there are. */
+function drifts(random: Random, cutOutF: Span, totalF: Span): Told {
+  const driftTotalK = random.between(...totalF) / 1.8;
   return {
     ...turning(random, cutOutF, [127, 131], 1300),
-    faults: { driftK: random.between(...driftK), scatterK: random.between(0.05, 0.3) },
+    faults: { scatterK: random.between(0.05, 0.3) },
+    finish: (plan) => {
+      const openings = unattended(plan.machine, plan.faults, plan.watch.forS).clicksS.length;
+      const driftK = driftTotalK / Math.max(3, openings - 2);
+      return { ...plan, faults: { ...plan.faults, driftK } };
+    },
   };
 }
 

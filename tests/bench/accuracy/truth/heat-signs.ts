@@ -80,9 +80,9 @@ function lonePeak(
 /** Something opened for good, or the timer ended the heat, and the record follows the fall far enough. */
 function isLost({ plan, run }: SeenRun, { resets, probeUK, pointUK }: TruePoints): How {
   const endS = (run.probeC.length - 1) * STEP_S;
-  const lost = run.switches.some(({ cause, timeS }) => cause === 'one-shot' && timeS < endS);
-  if ((!lost && plan.faults.opensForGoodS > endS + plan.recordFromS) || run.heatOffS !== null)
-    return 'no';
+  const lost =
+    run.switches.some(({ cause }) => cause === 'one-shot') || plan.faults.opensForGoodS < endS;
+  if (!lost || run.heatOffS !== null) return 'no';
   const lastC = run.probeC.at(-1)!;
   const { lowC } = bandOf('reset', plan.rating);
   const ownC = Math.min(lowC, ...resets.map(({ tempC }) => tempC));

@@ -18,9 +18,9 @@ type Fall = { from: number; to: number; whole: boolean };
  */
 export function staysOn(seen: SeenRun, points: TruePoints): How {
   const { plan, run } = seen;
-  if (run.clicksS.length < plan.faults.groundedAfter) return 'no';
-  const opening = run.clicksS[plan.faults.groundedAfter - 1] ?? Infinity;
-  const groundS = opening - (plan.recordFromS === 0 ? 0 : plan.recordFromS);
+  // No plan with a grounded coil begins warm, so that openings are counted from the first.
+  const groundS = run.clicksS[plan.faults.groundedAfter - 1];
+  if (groundS === undefined) return 'no';
   const falls = fallsOf(seen);
   const clean = falls.filter(({ from, whole }) => whole && from * STEP_S < groundS - 1);
   const kept = falls.filter(({ from }) => from * STEP_S >= groundS - 1);
