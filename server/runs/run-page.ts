@@ -7,8 +7,10 @@ import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
 import type { Note, RunPage } from '#shared/schemas/runs.ts';
 import { createAnalysisRepository } from './analysis-repository.ts';
 import { probeOf } from '#shared/judging/judged-by.ts';
+import { createMachineRuns, wasIn } from './machine-runs.ts';
 import { createNoteRepository } from './note-repository.ts';
 import type { Run } from './run.ts';
+import { findRunPairs } from './run-pairs.ts';
 import { createRunRepository } from './run-repository.ts';
 import type { RunSources, VisitFacts } from './run-sources.ts';
 
@@ -19,6 +21,7 @@ export function createRunPages(db: Knex, sources: RunSources) {
   const runs = createRunRepository(db);
   const analyses = createAnalysisRepository(db);
   const notes = createNoteRepository(db);
+  const machineRuns = createMachineRuns(db, sources);
 
   /** The newest result whole, the others by name. */
   async function results(runId: string): Promise<Pick<RunPage, 'analysis' | 'earlier'>> {
@@ -64,6 +67,7 @@ export function createRunPages(db: Knex, sources: RunSources) {
         fitted: fittedAt(facts.machine.fitted, run.startedAtMs),
         otherRatings: ratingsToJudgeBy(facts.machine, setting, await sources.listRatings()),
         file: await fileOf(run.uploadId),
+        pairs: await findRunPairs(run, facts.machine, machineRuns),
         notes: await notesOf(id),
         mayWrite: mayRecord(reader, facts.visit.technician.id),
       };
@@ -83,10 +87,10 @@ function whatWasRecorded(run: Run) {
 }
 
 function whereItWas({ visit, job, machine, home, customer }: VisitFacts) {
-  const { make, model, serial, fuel } = machine;
+  const { make, model, serial, fuel, control } = machine;
   return {
     job: { id: job.id, number: job.number },
-    machine: { id: machine.id, make, model, serial, fuel },
+    machine: { id: machine.id, make, model, serial, fuel, control },
     customer: { id: customer.id, name: customer.name },
     home: { id: home.id, address: home.address },
     technician: visit.technician.name,
@@ -101,7 +105,7 @@ function toProbe(probe: StoredProbe): RunPage['probe'] {
 /** What was in the machine when the run was made, as far as it is known. */
 function fittedAt(parts: FittedPart[], atMs: number): RunPage['fitted'] {
   return parts
-    .filter((part) => part.fittedAtMs <= atMs && (part.removedAtMs ?? Infinity) > atMs)
+    .filter((part) => wasIn(part, atMs))
     .map(({ rating: { id, kind, name } }) => ({ id, kind, name }));
 }
 

@@ -10,7 +10,9 @@ import { createAnalysisRepository } from './analysis-repository.ts';
 import { moveDurably, type DataFolders } from './data-folders.ts';
 import { judgedWith } from '#shared/judging/judged-with.ts';
 import { judgedByAnother, judgingFor, specifiedFor } from '#shared/judging/judging-for.ts';
+import { findReference } from './find-reference.ts';
 import type { LogWorker } from './log-worker.ts';
+import { createMachineRuns } from './machine-runs.ts';
 import type { Run, UploadedFile } from './run.ts';
 import { createRunRepository } from './run-repository.ts';
 import type { RunSources } from './run-sources.ts';
@@ -28,7 +30,7 @@ export type RunParts = {
   now: () => Date;
 };
 
-type SaidOfRun = Pick<LogToImport, 'visitId' | 'conditions' | 'marks' | 'startedAtMs'>;
+type SaidOfRun = Pick<LogToImport, 'id' | 'visitId' | 'conditions' | 'marks' | 'startedAtMs'>;
 
 export type RunService = ReturnType<typeof createRunService>;
 
@@ -36,13 +38,15 @@ export function createRunService({ db, worker, sources, folders, now }: RunParts
   const runs = createRunRepository(db);
   const samples = createSampleRepository(db);
   const analyses = createAnalysisRepository(db);
+  const machineRuns = createMachineRuns(db, sources);
 
   async function judgingOf(log: SaidOfRun) {
     const { machine, visit } = await sources.visitFacts(log.visitId);
     const { minCycles } = await sources.shop();
     const used = await judgedWithOf(log.conditions, log.startedAtMs ?? visit.startsAtMs);
     const judged = specifiedFor(machine, log.conditions.setting);
-    return { machine, judged, used, said: { ...log, judgedWith: used, minCycles } };
+    const reference = await findReference(machineRuns, machine.id, log);
+    return { machine, judged, used, said: { ...log, judgedWith: used, minCycles, reference } };
   }
 
   /** Before the file is read its clock is not known; the visit tells the day, which is all that drift asks. */

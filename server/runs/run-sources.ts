@@ -2,6 +2,7 @@ import type { Customer, Home, MachinePage } from '#shared/schemas/homes.ts';
 import type { Visit } from '#shared/schemas/jobs.ts';
 import type { StoredCalibration } from '#shared/schemas/calibrations.ts';
 import type { Person, Shop } from '#shared/schemas/people.ts';
+import type { RunCard } from '#shared/schemas/runs.ts';
 import type { StoredProbe, StoredRating } from '#shared/schemas/ratings.ts';
 
 /** A visit with the job and the machine that it is about. */
@@ -22,4 +23,6 @@ export type RunSources = {
   findPerson(id: string): Promise<Person | undefined>;
   listRatings(): Promise<StoredRating[]>;
   shop(): Promise<Shop>;
+  /** All runs ever made on a machine, newest first. */
+  runsOfMachine(machineId: string): Promise<RunCard[]>;
 };

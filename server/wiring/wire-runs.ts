@@ -29,6 +29,7 @@ export function wireRuns(parts: AppParts, { people, shop, audit }: PeopleWiring,
     findPerson: people.find,
     listRatings: jobs.ratings.list,
     shop: shop.get,
+    runsOfMachine: jobs.jobService.runsOfMachine,
   };
   const folders = dataFolders(dataDir);
   const worker = createLogWorker(workers.runs);

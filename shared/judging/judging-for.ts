@@ -1,3 +1,4 @@
+import type { ReferenceRun } from '../analysis/analysis.ts';
 import type { MachinePage } from '../schemas/homes.ts';
 import type { StoredRating } from '../schemas/ratings.ts';
 import type { JudgedBy, JudgedWith, RunConditions } from '../schemas/runs.ts';
@@ -6,9 +7,12 @@ import { judgedBy, ratingOf } from './judged-by.ts';
 import { probeToJudgeWith } from './judged-with.ts';
 import type { Judging, JudgingMark } from './judging.ts';
 
+/** Of a machine: what it is specified to have, by heat setting. */
+type Specifying = Pick<MachinePage, 'specified'>;
+
 /** What a machine is specified to have for a heat setting; null where nothing is. */
 export function specifiedFor(
-  machine: MachinePage,
+  machine: Specifying,
   setting: RunConditions['setting'],
 ): JudgedBy | null {
   const specified = machine.specified.find((each) => each.setting === setting);
@@ -17,7 +21,7 @@ export function specifiedFor(
 
 /** The same machine judged by another cycling rating: its own safety still stands. */
 export function judgedByAnother(
-  machine: MachinePage,
+  machine: Specifying,
   setting: RunConditions['setting'],
   rating: StoredRating,
 ): JudgedBy | null {
@@ -31,10 +35,13 @@ type Said = {
   conditions: RunConditions;
   marks: JudgingMark[];
   minCycles: number;
+  /** A clean run of the machine to go by; left out or null where none is known. */
+  reference?: ReferenceRun | null;
 };
 
 /** Rating, probe and what the technician said, as the engine takes them. */
-export function judgingFor({ judged, judgedWith, conditions, marks, minCycles }: Said): Judging {
+export function judgingFor(said: Said): Judging {
+  const { judged, judgedWith, conditions, marks, minCycles, reference = null } = said;
   const { roomTemp, roomUnit, load } = conditions;
   return {
     rating: ratingOf(judged),
@@ -43,12 +50,12 @@ export function judgingFor({ judged, judgedWith, conditions, marks, minCycles }:
     load,
     roomC: roomTemp === null ? null : toCelsius(roomTemp, roomUnit),
     minCycles,
-    reference: null,
+    reference,
   };
 }
 
 /** Before anybody said anything: the machine's main heat setting, an unnamed probe. */
-export function judgingAtFirst(machine: MachinePage, minCycles: number): Judging {
+export function judgingAtFirst(machine: Specifying, minCycles: number): Judging {
   const judged = specifiedFor(machine, machine.specified[0]?.setting ?? 'high');
   const rating = ratingOf(specifiedFor(machine, 'high') ?? judged);
   return {

@@ -10,6 +10,7 @@ import {
   temperatureUnitSchema,
   words,
 } from './primitives.ts';
+import { runPairsSchema } from './pairs.ts';
 import { ratingSchema } from './ratings.ts';
 
 export const MARK_KINDS = [
@@ -208,6 +209,7 @@ export const runPageSchema = z.object({
     model: z.string(),
     serial: z.string(),
     fuel: z.string(),
+    control: z.string(),
   }),
   customer: z.object({ id: idSchema, name: z.string() }),
   home: z.object({ id: idSchema, address: z.string() }),
@@ -227,6 +229,7 @@ export const runPageSchema = z.object({
   analysis: storedAnalysisSchema,
   /** Earlier analyses of the same run, newest first. */
   earlier: z.array(storedAnalysisSchema.pick({ id: true, madeAtMs: true, judgedBy: true })),
+  pairs: runPairsSchema,
   notes: z.array(noteSchema),
   /** The signed-in person may write notes, judge again and share. */
   mayWrite: z.boolean(),

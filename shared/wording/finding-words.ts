@@ -34,7 +34,7 @@ export function numberOf({ evidence }: Finding, key: string): number | null {
 }
 
 /** Whether the finding was made on a gas machine. */
-export function isGas({ fuel }: About): boolean {
+export function isGas({ fuel }: Pick<About, 'fuel'>): boolean {
   return fuel === 'gas';
 }
 

@@ -59,7 +59,8 @@ function Seen({ worded: { sentences, evidence } }: { worded: WordedFinding }) {
   );
 }
 
-function Causes({ causes }: { causes: Cause[] }) {
+/** Likely causes as a table on a desk, as a list on a phone. */
+export function Causes({ causes }: { causes: Cause[] }) {
   const head = (
     <>
       <Th className="w-[26%]">Likely cause, in order</Th>
@@ -99,7 +100,8 @@ function Causes({ causes }: { causes: Cause[] }) {
   );
 }
 
-function NextChecks({ checks }: { checks: string[] }) {
+/** Checks to tick off. */
+export function NextChecks({ checks }: { checks: string[] }) {
   return (
     <div className="pt-4 desk:grid desk:grid-cols-[26%_minmax(0,1fr)]">
       <h4 className="lab py-2">Check next</h4>

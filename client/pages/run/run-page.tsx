@@ -12,6 +12,7 @@ import { Findings } from './findings.tsx';
 import { HowRead } from './how-read.tsx';
 import { JudgedAgainst } from './judged-against.tsx';
 import { RunFigure } from './run-figure.tsx';
+import { RunPairs } from './run-pairs.tsx';
 import { Shares } from './shares.tsx';
 import { TitleBlock } from './title-block.tsx';
 
@@ -48,6 +49,7 @@ function RunSheet({ run }: { run: Run }) {
       <div className="grid gap-10 px-4 pt-6 desk:gap-11 desk:px-12">
         <Cycles run={run} unit={shop.unit} />
         <Findings run={run} about={about} />
+        <RunPairs run={run} unit={shop.unit} zone={shop.zone} />
         <p className="border-y border-rule py-3 text-small">{SAFETY_LINE}</p>
         <div className="grid gap-10 desk:grid-cols-2 desk:gap-x-14">
           <JudgedAgainst run={run} unit={shop.unit} zone={shop.zone} />

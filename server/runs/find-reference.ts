@@ -1,0 +1,26 @@
+import type { ReferenceRun } from '#shared/analysis/analysis.ts';
+import { toReferenceRun } from '#shared/analysis/to-reference-run.ts';
+import type { RunConditions } from '#shared/schemas/runs.ts';
+import type { MachineRuns } from './machine-runs.ts';
+
+/**
+ * The machine's newest clean run on the same heat setting and load, with the duct the same way if there is one: what
+ * a run is compared with that has nothing clean of its own.
+ *
+ * @param judged the run to be judged, which is no measure of itself
+ */
+export async function findReference(
+  machineRuns: MachineRuns,
+  machineId: string,
+  judged: { id: string; conditions: RunConditions },
+): Promise<ReferenceRun | null> {
+  const { setting, load, duct } = judged.conditions;
+  const alike = (await machineRuns.list(machineId))
+    .filter((run) => run.id !== judged.id)
+    .filter((run) => run.conditions.setting === setting && run.conditions.load === load);
+  const clean = await machineRuns.onlyClean(alike);
+  const chosen = clean.find((run) => run.conditions.duct === duct) ?? clean[0];
+  if (!chosen) return null;
+  const { analysis } = await machineRuns.judged(chosen);
+  return toReferenceRun(analysis, chosen.conditions.duct === duct);
+}
