@@ -24,11 +24,12 @@ export function compareMeans(first: Sample, second: Sample, common = 0): MeanDif
   const difference = second.mean - first.mean;
   const a = first.variance / first.count;
   const b = second.variance / second.count;
-  const error = Math.sqrt(a + b + common * common);
+  const squared = a + b + common * common;
+  const error = Math.sqrt(squared);
   if (!(error > 0)) return { difference, within: 0, pValue: difference === 0 ? 1 : 0 };
   // What is common is known from elsewhere and counts as without limit of degrees.
-  const degrees = error ** 4 / (a ** 2 / (first.count - 1) + b ** 2 / (second.count - 1));
-  const bounded = Math.min(degrees, 1e6);
+  const shares = (a / squared) ** 2 / (first.count - 1) + (b / squared) ** 2 / (second.count - 1);
+  const bounded = Math.min(1 / shares, 1e6);
   return {
     difference,
     within: studentTQuantile(0.975, bounded) * error,
