@@ -1,4 +1,5 @@
 import type { Series } from '../analysis/series.ts';
+import type { Signal } from './signals/signal.ts';
 import type { TemperatureUnit } from '../units.ts';
 
 /** What a question can be about; also the names that `--assume ABOUT=ANSWER` takes. */
@@ -39,6 +40,8 @@ export type LogColumn = {
   unit: TemperatureUnit | null;
   /** Where the unit was found, in words: "header", "unit row", "cells", "preamble", "answered". */
   unitFrom: string | null;
+  /** Voltages or resistances that become °C; absent where it holds temperatures. */
+  signal?: Signal;
 };
 
 /** A further temperature column, on the times of the series; NaN where it has no reading. */

@@ -1,4 +1,5 @@
 import type { TemperatureUnit } from '../../units.ts';
+import { CELL_SIGNAL, cellSignalFactor } from '../signals/find-signal.ts';
 import { CELL_UNIT, cellUnit } from './find-unit.ts';
 
 export type Decimal = '.' | ',';
@@ -41,7 +42,16 @@ export function parseNumber(cell: string, decimal: Decimal): NumberCell {
   const unit = CELL_UNIT.exec(text);
   return unit && unit.index > 0
     ? parseBare(text.slice(0, unit.index), decimal, cellUnit(unit))
-    : TEXT;
+    : parseSignal(text, decimal);
+}
+
+/** "1.203 mV", "9.8 kΩ": in mV or ohm. */
+function parseSignal(text: string, decimal: Decimal): NumberCell {
+  const signal = CELL_SIGNAL.exec(text);
+  if (!signal || signal.index === 0) return TEXT;
+  const bare = parseBare(text.slice(0, signal.index), decimal, null);
+  if (bare.kind !== 'number') return bare;
+  return { ...bare, value: bare.value * cellSignalFactor(signal) };
 }
 
 export function isOpenWord(text: string): boolean {

@@ -8,7 +8,9 @@ import type { QuestionDraft } from '../outcome/question-draft.ts';
 import { cellSpan } from './cell-span.ts';
 import { chooseDecimal } from './choose-decimal.ts';
 import { chooseDelimiter } from './choose-delimiter.ts';
-import { columnNames, roleOfName } from './column-roles.ts';
+import { findSignal } from '../signals/find-signal.ts';
+import type { Signal } from '../signals/signal.ts';
+import { columnNames, exhaustRank, roleOfName } from './column-roles.ts';
 import { findTable, type SampleColumn, type Table } from './find-table.ts';
 import type { Clock, Layout } from './layout.ts';
 import { usualDecimals } from './usual-decimals.ts';
@@ -36,16 +38,21 @@ export function detectLayout(sample: SampleLines, answers: Answers): LayoutResul
   const clock = chooseClock({ columns, names, titles, preamble, decimal, answers });
   if (clock.kind === 'question') return { ...clock, columns: plainColumns(names) };
   if (clock.kind === 'problem') return { kind: 'problem', problem: problem(clock.code) };
-  return planRows(sample, table, { names, titles, decimal, clock });
+  return planRows(sample, table, { names, titles, decimal, clock }, answers);
 }
 
 type Understood = { names: string[]; titles: string[]; decimal: Decimal; clock: ClockChoice };
 
-function planRows(sample: SampleLines, table: Table, known: Understood): LayoutResult {
+function planRows(
+  sample: SampleLines,
+  table: Table,
+  known: Understood,
+  answers: Answers,
+): LayoutResult {
   const { names, decimal, clock } = known;
   const miscount = headerMiscount(sample, table);
   if (miscount) return { kind: 'problem', problem: miscount };
-  const columns = describeColumns(table, known);
+  const columns = describeColumns(table, known, answers);
   const tempColumns = columns
     .filter(({ role }) => role === 'temperature')
     .map(({ index }) => index);
@@ -106,11 +113,14 @@ function plainColumns(names: string[]): LogColumn[] {
   }));
 }
 
-function describeColumns(table: Table, { names, titles, decimal, clock }: Understood): LogColumn[] {
+function describeColumns(table: Table, understood: Understood, answers: Answers): LogColumn[] {
+  const { names, titles, decimal, clock } = understood;
   const known = names.map((_, i) => titles[i]!.replace(/_/g, ' '));
-  const roles = table.columns.map((column) =>
+  const guesses = table.columns.map((column) =>
     columnRole(column, titles[column.index]!, clock.clock, decimal),
   );
+  const signals = usedSignals(table, known, guesses, answers.unit);
+  const roles = guesses.map((guess, i) => (signals[i] ? 'temperature' : guess));
   const anyNamed = roles.includes('temperature');
   const preambleUnit = statedUnit(table.preamble);
   return names.map((name, index) => {
@@ -118,8 +128,28 @@ function describeColumns(table: Table, { names, titles, decimal, clock }: Unders
     const role = guess === 'maybe' ? (anyNamed ? 'other' : 'temperature') : guess;
     const column = table.columns[index];
     if (role !== 'temperature' || !column) return { index, name, role, unit: null, unitFrom: null };
+    const signal = signals[index];
+    if (signal) return { index, name, role, unit: 'C', unitFrom: `${signal.kind}`, signal };
     return { index, name, role, ...unitOf(known[index]!, name, table, column, preambleUnit) };
   });
+}
+
+/** Voltages and resistances are the run only where no column gives its temperature. */
+function usedSignals(
+  table: Table,
+  titles: string[],
+  roles: RoleGuess[],
+  answer: string | undefined,
+): (Signal | null)[] {
+  const signals = table.columns.map(({ index, kind, cells }) =>
+    kind === 'number' && roles[index] !== 'time' && roles[index] !== 'date'
+      ? findSignal(titles[index]!, cells, table.preamble, answer)
+      : null,
+  );
+  const hasTemperature = roles.some(
+    (role, i) => role === 'temperature' && !signals[i] && exhaustRank(titles[i]!) >= 0,
+  );
+  return hasTemperature ? signals.map(() => null) : signals;
 }
 
 function statedUnit(preamble: string[]) {

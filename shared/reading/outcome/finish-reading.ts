@@ -9,6 +9,7 @@ import type {
 import { problem } from '../words/problem-words.ts';
 import { SKIP_WORDS } from '../words/skip-words.ts';
 import { warning } from '../words/warning-words.ts';
+import { convertSignals } from '../signals/convert-signals.ts';
 import type { QuestionDraft } from './question-draft.ts';
 import { RowList, type RowStore } from '../rows/row-store.ts';
 import { keepRows } from '../tidy/arrange-rows.ts';
@@ -43,6 +44,8 @@ export function finishReading(
   options: ReadOptions,
 ): FinishResult {
   const answers = options.answers ?? {};
+  const signals = convertSignals(store, columns);
+  if (signals.kind === 'question') return signals;
   const choice = chooseChannel(store, columns, options.channel ?? answers.channel, hasNames);
   if (choice.kind === 'question') return choice;
   if (choice.kind === 'unknown') {
@@ -62,7 +65,7 @@ export function finishReading(
   const sentinels = dropSentinels(store, place, unit);
   const scaled = scale(store, place, column, unit, answers.scale);
   if (scaled.kind !== 'scaled') return scaled;
-  const warnings = [...sentinels.warnings, ...scaled.warnings];
+  const warnings = [...signals.warnings, ...sentinels.warnings, ...scaled.warnings];
   if (choice.others.length > 0) {
     warnings.push(
       warning('channel-chosen', { column: column.name, say: choice.others.join(', ') }),

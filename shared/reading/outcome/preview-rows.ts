@@ -4,6 +4,7 @@ import type { SampleLines } from '../layout/sample-lines.ts';
 import type { PreviewRow } from '../log-reading.ts';
 import { planRow } from '../rows/row-plan.ts';
 import { readSlowRow } from '../rows/slow-row.ts';
+import { signalToC, type Signal } from '../signals/signal.ts';
 import { splitCells } from '../text/split-cells.ts';
 
 const SHOWN = 12;
@@ -32,6 +33,12 @@ function asKept({ row, cells }: { row: number; cells: string[] }, kept: KeptRead
   return { row, cells, timeS: kept.timesS[at]!, temp: kept.temps[at]! };
 }
 
+/** As an answer would have it; the terminals of a thermocouple are at what the file states, else at 0 °C. */
+function convertedTemp(signal: Signal | undefined, value: number): number {
+  if (!signal?.sensor) return value;
+  return signalToC(signal, signal.sensor, value, signal.terminalC ?? 0);
+}
+
 function asRead(
   lines: { row: number; cells: string[] }[],
   layout: Layout,
@@ -42,7 +49,7 @@ function asRead(
   let startTicks: number | null = null;
   return lines.map(({ row, cells }, k) => {
     const read = readSlowRow(cells, plan, k);
-    const temp = read.temps[place] ?? NaN;
+    const temp = convertedTemp(layout.columns[column]?.signal, read.temps[place] ?? NaN);
     if (Number.isNaN(read.ticks)) return { row, cells, timeS: null, temp: null };
     startTicks ??= read.ticks;
     const timeS = (read.ticks - startTicks) / TICKS_PER_S;

@@ -1,11 +1,12 @@
 import { DATE_ORDER_ANSWERS } from '../clock/date-order.ts';
 import type { Answers, QuestionSubject, ReadProblem } from '../log-reading.ts';
+import { SENSOR_ANSWERS } from '../signals/signal.ts';
 import { SCALE_ANSWERS } from '../tidy/choose-scale.ts';
 import { problem } from '../words/problem-words.ts';
 
 /** What may be said about each subject. A channel is held against the file's own columns, later. */
 const POSSIBLE: Partial<Record<QuestionSubject, string[]>> = {
-  unit: ['F', 'C', 'K'],
+  unit: ['F', 'C', 'K', ...SENSOR_ANSWERS],
   'date-order': DATE_ORDER_ANSWERS,
   decimal: ['comma', 'point'],
   clock: [

@@ -11,6 +11,7 @@ export const SKIP_WORDS = {
   cutOff: () => 'the last line is cut off',
   repeated: () => 'repeats an earlier row',
   sentinel: (value: string) => `stands for "no reading": ${shown(value)}`,
+  noSuchSignal: (value: string) => `the sensor cannot give ${shown(value)}`,
   otherRun: () => 'belongs to another run',
 };
 

@@ -24,6 +24,8 @@ export const WARNING_WORDS = {
   'clock-assumed': ({ say }) => `Times without a unit were read as ${say}.`,
   'date-order-not-needed': () =>
     'Day and month could be either way round; the times of the run are the same in both.',
+  'signal-converted': ({ column, value, say }) =>
+    `${column} holds ${value === 'mV' ? 'mV' : value === 'kohm' ? 'kilohms' : 'ohms'}. It was converted to °C as ${say}.`,
   'sentinel-excluded': ({ row, value, say }) =>
     `${value} stands for "no reading" and was left out ${say === 1 ? 'once' : `${say} times`}, first in row ${row}.`,
   'open-sensor': ({ row, say }) =>
