@@ -14,8 +14,8 @@ const USUAL_ROOM_C = 40 / 1.8;
  * After heating, the exhaust falls through the reset band and goes on towards the room with no reset, and nobody
  * turned it off: something opened for good, or the timer ended the heat.
  *
- * Assumes that a machine which comes back does so before the exhaust has gone 0.4 of the way from the band to the
- * room, or 8 °F under its own earlier resets.
+ * Assumes that a machine which comes back does so before the exhaust is 8 °F under its own earlier resets; where it has
+ * none, before it has gone 0.4 of the way from the band to the room.
  *
  * Evidence: fallFromC, lastC, belowResetAtS, cutOutsBefore, roomC.
  */
@@ -31,10 +31,10 @@ export function findHeatLost(facts: RunFacts): Finding | null {
 
   const { lowC } = bandOf('reset', rating);
   const roomC = facts.roomC ?? USUAL_ROOM_C;
-  const givenUpC = facts.resets.reduce(
-    (lowestC, { tempC }) => Math.min(lowestC, tempC - BELOW_OWN_K),
-    lowC - GONE_SHARE * Math.max(0, lowC - roomC),
-  );
+  const givenUpC =
+    facts.resets.length > 0
+      ? facts.resets.reduce((lowestC, { tempC }) => Math.min(lowestC, tempC - BELOW_OWN_K), lowC)
+      : lowC - GONE_SHARE * Math.max(0, lowC - roomC);
   if (to.tempC + totalU(facts, to) >= givenUpC) return null;
   return {
     code: 'heat-lost',

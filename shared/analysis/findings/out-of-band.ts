@@ -84,8 +84,15 @@ function bySwitches(
   return null;
 }
 
+/** A switch further before its turn than this share of the leg between is not that turn's. */
+const MOST_LEAD = 0.5;
+
 /** The switch instants of the points, where the record shows them. */
 function switchesOf({ points }: JudgedPoints, { extremes }: RunFacts): SwitchInstant[] {
-  const byTime = new Map(extremes.map(({ timeS, switched }) => [timeS, switched]));
-  return points.flatMap(({ timeS }) => byTime.get(timeS) ?? []);
+  const own = new Map<number, SwitchInstant>();
+  extremes.forEach(({ timeS, switched }, i) => {
+    const lengthS = timeS - (extremes[i - 1]?.timeS ?? -Infinity);
+    if (switched && timeS - switched.timeS < MOST_LEAD * lengthS) own.set(timeS, switched);
+  });
+  return points.flatMap(({ timeS }) => own.get(timeS) ?? []);
 }

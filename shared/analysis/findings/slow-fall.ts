@@ -1,7 +1,7 @@
 import type { Evidence } from '../analysis.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
 import { mean } from './judged-points.ts';
-import { firstCrossing, isDisturbed, nearestLegs, spanOf } from './trace.ts';
+import { firstCrossing, isDisturbed, nearestLegs, spanOf, temperatureAt } from './trace.ts';
 
 /** A fall at equal temperature that takes this many times the run's cleanest keeps some heat … */
 const SLOW_TIMES = 1.7;
@@ -35,6 +35,7 @@ export function undisturbedFalls(facts: RunFacts): RunLeg[] {
  * of the machine's clean run; null where it is not, or where none compares.
  */
 export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidence | null {
+  if (quickensAgain(leg, facts)) return null;
   const others = nearestLegs(falls, leg).filter(
     (other) => isAlike(leg, other) && !isAsFast(leg, other),
   );
@@ -50,6 +51,23 @@ export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidenc
   const [slowest] = slow.sort((a, b) => b.times - a.times);
   const found = slowest ?? slowFromHere(leg, falls);
   return found && toEvidence(found);
+}
+
+/** Where the parts of a fall that are compared begin and end, as shares of its time: clear of both rounded corners. */
+const PARTS = [0.15, 0.4, 0.65, 0.9];
+/** A part that falls this many times as quickly as the one before it had heat before it, and none in it. */
+const QUICKENS_TIMES = 1.3;
+
+/**
+ * Whether a fall slows down and then quickens: a short heat lies in it, too small to be a turn. Heat that stays on makes
+ * a fall slower and slower, as any first-order fall is.
+ */
+function quickensAgain({ from, to }: RunLeg, facts: RunFacts): boolean {
+  const lengthS = to.timeS - from.timeS;
+  const tempsC = PARTS.map((share) => temperatureAt(facts, from.timeS + share * lengthS) ?? NaN);
+  const dropsK = tempsC.slice(1).map((tempC, i) => tempsC[i]! - tempC);
+  const noiseK = 2 * Math.SQRT2 * facts.binned.smoothNoiseK;
+  return dropsK.slice(1).some((dropK, i) => dropK > QUICKENS_TIMES * dropsK[i]! + noiseK);
 }
 
 function toEvidence({ spanK, ownS, times, middleC }: Compared): Evidence {
