@@ -2,6 +2,7 @@ import type { Analysis, AnalysisInput, Leg } from './analysis.ts';
 import { decideOutcome } from './findings/decide-outcome.ts';
 import { findFindings } from './findings/find-findings.ts';
 import { gatherFacts } from './gather-facts.ts';
+import { replayGuard } from './guard/replay-guard.ts';
 import type { RunFacts, RunLeg } from './run-facts.ts';
 import type { Series } from './series.ts';
 
@@ -31,7 +32,7 @@ export function analyseRun(series: Series, input: AnalysisInput): Analysis {
     findings,
     outcome: decideOutcome(findings, facts),
     notJudged: whyNotJudged(facts),
-    guardAlarmS: null,
+    guardAlarmS: replayGuard(series, input.marks, input).alarmS,
   };
 }
 

@@ -31,6 +31,9 @@ const SHOWS_K = 1;
 /** An exhaust that falls, K/s. */
 const FALL_KPERS = -0.03;
 
+/** Said at nearly every reading: one object, so that a long replay makes none. */
+const QUIET: Decision = { says: 'quiet', why: null };
+
 /** The rules, in order of weight; a reading that waits for a second one decides nothing. */
 export function decide(state: GuardState, tempC: number, fit: ReadingFit): Decision {
   const { track } = state;
@@ -58,7 +61,7 @@ function decideWhileOn(
   fit: ReadingFit,
 ): Decision {
   const bandEndC = rating.opensC + rating.opensTolK;
-  if (track.tempC <= bandEndC) return { says: 'quiet', why: null };
+  if (track.tempC <= bandEndC) return QUIET;
   const isClimbing = track.slopeKPerS > CLIMB_KPERS;
   const course = isClimbing ? foresee(track, track.timeS - state.turns.legFromS) : null;
   const { cutOutC } = state.turns;
@@ -95,7 +98,7 @@ function watch(state: GuardState, track: ExhaustTrack, seen: Seen): Decision {
     return { says: 'watch', why: 'after-click' };
   }
   const stays = state.says === 'watch' && track.slopeKPerS > FALL_KPERS;
-  return stays ? { says: 'watch', why: state.why } : { says: 'quiet', why: null };
+  return stays ? { says: 'watch', why: state.why } : QUIET;
 }
 
 /** After heat off: what was called stays until the exhaust falls; what climbs on is fed past the selector. */
@@ -110,8 +113,7 @@ function decideAfterOff(
   if (risesAnew || climbsOn(state, off, track)) return { says: 'unplug', why: 'climbs-after-off' };
   if (atCeiling && state.says !== 'unplug') return { says: 'cut-heat', why: 'at-ceiling' };
   const isFalling = track.slopeKPerS < FALL_KPERS && track.tempC < state.turns.highestC - SHOWS_K;
-  if (isFalling || state.says === 'quiet' || state.says === 'watch')
-    return { says: 'quiet', why: null };
+  if (isFalling || state.says === 'quiet' || state.says === 'watch') return QUIET;
   return state.says === 'unplug'
     ? { says: 'unplug', why: 'climbs-after-off' }
     : { says: 'cut-heat', why: 'not-falling-yet' };

@@ -118,7 +118,8 @@ function readingVariance({ noiseK2, roundingK, slopeKPerS }: ExhaustTrack, since
 function isWild(track: ExhaustTrack, offK: number, sinceS: number): boolean {
   const climbs = track.slopeKPerS > 0 && track.readings >= KNOWN_CLIMB_READINGS;
   const fastKPerS = offK > 0 && climbs ? FASTER_KPERS : FASTEST_KPERS;
-  return Math.abs(offK) > leastWildK(track) + fastKPerS * sinceS;
+  const sizeK = Math.abs(offK);
+  return sizeK > LEAST_WILD_K && sizeK > leastWildK(track) + fastKPerS * sinceS;
 }
 
 function leastWildK({ noiseK2 }: ExhaustTrack): number {
