@@ -1,22 +1,21 @@
-import { QueryClientProvider } from '@tanstack/react-query';
-import { StrictMode } from 'react';
+import { StrictMode, type ComponentType } from 'react';
 import { createRoot } from 'react-dom/client';
-import { createQueryClient } from './api/query-client.ts';
 import './styles.css';
 
 const root = document.getElementById('root');
 if (!root) throw new Error('index.html has no #root');
 
-// A customer opens one page and goes nowhere from it: it comes without the router and all that stands behind it.
-const Page =
-  window.location.pathname === '/shared'
-    ? (await import('./pages/customer/customer-page.tsx')).CustomerPage
-    : (await import('./application.tsx')).Application;
+/** Two pages come without the router and all that stands behind it: who opens them goes nowhere else meanwhile. */
+async function rootOf(pathname: string): Promise<ComponentType> {
+  if (pathname === '/shared')
+    return (await import('./pages/customer/customer-root.tsx')).CustomerRoot;
+  return (await import('./application.tsx')).Application;
+}
+
+const Page = await rootOf(window.location.pathname);
 
 createRoot(root).render(
   <StrictMode>
-    <QueryClientProvider client={createQueryClient()}>
-      <Page />
-    </QueryClientProvider>
+    <Page />
   </StrictMode>,
 );

@@ -27,6 +27,7 @@ export function jobQuery(id: string) {
   return queryOptions({
     queryKey: ['jobs', id],
     queryFn: ({ signal }) => fetchJson(jobPageSchema, `/api/jobs/${id}`, { signal }),
+    meta: { url: `/api/jobs/${id}` },
   });
 }
 

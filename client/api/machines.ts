@@ -16,6 +16,7 @@ export function machineQuery(id: string) {
   return queryOptions({
     queryKey: ['machines', id],
     queryFn: ({ signal }) => fetchJson(machinePageSchema, `/api/machines/${id}`, { signal }),
+    meta: { url: `/api/machines/${id}` },
   });
 }
 
@@ -25,6 +26,7 @@ export function machineRunsQuery(id: string) {
     queryKey: ['machines', id, 'runs'],
     queryFn: ({ signal }) =>
       fetchJson(z.array(runCardSchema), `/api/machines/${id}/runs`, { signal }),
+    meta: { url: `/api/machines/${id}/runs` },
   });
 }
 

@@ -7,6 +7,7 @@ export function probesQuery() {
   return queryOptions({
     queryKey: ['probes'],
     queryFn: ({ signal }) => fetchJson(z.array(probeSchema), '/api/probes', { signal }),
+    meta: { url: '/api/probes' },
   });
 }
 

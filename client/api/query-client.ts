@@ -23,8 +23,13 @@ export function createQueryClient() {
     queryCache: new QueryCache({ onError: tellWhenSignedOut }),
     mutationCache: new MutationCache({ onError: tellWhenSignedOut }),
     defaultOptions: {
-      queries: { retry: isWorthRetrying, staleTime: 10_000 },
-      // A mutation is sent even where the browser believes itself offline: the page then says what happened.
+      // Asked even where the browser believes itself offline: the device may have the answer, and the page says so.
+      queries: {
+        retry: isWorthRetrying,
+        staleTime: 10_000,
+        networkMode: 'always',
+        refetchOnReconnect: 'always',
+      },
       mutations: { retry: false, networkMode: 'always' },
     },
   });

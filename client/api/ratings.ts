@@ -7,6 +7,7 @@ export function ratingsQuery() {
   return queryOptions({
     queryKey: ['ratings'],
     queryFn: ({ signal }) => fetchJson(z.array(ratingSchema), '/api/ratings', { signal }),
+    meta: { url: '/api/ratings' },
   });
 }
 

@@ -6,6 +6,7 @@ export function runQuery(id: string) {
   return queryOptions({
     queryKey: ['runs', id],
     queryFn: ({ signal }) => fetchJson(runPageSchema, `/api/runs/${id}`, { signal }),
+    meta: { url: `/api/runs/${id}` },
   });
 }
 

@@ -1,13 +1,21 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { sessionSchema, type PasswordChange } from '#shared/schemas/people.ts';
+import { readSession, leaveDevice } from '../device/device-session.ts';
 import { fetchJson, sendOnly } from './http.ts';
 
-/** Who is signed in, and the shop. */
+const SESSION_URL = '/api/session';
+
+/** Who is signed in, and the shop; from the device where the server cannot be asked. */
 export function sessionQuery() {
   return queryOptions({
     queryKey: ['session'],
-    queryFn: ({ signal }) => fetchJson(sessionSchema, '/api/session', { signal }),
+    queryFn: ({ signal }) =>
+      readSession(
+        () => fetchJson(sessionSchema, SESSION_URL, { signal }),
+        (answer) => sessionSchema.parse(answer),
+      ),
     staleTime: 5 * 60_000,
+    meta: { url: SESSION_URL },
   });
 }
 
@@ -15,7 +23,10 @@ export function useSignOut() {
   const queryClient = useQueryClient();
   return useMutation({
     mutationFn: () => sendOnly('DELETE', '/api/session'),
-    onSuccess: () => queryClient.clear(),
+    onSuccess: async () => {
+      await leaveDevice();
+      queryClient.clear();
+    },
   });
 }
 

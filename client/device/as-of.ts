@@ -26,3 +26,6 @@ export function createAsOf() {
     },
   };
 }
+
+/** Of this page. */
+export const asOf = createAsOf();

@@ -40,8 +40,8 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
   async function recount(): Promise<void> {
     const counts = person ? await things.count(person.id) : NO_THINGS;
     const next = { ...counts, others: await countOthers() };
-    if (JSON.stringify(next) === JSON.stringify(unsent)) return;
-    unsent = next;
+    // The same object while it says the same: who draws it draws no more than it must.
+    if (JSON.stringify(next) !== JSON.stringify(unsent)) unsent = next;
     for (const tell of listeners) tell();
   }
 
@@ -104,11 +104,16 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
       await recount();
     },
 
-    /** Signed out: what was read goes, what is not sent stays for when the person comes back. */
-    async leave(): Promise<void> {
-      person = null;
+    /** The server knows this session no longer: nothing opens from the device alone any more. */
+    async forget(): Promise<void> {
       await (await db()).delete('session', 'session');
       await answers.clear();
+    },
+
+    /** Signed out: what was read goes; what is not sent stays for when the person comes back. */
+    async leave(): Promise<void> {
+      person = null;
+      await this.forget();
       await recount();
     },
 

@@ -59,6 +59,8 @@ export function createKeepSending(device: Device, sender: Sender) {
 
   return {
     sendNow: attempt,
+    /** Signed in, or the server answered something else: worth another try at once. */
+    hope: handleHope,
     sending: () => sending,
     subscribe(tell: () => void): () => void {
       listeners.add(tell);

@@ -96,6 +96,16 @@ export function createKeptThings(db: () => Promise<DeviceDb>, nowMs: () => numbe
       await Promise.all([...writes, tx.done]);
     },
 
+    /** Puts refused things back among the unsent, under the same ids. */
+    async askAgain(ids: readonly string[]): Promise<void> {
+      const tx = (await db()).transaction('things', 'readwrite', STRICT);
+      const writes = ids.map(async (id) => {
+        const thing = await tx.store.get(id);
+        if (thing?.state === 'refused') await tx.store.put({ ...thing, state: 'unsent' });
+      });
+      await Promise.all([...writes, tx.done]);
+    },
+
     /** Lets go of things that are no longer wanted here. */
     async drop(ids: readonly string[]): Promise<void> {
       const tx = (await db()).transaction('things', 'readwrite', STRICT);

@@ -1,16 +1,15 @@
 import { useState } from 'react';
-import { useNavigate } from 'react-router-dom';
 import { passwordChangeSchema } from '#shared/schemas/people.ts';
-import { useChangePassword, useSignOut } from '../../api/session.ts';
+import { useChangePassword } from '../../api/session.ts';
 import { Cells, TextField } from '../../components/field.tsx';
 import { DeskPage } from '../../components/frame.tsx';
 import { Key } from '../../components/key.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
-import { Failed } from '../../components/waiting.tsx';
 import { FormHead } from '../../forms/form-frame.tsx';
 import { useCheckedForm } from '../../forms/use-checked-form.ts';
 import { useSession } from '../frame/session-context.ts';
+import { SignOut } from './sign-out.tsx';
 
 export function AccountPage() {
   const { person } = useSession();
@@ -82,25 +81,6 @@ function PasswordForm({ form, email }: PasswordFormProps) {
           You were signed out wherever else you were signed in.
         </Notice>
       )}
-    </section>
-  );
-}
-
-function SignOut() {
-  const signOut = useSignOut();
-  const navigate = useNavigate();
-  return (
-    <section>
-      <SectionHead>Sign out</SectionHead>
-      {signOut.isError && <Failed error={signOut.error} />}
-      <div className="pt-3">
-        <Key
-          disabled={signOut.isPending}
-          onClick={() => signOut.mutate(undefined, { onSuccess: () => void navigate('/sign-in') })}
-        >
-          Sign out on this device
-        </Key>
-      </div>
     </section>
   );
 }

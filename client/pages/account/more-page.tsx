@@ -11,6 +11,7 @@ export function MorePage() {
     ...(person.role === 'owner'
       ? [{ to: '/shop', name: 'Shop', about: 'people, name and address, units' }]
       : []),
+    { to: '/unsent', name: 'On this phone', about: 'what is not sent yet' },
     { to: '/account', name: person.name, about: 'password, signing out' },
   ];
   return (

@@ -5,6 +5,7 @@ import { isSignedOut } from '../../api/query-client.ts';
 import { sessionQuery } from '../../api/session.ts';
 import { DeskHead, PhoneTabs, SkipLink } from '../../components/frame.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
+import { DeviceLine } from './device-line.tsx';
 import { placesFor } from './places-for.ts';
 import { SignInAgain } from './sign-in-again.tsx';
 
@@ -51,6 +52,7 @@ function Frame({ session, isSite }: { session: Session; isSite: boolean }) {
     <div className="flex min-h-dvh flex-col">
       <SkipLink />
       <DeskHead places={placesFor(session.person.role)} who={whoOf(session)} isSite={isSite} />
+      <DeviceLine zone={session.shop.zone} />
       <div className="flex-1">
         <Outlet context={session} />
       </div>

@@ -1,18 +1,19 @@
 import { useState } from 'react';
-import type { VisitPage } from '#shared/schemas/jobs.ts';
 import { CHECK_CAUTIONS, RUN_CAUTIONS, SAFETY_LINE } from '#shared/wording/safety-lines.ts';
-import { useTickSafety } from '../../api/visits.ts';
 import { Key } from '../../components/key.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
+import { keepThing } from '../../device/this-device.ts';
 import { timeWords } from '../../format/when.ts';
+import type { VisitHere } from './use-visit.ts';
 
-type SafetySectionProps = { visit: VisitPage; zone: string };
+type SafetySectionProps = { visit: VisitHere; zone: string };
 
 /** The cautions before a run. Each is ticked by hand; with the last one the visit keeps when. */
 export function SafetySection({ visit, zone }: SafetySectionProps) {
-  const { safetyTickedAtMs: tickedAtMs, mayRecord } = visit;
-  const state = tickedAtMs === null ? 'not ticked yet' : `ticked ${timeWords(tickedAtMs, zone)}`;
+  const { safetyTickedAtMs: tickedAtMs, mayRecord, unsent } = visit;
+  const ticked = tickedAtMs === null ? 'not ticked yet' : `ticked ${timeWords(tickedAtMs, zone)}`;
+  const state = unsent.safety ? `${ticked}, not sent yet` : ticked;
   return (
     <section aria-labelledby="safety">
       <SectionHead site id="safety" state={<span role="status">{state}</span>}>
@@ -30,16 +31,30 @@ export function SafetySection({ visit, zone }: SafetySectionProps) {
   );
 }
 
+function tickNow(visitId: string) {
+  return keepThing('safety-ticks', { visitId, tickedAtMs: Date.now() });
+}
+
 function CautionsToTick({ visitId }: { visitId: string }) {
   const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set());
-  const keep = useTickSafety(visitId);
+  const [isKeeping, setIsKeeping] = useState(false);
+  const [error, setError] = useState<Error | null>(null);
+
+  /** On the device first: it is ticked with or without a line to the shop. */
+  function keep() {
+    setIsKeeping(true);
+    setError(null);
+    tickNow(visitId)
+      .catch(setError)
+      .finally(() => setIsKeeping(false));
+  }
 
   function handleTick(caution: string, isTicked: boolean) {
     const next = new Set(ticked);
     if (isTicked) next.add(caution);
     else next.delete(caution);
     setTicked(next);
-    if (next.size === RUN_CAUTIONS.length) keep.mutate();
+    if (next.size === RUN_CAUTIONS.length) keep();
   }
 
   return (
@@ -52,7 +67,7 @@ function CautionsToTick({ visitId }: { visitId: string }) {
                 type="checkbox"
                 className="!size-7"
                 checked={ticked.has(caution)}
-                disabled={keep.isPending}
+                disabled={isKeeping}
                 onChange={(event) => handleTick(caution, event.target.checked)}
               />
               <span>{caution}</span>
@@ -60,10 +75,10 @@ function CautionsToTick({ visitId }: { visitId: string }) {
           </li>
         ))}
       </ul>
-      {keep.isError && (
-        <Notice kind="stop" role="alert" head={keep.error.message} className="mt-3">
+      {error && (
+        <Notice kind="stop" role="alert" head={error.message} className="mt-3">
           <div className="pt-3">
-            <Key size="site" onClick={() => keep.mutate()}>
+            <Key size="site" onClick={keep}>
               Try again
             </Key>
           </div>

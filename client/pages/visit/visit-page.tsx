@@ -1,30 +1,29 @@
-import { useQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
-import type { VisitPage as Visit } from '#shared/schemas/jobs.ts';
-import { visitQuery } from '../../api/visits.ts';
 import { SitePage } from '../../components/frame.tsx';
 import { WordLink } from '../../components/key-link.tsx';
 import { CallbackNotice } from '../../components/notice.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
-import { SectionHead } from '../../components/section-head.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
 import { JOB_STATE_WORDS, quoted } from '../../format/job-words.ts';
 import { dayOf, daysBetween, momentWords, timeWords } from '../../format/when.ts';
 import { useSession } from '../frame/session-context.ts';
 import { Reach } from '../rounds/reach.tsx';
 import { MachineSection } from './machine-section.tsx';
+import { NotesSection } from './notes-section.tsx';
 import { RunsSection } from './runs-section.tsx';
 import { SafetySection } from './safety-section.tsx';
 import { TopLines } from './top-lines.tsx';
+import { useVisit, type VisitHere } from './use-visit.ts';
 import { VisitKeys } from './visit-keys.tsx';
 
 /** The on-site page of a visit, for one hand. */
 export function VisitPage() {
   const { id = '' } = useParams();
-  const visit = useQuery(visitQuery(id));
+  const { visit, here } = useVisit(id);
   const back = { to: '/rounds', name: 'Rounds' };
 
-  if (visit.isPending) {
+  if (here) return <Opened visit={here} nowMs={visit.dataUpdatedAt} />;
+  if (!visit.isError) {
     return (
       <SitePage back={back} top={<TopLines head="Visit" />}>
         <div className="px-4">
@@ -33,19 +32,16 @@ export function VisitPage() {
       </SitePage>
     );
   }
-  if (visit.isError) {
-    return (
-      <SitePage back={back} top={<TopLines head="Visit" />}>
-        <div className="px-4">
-          <Failed error={visit.error} onRetry={visit.refetch} />
-        </div>
-      </SitePage>
-    );
-  }
-  return <Opened visit={visit.data} nowMs={visit.dataUpdatedAt} />;
+  return (
+    <SitePage back={back} top={<TopLines head="Visit" />}>
+      <div className="px-4">
+        <Failed error={visit.error} onRetry={visit.refetch} />
+      </div>
+    </SitePage>
+  );
 }
 
-function Opened({ visit, nowMs }: { visit: Visit; nowMs: number }) {
+function Opened({ visit, nowMs }: { visit: VisitHere; nowMs: number }) {
   const { shop } = useSession();
   const { job } = visit;
   const { zone } = shop;
@@ -72,13 +68,13 @@ function Opened({ visit, nowMs }: { visit: Visit; nowMs: number }) {
         <SafetySection visit={visit} zone={zone} />
         <RunsSection visit={visit} zone={zone} />
         <MachineSection machineId={job.machine.id} zone={zone} />
-        <NotesSection visit={visit} />
+        <NotesSection visit={visit} zone={zone} />
       </div>
     </SitePage>
   );
 }
 
-function Callback({ visit, zone }: { visit: Visit; zone: string }) {
+function Callback({ visit, zone }: { visit: VisitHere; zone: string }) {
   const { callsBack } = visit.job;
   if (!callsBack) return null;
   const days = daysBetween(callsBack.takenAtMs, visit.startsAtMs, zone);
@@ -90,29 +86,5 @@ function Callback({ visit, zone }: { visit: Visit; zone: string }) {
         <WordLink to={`/jobs/${callsBack.id}`}>See what was done then</WordLink>
       </CallbackNotice>
     </div>
-  );
-}
-
-function NotesSection({ visit }: { visit: Visit }) {
-  const { notes, job } = visit;
-  const access = job.home.accessNotes;
-  return (
-    <section aria-labelledby="notes">
-      <SectionHead site id="notes">
-        Notes
-      </SectionHead>
-      <p className="pt-2 text-body whitespace-pre-line">
-        {notes || 'Nobody wrote a note for this visit.'}
-      </p>
-      {access && (
-        <p className="pt-2 text-body whitespace-pre-line">
-          <span className="lab block">Getting in</span>
-          {access}
-        </p>
-      )}
-      <WordLink to={`/jobs/${job.id}`} className="mt-1">
-        Job {job.number}
-      </WordLink>
-    </section>
   );
 }
