@@ -111,6 +111,7 @@ const deskPages: RouteObject[] = [
   ),
   page(async () => (await import('./pages/account/account-page.tsx')).AccountPage, 'account'),
   page(async () => (await import('./pages/account/more-page.tsx')).MorePage, 'more'),
+  page(async () => (await import('./pages/unsent/unsent-page.tsx')).UnsentPage, 'unsent'),
   page(async () => (await import('./pages/run/run-page.tsx')).RunPage, 'runs/:id'),
 ];
 
