@@ -2,7 +2,7 @@ import type { Finding } from '../analysis.ts';
 import { fitResponse } from '../fit-response.ts';
 import { bandOf } from '../judge-point.ts';
 import type { RunFacts, RunLeg } from '../run-facts.ts';
-import { totalU } from './trace.ts';
+import { lasted, spanWithTail, totalU } from './trace.ts';
 
 /** Shares of the rise left out of the two fits that must agree: the heater warms first, the drum later. */
 const EARLY_SHARE = 0.3;
@@ -29,29 +29,31 @@ export function findBelowCutOut(facts: RunFacts): Finding | null {
   if (!rating || load === 'damp' || !leg || !rise || !isLong(rise, facts)) return null;
   const heading = asymptoteOf(rise, facts);
   if (!heading) return null;
+  const { fromS, toS } = spanWithTail(rise, facts);
   const { lowC } = bandOf('cut-out', rating);
   if (heading.asymptoteC + heading.uK >= lowC) return null;
   return {
     code: 'below-cut-out',
-    fromS: rise.from.timeS,
-    toS: rise.to.timeS,
+    fromS,
+    toS,
     evidence: {
       asymptoteC: heading.asymptoteC,
       asymptoteUK: heading.uK,
       bandLowC: lowC,
       lastC: rise.to.tempC,
-      durationS: rise.to.timeS - rise.from.timeS,
+      durationS: toS - fromS,
       cutOutsBefore: facts.cutOuts.length,
     },
   };
 }
 
 /** After cut-outs of its own a machine has lost heat only where it heats for much longer than before. */
-function isLong({ from, to }: RunLeg, { cutOuts, cycles }: RunFacts): boolean {
+function isLong(rise: RunLeg, facts: RunFacts): boolean {
+  const { cutOuts, cycles } = facts;
   if (cutOuts.length === 0) return true;
   if (cycles.length === 0) return false;
   const longestS = cycles.reduce((longest, { onS }) => Math.max(longest, onS), 0);
-  return to.timeS - from.timeS > Math.max(LONG_S, LONG_TIMES * longestS);
+  return lasted(rise, facts) > Math.max(LONG_S, LONG_TIMES * longestS);
 }
 
 /** The rise that nobody cut short: the last heating leg, or the one before a fall that a person made. */
@@ -73,9 +75,10 @@ function asymptoteOf(rise: RunLeg, facts: RunFacts): { asymptoteC: number; uK: n
 
 function fitFrom(rise: RunLeg, facts: RunFacts, share: number) {
   const { timesS, tempsC } = facts.binned;
-  const startS = rise.from.timeS + share * (rise.to.timeS - rise.from.timeS);
+  const { fromS, toS } = spanWithTail(rise, facts);
+  const startS = fromS + share * (toS - fromS);
   const first = timesS.findIndex((timeS) => timeS >= startS);
-  const last = timesS.findLastIndex((timeS) => timeS <= rise.to.timeS);
+  const last = timesS.findLastIndex((timeS) => timeS <= toS);
   if (first < 0 || last - first < 5) return null;
   const fit = fitResponse(timesS.slice(first, last + 1), tempsC.slice(first, last + 1));
   if (!fit) return null;

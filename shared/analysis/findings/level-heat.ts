@@ -43,10 +43,10 @@ function levelsInBand(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   return true;
 }
 
-/** Lower bound of the asymptote that a rise was heading for, its first third left out, °C. */
+/** Lower bound of the asymptote that a rise was heading for, its first quarter left out, °C. */
 function headingBefore(facts: RunFacts, { fromS, toS }: { fromS: number; toS: number }) {
   const { timesS, tempsC } = facts.binned;
-  const first = timesS.findIndex((timeS) => timeS >= fromS + (toS - fromS) / 3);
+  const first = timesS.findIndex((timeS) => timeS >= fromS + (toS - fromS) / 4);
   const past = timesS.findIndex((timeS) => timeS > toS);
   if (first < 0 || past < 0) return null;
   const fit = fitResponse(timesS.slice(first, past), tempsC.slice(first, past));
