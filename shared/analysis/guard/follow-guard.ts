@@ -1,3 +1,4 @@
+import { correctionAt } from '../correct-series.ts';
 import { DEFAULT_RATING } from '../rating.ts';
 import type { Mark } from '../series.ts';
 import { decide } from './decide-guard.ts';
@@ -21,23 +22,31 @@ export function emptyState(setup: GuardSetup): GuardState {
   };
 }
 
-/** Takes a reading in, in place: constant work, and no forecast in words yet. Its time lies after the last one's. */
-export function takeReading(state: GuardState, timeS: number, tempC: number): void {
-  const { track, turns } = state;
+/**
+ * Takes a reading in, in place: constant work, and no forecast yet. Its time lies after the last one's.
+ *
+ * @param readC as read; what the probe's calibration puts right is put right here
+ */
+export function takeReading(state: GuardState, timeS: number, readC: number): void {
+  const { track, turns, setup } = state;
+  const { correction } = setup.probe;
+  const tempC = correction ? readC + correctionAt(correction, readC) : readC;
   if (!track) {
     begin(state, timeS, tempC);
     return;
   }
   const fit = followReading(track, timeS, tempC);
-  if (fit !== 'doubted') {
-    const byItself = !state.off && (state.says === 'quiet' || state.says === 'watch');
-    if (followTurns(turns, track, byItself)) state.click = null;
-    noteHeights(state);
-    const { says, why } = decide(state, tempC, fit);
-    state.says = says;
-    state.why = why;
+  if (fit === 'doubted') {
+    state.unconfirmed = { timeS, tempC: readC };
+    return;
   }
-  state.unconfirmed = track.doubted;
+  state.unconfirmed = null;
+  const byItself = !state.off && (state.says === 'quiet' || state.says === 'watch');
+  if (followTurns(turns, track, byItself)) state.click = null;
+  noteHeights(state);
+  const { says, why } = decide(state, tempC, fit);
+  state.says = says;
+  state.why = why;
 }
 
 /** A first reading at the ceiling waits for a second like any other that nothing bears out, but is watched. */

@@ -11,7 +11,7 @@ import { createRandom } from '#server/commands/heat-model/random.ts';
 
 const SETUP = {
   rating: DEFAULT_RATING,
-  probe: { accuracyK: 1, calibrationUK: 0, responseS: 3 },
+  probe: { accuracyK: 1, calibrationUK: 0, responseS: 3, correction: null },
 };
 const CEILING_C = DEFAULT_RATING.ceilingC;
 

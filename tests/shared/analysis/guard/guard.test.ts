@@ -12,7 +12,7 @@ import type { MarkKind } from '#shared/analysis/series.ts';
 
 const SETUP = {
   rating: DEFAULT_RATING,
-  probe: { accuracyK: 1, calibrationUK: 0, responseS: 3 },
+  probe: { accuracyK: 1, calibrationUK: 0, responseS: 3, correction: null },
 };
 
 /** °F as the guard's °C. */
@@ -206,6 +206,20 @@ describe('after heat off', () => {
 
     expect(feed(unplug, [175, 175, 175], 1, topS).says).toBe('unplug');
     expect(feed(unplug, ramp(175, 165, -0.4), 1, topS).says).toBe('quiet');
+  });
+});
+
+describe('a probe with a calibration', () => {
+  test('is put right: one that shows 4 °F too little reaches the ceiling 4 °F sooner', () => {
+    const correction = { interceptK: 4 / 1.8, slope: 0, aboutC: 60 };
+    const errors = { interceptErrorK: 0, slopeError: 0, correlation: 0 };
+    const probe = { ...SETUP.probe, correction: { ...correction, ...errors } };
+    const temps = ramp(165, 187, 0.1);
+
+    const said = sayings(startGuard({ ...SETUP, probe }), temps, 1, 0);
+
+    expect(said.at(-1)).toBe('cut-heat');
+    expect(temps[said.indexOf('cut-heat')]).toBeCloseTo(186, 0);
   });
 });
 

@@ -16,7 +16,7 @@ import { trueTurningPoints } from '#server/commands/heat-model/true-turning-poin
 
 const SETUP = {
   rating: DEFAULT_RATING,
-  probe: { accuracyK: 1.1, calibrationUK: 0, responseS: 3 },
+  probe: { accuracyK: 1.1, calibrationUK: 0, responseS: 3, correction: null },
 };
 const SEEDS = [61, 62, 63];
 const METHODS = [
