@@ -1,9 +1,30 @@
 import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
+import { VitePWA } from 'vite-plugin-pwa';
 import { defineConfig } from 'vitest/config';
 
+/** What opens the application without a server. The client registers it itself: see client/device/versions.ts. */
+const worker = VitePWA({
+  // A new version waits until the person takes it; a running measurement is never dropped.
+  registerType: 'prompt',
+  injectRegister: false,
+  manifest: false,
+  workbox: {
+    globPatterns: ['index.html', 'theme.js', 'assets/*.{js,css}', 'assets/*latin-*.woff2'],
+    // A customer opens one page, with a line to the shop.
+    globIgnores: ['assets/customer-*'],
+    navigateFallback: '/index.html',
+    navigateFallbackDenylist: [/^\/api\//, /^\/shared(\/|$)/, /\/[^/]+\.[a-z0-9]+$/i],
+    clientsClaim: true,
+    cleanupOutdatedCaches: true,
+    // One file: under the content policy a worker loads no second script.
+    inlineWorkboxRuntime: true,
+    sourcemap: false,
+  },
+});
+
 export default defineConfig({
-  plugins: [react(), tailwindcss()],
+  plugins: [react(), tailwindcss(), worker],
   publicDir: 'client/public',
   build: { outDir: 'dist/client', target: 'es2022', manifest: true, assetsInlineLimit: 0 },
   test: {

@@ -19,6 +19,8 @@ const POLICY = {
   'form-action': SELF,
   'frame-ancestors': NONE,
   'require-trusted-types-for': ["'script'"],
+  // Lets one address become a script: the service worker's (client/device/versions.ts).
+  'trusted-types': ['fusekeeper-worker'],
 };
 
 /**

@@ -24,6 +24,7 @@ const POLICY = [
   "form-action 'self'",
   "frame-ancestors 'none'",
   "require-trusted-types-for 'script'",
+  'trusted-types fusekeeper-worker',
 ].join(';');
 
 test('the policy and its companions are on every answer, whatever it says', async () => {
