@@ -1,4 +1,5 @@
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
+import { addGuard } from './add-guard.ts';
 import { addCodes, addTurns, isRightSet } from './add-run.ts';
 import { readArguments, type AccuracyArguments } from './arguments.ts';
 import { inspectRun } from './inspect-run.ts';
@@ -38,6 +39,7 @@ function judgeRun(run: ReadRun, tables: Tables, asked: AccuracyArguments): void 
   const ours = emptyTally();
   addTurns(ours, [...analysis.cutOuts, ...analysis.resets], seen);
   addCodes(ours, found, truth);
+  addGuard(ours, run, truth);
   addTo(tables.methods, seen.method.name, ours);
   addTo(tables.codes, code, ours);
   addTo(tables.plans, seen.plan.name, ours);

@@ -28,15 +28,22 @@ export type ReadRun = {
 /** Every run of the seeds, plans and methods asked for; a plan is simulated once and read by all. */
 export function* makeRuns(asked: AccuracyArguments): Generator<ReadRun> {
   for (let seed = asked.from; seed < asked.from + asked.seeds; seed++) {
-    for (const plan of plansOf(seed, asked.plan)) yield* readPlan(plan, seed, asked.method);
+    for (const [p, plan] of plansOf(seed, asked.plan).entries()) {
+      const methods = METHODS.filter(
+        ({ name, spacingS }, m) =>
+          name.includes(asked.method) &&
+          spacingS <= plan.mostSpacingS &&
+          (!asked.thin || (seed + p + m) % 3 === 0),
+      );
+      yield* readPlan(plan, seed, methods);
+    }
   }
 }
 
-function* readPlan(plan: Plan, seed: number, named: string): Generator<ReadRun> {
+function* readPlan(plan: Plan, seed: number, methods: Method[]): Generator<ReadRun> {
   const whole = simulateRun(plan.machine, plan.faults, plan.watch, createRandom(seed));
-  for (const [m, method] of METHODS.entries()) {
-    if (!method.name.includes(named) || method.spacingS > plan.mostSpacingS) continue;
-    const random = createRandom(seed * 7919 + 31 * m + plan.name.length);
+  for (const method of methods) {
+    const random = createRandom(seed * 7919 + 31 * METHODS.indexOf(method) + plan.name.length);
     const run = readRun(plan, whole, method, random);
     if (!isTooCoarse(run.seen)) yield { seed, ...run };
   }
