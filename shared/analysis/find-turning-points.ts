@@ -1,4 +1,5 @@
 import type { BinnedView, Extreme } from './run-facts.ts';
+import type { Noise } from './estimate-noise.ts';
 import type { Series } from './series.ts';
 import { quantile } from './statistics/quantile.ts';
 import { boundByReadings } from './turns/bound-by-readings.ts';
@@ -17,6 +18,8 @@ const MOST_ROUNDS = 4;
 const CREDIBLE_SHARE = 0.5;
 /** Nor is it less certain than this share of the greater swing beside it: it may have missed some of the smaller. */
 const MOST_U_SHARE = 0.5;
+/** A fit this sure of a turn, as a share of the greater swing beside it, is believed wherever the readings lie. */
+const SURE_SHARE = 0.1;
 /** Noise makes swings of this many deviations. */
 const NOISE_SWING = 8;
 
@@ -28,23 +31,23 @@ const NOISE_SWING = 8;
  *
  * @param series cleaned readings
  * @param view the same, binned and smoothed
- * @param noiseK standard deviation of a reading, K
+ * @param noise of a reading
  * @param swingK threshold, K
  */
 export function findTurningPoints(
   series: Series,
   view: BinnedView,
-  noiseK: number,
+  noise: Noise,
   swingK: number,
 ): Extreme[] {
   let rough = findRough(view, swingK);
   for (let round = 0; round < MOST_ROUNDS; round++) {
-    const extremes = locate(series, view, rough, noiseK);
+    const extremes = locate(series, view, rough, noise);
     const kept = withoutWeakSwings(extremes, swingK);
     if (kept.length === extremes.length) return extremes;
     rough = kept.map((i) => rough[i]!);
   }
-  return locate(series, view, rough, noiseK);
+  return locate(series, view, rough, noise);
 }
 
 type Rough = ReturnType<typeof findExtremes>;
@@ -74,26 +77,23 @@ function findClearExtremes(tempsC: Float64Array, swingK: number): Rough {
   }
 }
 
-function locate(series: Series, view: BinnedView, rough: Rough, noiseK: number): Extreme[] {
+function locate(series: Series, view: BinnedView, rough: Rough, noise: Noise): Extreme[] {
+  const { noiseK } = noise;
   if (rough.length < 2) return [];
   const turns = rough.map(({ kind, slot, tempC }) => ({
     kind,
     timeS: view.timesS[slot]!,
     tempC,
   }));
-  const located = locateTurns(
-    view,
-    turns.slice(1, -1),
-    turns[0]!.timeS,
-    turns[turns.length - 1]!.timeS,
-    noiseK,
-  );
+  const startS = turns[0]!.timeS;
+  const endS = turns[turns.length - 1]!.timeS;
+  const located = locateTurns(view, { turns: turns.slice(1, -1), startS, endS }, noise);
   return turns.map((turn, i): Extreme => {
     const isEnd = i === 0 || i === turns.length - 1;
-    const fitted = isEnd ? null : located[i - 1];
+    const fitted = isEnd ? null : located.turns[i - 1];
     const [swing, greaterK] = isEnd ? [0, 0] : swingsBeside(turns, i);
     const found =
-      fitted && isCredible(fitted, turn.tempC, swing, noiseK)
+      fitted && isCredible(fitted, turn.tempC, swing, greaterK, noiseK)
         ? withBoundedU(fitted, view, turn, greaterK, noiseK)
         : atReading(view, turn, noiseK);
     return {
@@ -117,8 +117,14 @@ function swingsBeside(turns: { tempC: number }[], i: number): [number, number] {
  * A fit that ends far from the readings of a swing that is no noise, or says that it knows nothing of it, is no better
  * than the reading. A swing that noise could make is left to the fit, which shows how little of it is real.
  */
-function isCredible({ tempC, uK }: LocatedTurn, readC: number, swing: number, noiseK: number) {
-  if (swing < NOISE_SWING * noiseK) return true;
+function isCredible(
+  { tempC, uK }: LocatedTurn,
+  readC: number,
+  swing: number,
+  greaterK: number,
+  noiseK: number,
+) {
+  if (uK < SURE_SHARE * greaterK || swing < NOISE_SWING * noiseK) return true;
   return Math.abs(tempC - readC) < CREDIBLE_SHARE * swing && uK < swing;
 }
 

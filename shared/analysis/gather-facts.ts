@@ -25,7 +25,7 @@ export function prepareRecord(raw: Series, askedSwingK: number) {
   const spacingS = usualSpacing(series.timesS);
   const view = binRecord(series, spacingS, noiseK, askedSwingK);
   const swingK = Math.max(askedSwingK, LEAST_SWING_DEVIATIONS * view.smoothNoiseK);
-  const extremes = findTurningPoints(series, view, noiseK, swingK);
+  const extremes = findTurningPoints(series, view, { noiseK, roundingK }, swingK);
   const gaps = findGaps(series.timesS, spacingS);
   return { series, spikes, spacingS, noiseK, roundingK, view, swingK, extremes, gaps };
 }

@@ -1,29 +1,17 @@
-import type { BinnedView, SwitchInstant } from '../run-facts.ts';
-import { gradientError } from '../statistics/solve-normal.ts';
-import { studentTQuantile } from '../statistics/student-t.ts';
-import { median } from '../statistics/quantile.ts';
 import { firstAtOrAfter } from '../first-at-or-after.ts';
-import type { FittedLegs, LegProblem } from './fit-legs.ts';
+import type { Noise } from '../estimate-noise.ts';
+import type { BinnedView, SwitchInstant } from '../run-facts.ts';
+import { firstOrderProblem, readTurn } from './first-order-turns.ts';
+import type { FittedLegs } from './fit-legs.ts';
 import { fitNearTurns } from './fit-near-turns.ts';
-import {
-  legAt,
-  lagsOf,
-  LN_LAG,
-  LN_TAU_COOL,
-  LN_TAU_FIRST,
-  LN_TAU_HEAT,
-  LOGIT_RATIO,
-  parameterCount,
-  placeOfRamp,
-  placeOfNode,
-  placeOfSwitch,
-  SHARED,
-  solveLegs,
-  type LegShape,
-  type SolvedLegs,
-} from './lagged-legs.ts';
+import { gatherValues, VALUES_PER_LEG, type WindowValues } from './gather-values.ts';
+import { LN_LAG, placeOfSwitch, SHARED } from './lagged-legs.ts';
 import { locateOneByOne, type Lesson } from './locate-one-by-one.ts';
 import { planWindows, type FitWindow } from './plan-windows.ts';
+import { mixed } from './mix-turns.ts';
+import { fitTurns, type WeighedPlants } from './plant-problem.ts';
+import { plantReader } from './read-plant.ts';
+import { plantAt, solvePlant } from './switched-plant.ts';
 
 /** A turn as located: expanded uncertainties, k = 2. */
 export type LocatedTurn = {
@@ -36,243 +24,146 @@ export type LocatedTurn = {
 /** A turn to be located. */
 export type RoughTurn = { kind: 'peak' | 'valley'; timeS: number; tempC: number };
 
-/** Values a leg keeps; the rest is averaged. */
-const VALUES_PER_LEG = 110;
-/** What is believed of the lags and legs before the fit, as shares of a usual leg; k = 1, in e-folds. */
-const LAG_SHARE = 0.09;
-const LAG_LOOSENESS = 1;
-const TAU_SHARE = 1.1;
-const TAU_LOOSENESS = 0.8;
-/** How much of a leg's swing may be a steady ramp; k = 1. */
-const RAMP_SHARE = 0.4;
-/** The fit's own noise is not believed under this share of the readings' noise. */
-const LEAST_NOISE_SHARE = 0.1;
-/** A switch instant less certain than this share of the leg after it is not shown by the record. */
-const MOST_SWITCH_U = 0.35;
+/** Turns and the edges of the record's first and last leg, s. */
+export type TurnsToLocate = { turns: RoughTurn[]; startS: number; endS: number };
 
-/** A real machine has more than two lags, which shifts the switches found: widened by what that took in simulations. */
-const SWITCH_WIDENING = 1.35;
+export type Located = {
+  /** One for each turn; null where no fit holds. */
+  turns: (LocatedTurn | null)[];
+  /** Where the last leg is at a time after the last turn, °C, if it goes on as it is; null where no fit holds. */
+  aheadC: (timeS: number) => number | null;
+};
 
-/** Beyond this many turns only some are fitted jointly; the others one by one, with what those taught. */
+/** Beyond this many turns only some are fitted jointly; the others one by one, with what those taught … */
 const MANY_TURNS = 60;
+/** … but not so few readings, of which one turn alone has too few; up to this many turns. */
+const FEW_READINGS = 10;
+const MOST_SPARSE = 240;
+/** Turns fitted at once: at least so many, and more where readings are so few that it costs no more than this. */
+const LEAST_AT_ONCE = 12;
+const MOST_WORK = 1.8e6;
 
 /**
- * Locates turns by fitting lagged first-order legs through all of them: the temperature and time of the
- * noise-free extreme, and where the slope broke before it.
+ * Locates turns by fitting a switched plant through all of them: the temperature and time of the noise-free extreme, and
+ * where the slope broke before it. First-order legs of their own are where that fit starts, and what is left where it
+ * does not hold.
  *
- * @param turns alternating, in time order, between the first and the last edge
- * @param startS time of the extreme before the first turn, s
- * @param endS time of the extreme after the last turn, s
- * @param noiseK standard deviation of a reading, K
- * @returns one for each turn; null where no fit holds
+ * @param noise of a reading
  */
-export function locateTurns(
-  view: BinnedView,
-  turns: RoughTurn[],
-  startS: number,
-  endS: number,
-  noiseK: number,
-): (LocatedTurn | null)[] {
-  const edgesS = [startS, ...turns.map((turn) => turn.timeS), endS];
-  const windows = planWindows(edgesS);
-  const located = new Array<LocatedTurn | null>(turns.length).fill(null);
-  const isMany = turns.length > MANY_TURNS && windows.length > 4;
-  const jointly = isMany ? spreadOut(windows.length) : windows.map((_, i) => i);
-  const lessons: Lesson[] = [];
+export function locateTurns(view: BinnedView, task: TurnsToLocate, noise: Noise): Located {
+  const { turns } = task;
+  const isMany =
+    turns.length > MOST_SPARSE ||
+    (turns.length > MANY_TURNS && view.timesS.length > FEW_READINGS * turns.length);
+  return isMany ? locateMany(view, task, noise) : locateJointly(view, task, noise);
+}
+
+function edgesOf({ turns, startS, endS }: TurnsToLocate): number[] {
+  return [startS, ...turns.map(({ timeS }) => timeS), endS];
+}
+
+function locateJointly(view: BinnedView, task: TurnsToLocate, noise: Noise): Located {
+  const { turns } = task;
+  const located: Located = { turns: turns.map(() => null), aheadC: () => null };
   let shared: Float64Array | null = null;
+  for (const window of planWindows(edgesOf(task), turnsAtOnce(view, task))) {
+    const own = turns.slice(window.from - 1, window.to - 1);
+    const values = gatherValues(
+      view,
+      window,
+      own.map(({ timeS }) => timeS),
+    );
+    const simple = fitFirstOrder(values, own, window, noise.noiseK, shared);
+    const plants = fitTurns(values, own, window, noise, simple && startFrom(simple));
+    readWindow(located, turns, window, plants, simple, values);
+    if (simple && own.length > 2) shared = simple.parameters.slice(0, SHARED);
+  }
+  return located;
+}
+
+function readWindow(
+  located: Located,
+  turns: RoughTurn[],
+  window: FitWindow,
+  plants: WeighedPlants,
+  simple: FittedLegs | null,
+  values: WindowValues,
+): void {
+  const readers = plants.map(({ fit, share }) => ({
+    read: plantReader(fit, values.timesS),
+    share,
+  }));
+  for (let turn = window.readFrom; turn < window.readTo; turn++) {
+    const { kind } = turns[turn - 1]!;
+    const place = turn - window.from;
+    const readings = readers.map(({ read, share }) => ({ turn: read(place, kind), share }));
+    located.turns[turn - 1] =
+      readings.length > 0 ? mixed(readings) : simple && readTurn(simple, place, kind);
+  }
+  const [best] = [...plants].sort((a, b) => b.share - a.share);
+  if (!best || window.readTo <= turns.length) return;
+  const { parameters, shape } = best.fit;
+  const solved = solvePlant(parameters, shape);
+  located.aheadC = (timeS) => plantAt(solved, shape.switches, timeS);
+}
+
+function fitFirstOrder(
+  values: WindowValues,
+  own: RoughTurn[],
+  window: FitWindow,
+  noiseK: number,
+  shared: Float64Array | null,
+): FittedLegs | null {
+  const problem = firstOrderProblem(values, own, window, noiseK, shared);
+  return problem && fitNearTurns(problem);
+}
+
+/** The longest of three lags is about as long as this times the two lags' sum. */
+const LAG_OF_SUM = 1.8;
+
+function startFrom({ parameters, shape }: FittedLegs) {
+  const lagS = LAG_OF_SUM * Math.exp(parameters[LN_LAG]!);
+  return { lagS, switchesS: parameters.slice(SHARED, placeOfSwitch(shape.switches)) };
+}
+
+/** The cost of a round goes with the values and the square of the parameters. */
+function turnsAtOnce(view: BinnedView, { turns, startS, endS }: TurnsToLocate): number {
+  const count = firstAtOrAfter(view.timesS, endS) - firstAtOrAfter(view.timesS, startS);
+  const each = Math.min(VALUES_PER_LEG, count / (turns.length + 1));
+  let most = LEAST_AT_ONCE;
+  while (most < turns.length && most * each * (2 * most + 13) ** 2 < MOST_WORK) most++;
+  return most;
+}
+
+/** Some windows jointly, with first-order legs; all other turns one by one. */
+function locateMany(view: BinnedView, task: TurnsToLocate, { noiseK }: Noise): Located {
+  const { turns } = task;
+  const edgesS = edgesOf(task);
+  const windows = planWindows(edgesS, LEAST_AT_ONCE);
+  const located = new Array<LocatedTurn | null>(turns.length).fill(null);
+  const jointly = windows.length > 4 ? spreadOut(windows.length) : windows.map((_, i) => i);
+  const lessons: Lesson[] = [];
   for (const i of jointly) {
     const window = windows[i]!;
-    const problem = buildProblem(view, turns, window, noiseK, shared);
-    const fit: FittedLegs | null = problem && fitNearTurns(problem.task);
+    const own = turns.slice(window.from - 1, window.to - 1);
+    const values = gatherValues(
+      view,
+      window,
+      own.map(({ timeS }) => timeS),
+    );
+    const fit = fitFirstOrder(values, own, window, noiseK, null);
     for (let turn = window.readFrom; turn < window.readTo; turn++) {
       located[turn - 1] = fit && readTurn(fit, turn - window.from, turns[turn - 1]!.kind);
     }
-    if (!fit || !problem || window.to - window.from <= 2) continue;
-    if (!isMany) shared = fit.parameters.slice(0, SHARED);
-    lessons.push({ window: i, fit, valueNoiseK: fit.noiseK * Math.sqrt(problem.averaged) });
+    if (!fit || own.length <= 2) continue;
+    lessons.push({ window: i, fit, valueNoiseK: fit.noiseK * Math.sqrt(values.averaged) });
   }
-  if (isMany && lessons.length > 0) {
-    locateOneByOne(view, turns, edgesS, windows, lessons, located);
-  }
-  return located;
+  if (lessons.length > 0) locateOneByOne(view, turns, edgesS, windows, lessons, located);
+  return { turns: located, aheadC: () => null };
 }
 
 /** The first windows, two inside and the last: what changes over a long record shows. */
 function spreadOut(count: number): number[] {
   const places = [0, 1, Math.floor(count / 3), Math.floor((2 * count) / 3), count - 1];
   return [...new Set(places)];
-}
-
-function buildProblem(
-  view: BinnedView,
-  turns: RoughTurn[],
-  window: FitWindow,
-  noiseK: number,
-  shared: Float64Array | null,
-): { task: LegProblem; averaged: number } | null {
-  const own = turns.slice(window.from - 1, window.to - 1);
-  const values = gather(view, window, own.length + 1);
-  if (values.timesS.length < 2 * own.length + 3) return null;
-  const shape: LegShape = {
-    switches: own.length,
-    heatsFirst: own[0]!.kind === 'peak',
-    startS: window.startS,
-    endS: window.endS,
-  };
-  const start = new Float64Array(parameterCount(shape));
-  const looseness = new Float64Array(start.length);
-  const cuts = [window.startS, ...own.map((turn) => turn.timeS), window.endS];
-  const usualS = median(cuts.slice(1).map((cut, i) => cut - cuts[i]!));
-  const lagS = shared ? Math.exp(shared[LN_LAG]!) : LAG_SHARE * usualS;
-  const shareds = shared ?? [
-    Math.log(TAU_SHARE * usualS),
-    Math.log(TAU_SHARE * usualS),
-    Math.log(TAU_SHARE * usualS),
-    Math.log(lagS),
-    0,
-  ];
-  for (let j = 0; j < SHARED; j++) start[j] = shareds[j]!;
-  looseness[LN_TAU_HEAT] = shared ? 0.4 : TAU_LOOSENESS;
-  looseness[LN_TAU_COOL] = shared ? 0.4 : TAU_LOOSENESS;
-  looseness[LN_TAU_FIRST] = 1.2;
-  looseness[LN_LAG] = shared ? 0.2 : LAG_LOOSENESS;
-  looseness[LOGIT_RATIO] = shared ? 0.8 : 3;
-
-  const nodes = [
-    values.tempsC[0]!,
-    ...own.map((turn) => turn.tempC),
-    values.tempsC[values.tempsC.length - 1]!,
-  ];
-  const swings = nodes.slice(1).map((node, i) => Math.abs(node - nodes[i]!));
-  const greatK = Math.max(...swings, 10 * noiseK, 0.01);
-  own.forEach((turn, k) => {
-    start[placeOfSwitch(k)] = Math.max(
-      turn.timeS - 0.8 * lagS,
-      cuts[k]! + 0.3 * (turn.timeS - cuts[k]!),
-    );
-    looseness[placeOfSwitch(k)] = 2 * usualS;
-  });
-  nodes.forEach((node, k) => {
-    start[placeOfNode(shape, k)] = node;
-    looseness[placeOfNode(shape, k)] = 3 * greatK;
-  });
-  swings.forEach((swing, leg) => {
-    looseness[placeOfRamp(shape, leg)] = RAMP_SHARE * Math.max(swing, 0.3 * greatK);
-  });
-  const { timesS, tempsC, weights, averaged } = values;
-  const leastNoiseK = Math.max((LEAST_NOISE_SHARE * noiseK) / Math.sqrt(averaged), 1e-3);
-  return { task: { shape, timesS, tempsC, weights, start, looseness, leastNoiseK }, averaged };
-}
-
-/** The window's values, averaged where there are more than a leg needs. */
-function gather(view: BinnedView, window: FitWindow, legs: number) {
-  const from = firstAtOrAfter(view.timesS, window.startS - 1e-9);
-  const to = firstAtOrAfter(view.timesS, window.endS + 1e-9);
-  const each = Math.max(1, Math.ceil((to - from) / (legs * VALUES_PER_LEG)));
-  const timesS: number[] = [];
-  const tempsC: number[] = [];
-  const weights: number[] = [];
-  for (let i = from; i < to;) {
-    let sumS = 0;
-    let sumC = 0;
-    let count = 0;
-    const firstS = view.timesS[i]!;
-    for (; i < to && count < each && view.timesS[i]! - firstS < (each + 1) * view.widthS; i++) {
-      sumS += view.timesS[i]!;
-      sumC += view.tempsC[i]!;
-      count++;
-    }
-    timesS.push(sumS / count);
-    tempsC.push(sumC / count);
-    weights.push(count / each);
-  }
-  return {
-    timesS: Float64Array.from(timesS),
-    tempsC: Float64Array.from(tempsC),
-    weights: Float64Array.from(weights),
-    averaged: each,
-  };
-}
-
-/** Reads one turn off a fit, with the uncertainty that the parameters' covariance gives it. */
-function readTurn(fit: FittedLegs, k: number, kind: 'peak' | 'valley'): LocatedTurn | null {
-  const { shape, parameters } = fit;
-  const solved = solveLegs(parameters, shape);
-  const switchS = parameters[placeOfSwitch(k)]!;
-  const nextS = k + 1 < shape.switches ? parameters[placeOfSwitch(k + 1)]! : shape.endS;
-  const { lagAS, lagBS } = lagsOf(parameters);
-  const untilS = Math.min(nextS, switchS + 10 * (lagAS + lagBS));
-  const timeS = extremeBetween(solved, k + 1, switchS, untilS, kind === 'peak' ? 1 : -1);
-  const coverage = coverageFactor(fit.degrees);
-  const uK = coverage * temperatureError(fit, k + 1, timeS);
-  const error = new Float64Array(parameters.length);
-  error[placeOfSwitch(k)] = 1;
-  const switchCoverage = SWITCH_WIDENING * coverage;
-  const uS = switchCoverage * gradientError(fit.factor, error, parameters.length);
-  const tempC = legAt(solved, k + 1, timeS);
-  if (!Number.isFinite(tempC + uK + timeS + uS)) return null;
-  if (uS > MOST_SWITCH_U * (nextS - switchS)) return { timeS, tempC, uK, switched: null };
-  const switchUK = switchCoverage * temperatureError(fit, k, switchS, placeOfSwitch(k));
-  const switched = { timeS: switchS, tempC: legAt(solved, k, switchS), uS, uK: switchUK };
-  return { timeS, tempC, uK, switched };
-}
-
-/** Two standard deviations of a normal variable cover 95.45 %; with few degrees of freedom it takes more. */
-export function coverageFactor(degrees: number): number {
-  return studentTQuantile(0.97725, Math.max(1.5, degrees));
-}
-
-/** Standard error of a leg's temperature at a time, or at the switch whose place is given. */
-function temperatureError(
-  fit: FittedLegs,
-  leg: number,
-  fixedS: number,
-  switchPlace: number | null = null,
-): number {
-  const { parameters, shape } = fit;
-  const gradient = new Float64Array(parameters.length);
-  const at = () => {
-    const timeS = switchPlace === null ? fixedS : parameters[switchPlace]!;
-    return legAt(solveLegs(parameters, shape), leg, timeS);
-  };
-  for (let j = 0; j < parameters.length; j++) {
-    const step = j < SHARED || j < placeOfNode(shape, 0) ? 1e-4 : 1e-2;
-    const kept = parameters[j]!;
-    parameters[j] = kept + step;
-    const above = at();
-    parameters[j] = kept - step;
-    const below = at();
-    parameters[j] = kept;
-    gradient[j] = (above - below) / (2 * step);
-  }
-  return gradientError(fit.factor, gradient, parameters.length);
-}
-
-/** Time of a leg's greatest (sign 1) or least (sign −1) temperature between two times, s. */
-function extremeBetween(
-  solved: SolvedLegs,
-  leg: number,
-  fromS: number,
-  toS: number,
-  sign: 1 | -1,
-): number {
-  const places = 60;
-  let best = 0;
-  let bestC = -Infinity;
-  for (let i = 0; i <= places; i++) {
-    const tempC = sign * legAt(solved, leg, fromS + ((toS - fromS) * i) / places);
-    if (tempC > bestC) {
-      bestC = tempC;
-      best = i;
-    }
-  }
-  let lowS = fromS + ((toS - fromS) * Math.max(0, best - 1)) / places;
-  let highS = fromS + ((toS - fromS) * Math.min(places, best + 1)) / places;
-  for (let i = 0; i < 40; i++) {
-    const aS = lowS + 0.382 * (highS - lowS);
-    const bS = lowS + 0.618 * (highS - lowS);
-    if (sign * legAt(solved, leg, aS) < sign * legAt(solved, leg, bS)) lowS = aS;
-    else highS = bS;
-  }
-  return (lowS + highS) / 2;
 }

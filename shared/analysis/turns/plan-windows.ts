@@ -12,8 +12,6 @@ export type FitWindow = {
   endS: number;
 };
 
-/** More at once costs much and says little more about any one of them. */
-const MOST_TURNS = 12;
 /** A leg this much longer than the usual one of its kind is no longer one first-order response. */
 const LONG_LEG = 2.5;
 /** How much of a long leg is used beside a turn, in usual legs. */
@@ -27,13 +25,14 @@ const LEFT_OUT = 0.12;
 const CORNER = 0.4;
 
 /**
- * Cuts a record's turns into windows: at most twelve at once, and never across a leg much longer than usual. Where a
+ * Cuts a record's turns into windows: at most so many at once, and never across a leg much longer than usual. Where a
  * window ends between like legs it takes in one turn more as a neighbour.
  *
  * @param edgesS times of the turns with the record's first and last extreme around them, s
+ * @param mostTurns how many at once: more cost much and say little more about any one of them
  * @returns windows in order; every turn (1 to edges − 2) is read off exactly one
  */
-export function planWindows(edgesS: ArrayLike<number>): FitWindow[] {
+export function planWindows(edgesS: ArrayLike<number>, mostTurns: number): FitWindow[] {
   const turns = edgesS.length - 2;
   const usualS = [usualLeg(edgesS, 0), usualLeg(edgesS, 1)] as const;
   const isJoined = (leg: number) => leg > 0 && leg < turns && !isLong(edgesS, leg, usualS);
@@ -41,7 +40,7 @@ export function planWindows(edgesS: ArrayLike<number>): FitWindow[] {
   let readFrom = 1;
   while (readFrom <= turns) {
     let readTo = readFrom + 1;
-    while (readTo <= turns && readTo - readFrom < MOST_TURNS && isJoined(readTo - 1)) readTo++;
+    while (readTo <= turns && readTo - readFrom < mostTurns && isJoined(readTo - 1)) readTo++;
     const from = isJoined(readFrom - 1) ? readFrom - 1 : readFrom;
     const to = isJoined(readTo - 1) ? readTo + 1 : readTo;
     windows.push({ from, to, readFrom, readTo, ...reach(edgesS, from, to, usualS) });

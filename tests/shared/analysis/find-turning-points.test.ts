@@ -99,7 +99,8 @@ describe('a stopwatch and few readings a cycle', () => {
   legs.push({ asymptoteC: 25, tauS: 110, untilC: 49 });
   const swingK = 62 - 50;
 
-  test.each([13, 15, 16, 18])(
+  // 16 s is left out: there each cycle of 80 s is read at the same five places, and nothing shows what lies between.
+  test.each([13, 15, 17, 18])(
     'at %i s no uncertainty is wilder than half a swing, and most cover',
     (spacingS) => {
       let covered = 0;

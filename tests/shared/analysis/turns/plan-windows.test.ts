@@ -12,7 +12,7 @@ test('reads every turn off exactly one window, and off no window’s far side', 
       const edgesS = [0];
       for (const legS of legsS) edgesS.push(edgesS.at(-1)! + legS);
       const read: number[] = [];
-      for (const window of planWindows(edgesS)) {
+      for (const window of planWindows(edgesS, 12)) {
         for (let turn = window.readFrom; turn < window.readTo; turn++) {
           read.push(turn);
           expect(window.startS).toBeLessThan(edgesS[turn]!);
@@ -29,7 +29,7 @@ test('reads every turn off exactly one window, and off no window’s far side', 
 test('a leg far longer than the others is not fitted across', () => {
   const edgesS = [0, 300, 360, 450, 510, 600, 2600, 2690, 2750, 2840];
 
-  const windows = planWindows(edgesS);
+  const windows = planWindows(edgesS, 12);
 
   expect(windows).toHaveLength(2);
   expect(windows[0]!.endS).toBeLessThan(2600);
