@@ -17,7 +17,7 @@ const LABELLED = /(channel|sensor|probe|port|input|zone|type|couple|tc|ch|phase)
 export function findUnit(text: string): TemperatureUnit | null {
   if (/℉/.test(text)) return 'F';
   // U+2103, and its two-byte forms of GBK and Shift-JIS read as Windows-1252
-  if (/℃|¡æ|\u0081Ž/.test(text)) return 'C';
+  if (/℃|¡æ|\u0081[Ž\u008e]/.test(text)) return 'C';
   const named = NAME.exec(text);
   if (named) return unitLetter(named[1]!);
   const letter = SIGNED.exec(text) ?? WORD.exec(text) ?? BRACKETED.exec(text);

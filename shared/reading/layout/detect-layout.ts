@@ -21,6 +21,9 @@ export type LayoutResult =
   | { kind: 'question'; question: QuestionDraft; columns: LogColumn[] }
   | { kind: 'problem'; problem: ReadProblem };
 
+/** Fewer are no series. */
+export const MIN_READINGS = 3;
+
 /** From sampled lines to the plan by which every row is read. */
 export function detectLayout(sample: SampleLines, answers: Answers): LayoutResult {
   const lines = [...sample.head, ...sample.rest].map(({ text }) => text);
@@ -31,14 +34,27 @@ export function detectLayout(sample: SampleLines, answers: Answers): LayoutResul
   const names = columnNames(table.header, tableWidth(table));
   const titles = names.map((name, i) => `${name} ${table.unitRow?.[i] ?? ''}`.trim());
   const decimal = chooseDecimal(table.columns, table.delimiter, answers);
-  if (typeof decimal !== 'string') {
-    return { kind: 'question', question: decimal, columns: plainColumns(names) };
-  }
+  const ask = (question: QuestionDraft) => askOrRefuse(question, sample, table, names);
+  if (typeof decimal !== 'string') return ask(decimal);
   const { columns, preamble } = table;
   const clock = chooseClock({ columns, names, titles, preamble, decimal, answers });
-  if (clock.kind === 'question') return { ...clock, columns: plainColumns(names) };
+  if (clock.kind === 'question') return ask(clock.question);
   if (clock.kind === 'problem') return { kind: 'problem', problem: problem(clock.code) };
   return planRows(sample, table, { names, titles, decimal, clock }, answers);
+}
+
+/** Nobody is asked about a file that has too few rows whatever the answer. */
+function askOrRefuse(
+  question: QuestionDraft,
+  { isWhole }: SampleLines,
+  { columns }: Table,
+  names: string[],
+): LayoutResult {
+  const say = columns[0]!.cells.length;
+  if (isWhole && say < MIN_READINGS) {
+    return { kind: 'problem', problem: problem('too-few-readings', { say }) };
+  }
+  return { kind: 'question', question, columns: plainColumns(names) };
 }
 
 type Understood = { names: string[]; titles: string[]; decimal: Decimal; clock: ClockChoice };

@@ -182,7 +182,10 @@ function splitHeader(line: string, { delimiter, width }: DelimiterChoice): strin
 /** The share of filled cells that are words; 0 where that, or their number, makes the line no header. */
 function wordShare(cells: string[], width: number, line: string): number {
   if (/^sep=.\s*$/i.test(line)) return 0;
-  const words = cells.filter((cell) => cellKind(cell) === 'text').length;
+  const kinds = cells.map(cellKind);
+  // "No" over a column of numbers is a word, and no sensor that is open
+  const isWord = (kind: CellKind) => kind === 'text' || kind === 'open';
+  const words = kinds.includes('text') ? kinds.filter(isWord).length : 0;
   const filled = cells.filter((cell) => cell !== '').length;
   if (words <= filled * 0.5) return 0;
   if (width === 1) return cells.length === 1 && !/[:=]/.test(line) ? 1 : 0;

@@ -6,7 +6,12 @@ const MOST_TITLE_LINES = 4;
 const TAIL_BYTES = 6_000;
 
 /** Lines from the start of a file and, for judging its columns only, from its middle and its end. */
-export type SampleLines = { head: Line[]; rest: Line[] };
+export type SampleLines = {
+  head: Line[];
+  rest: Line[];
+  /** The head is the whole file. */
+  isWhole: boolean;
+};
 
 type Decode = (bytes: Uint8Array, from: number, to: number) => string;
 
@@ -21,7 +26,7 @@ export function sampleLines(bytes: Uint8Array, decode: Decode): SampleLines {
   if (tail > Math.max(after, (rest.at(-1)?.to ?? 0) + 1)) {
     rest.push(...takeLines(bytes, tail, 0, HEAD_LINES, decode));
   }
-  return { head, rest };
+  return { head, rest, isWhole: after >= bytes.length };
 }
 
 /** Titles of several lines: where a cell's quote is open at the end of a line, the next lines belong to it. */

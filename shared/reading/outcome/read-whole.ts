@@ -1,3 +1,4 @@
+import { MIN_READINGS } from '../layout/detect-layout.ts';
 import type { Layout } from '../layout/layout.ts';
 import type { ReadOutcome, ReadProblem, ReadWarning } from '../log-reading.ts';
 import { judgeLastLine } from '../rows/judge-last-line.ts';
@@ -13,8 +14,6 @@ import { askWith } from './ask-with.ts';
 import { buildReading } from './build-reading.ts';
 import { finishReading } from './finish-reading.ts';
 import type { LogFile } from './log-file.ts';
-
-const MIN_READINGS = 3;
 
 /** The outcome by one layout, and how many rows it could not read. */
 export type WholeRead = { outcome: ReadOutcome; unread: number };
@@ -87,6 +86,7 @@ function endWarnings({ text, decode }: LogFile, layout: Layout, store: RowStore)
   if (judged === 'unsure') return [warning('no-last-line-end', { row: lastRow })];
   if (store.rows[store.count - 1] === lastRow) {
     store.unread.add(lastRow, SKIP_WORDS.cutOff());
+    for (const list of store.noReading) list.forget(lastRow);
     const last = store.count - 1;
     keepRows(store, (place) => place !== last);
   }

@@ -2,11 +2,10 @@ import type { SampleLines } from '../layout/sample-lines.ts';
 import type { ReadProblem } from '../log-reading.ts';
 import type { LogText } from '../text/decode-text.ts';
 import { foreignKind } from '../text/foreign-file.ts';
-import { lineEnd, pastLineEnd } from '../text/split-lines.ts';
+import { LONGEST_LINE, lineEnd, pastLineEnd } from '../text/split-lines.ts';
 import { problem } from '../words/problem-words.ts';
 
 const MOST_COLUMNS = 1000;
-const LONGEST_LINE = 100_000;
 
 /** Why bytes can be no log, before anything is made of them; null where they may be one. */
 export function refuseEarly(bytes: Uint8Array, text: LogText): ReadProblem | null {

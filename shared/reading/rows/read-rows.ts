@@ -4,7 +4,7 @@ import { roleOfName } from '../layout/column-roles.ts';
 import { problem } from '../words/problem-words.ts';
 import { SKIP_WORDS } from '../words/skip-words.ts';
 import { splitCells } from '../text/split-cells.ts';
-import { lineEnd, pastLineEnd } from '../text/split-lines.ts';
+import { LONGEST_BYTES, LONGEST_LINE, lineEnd, pastLineEnd } from '../text/split-lines.ts';
 import type { LogText } from '../text/decode-text.ts';
 import { joinQuoted, type JoinedRow } from './join-quoted.ts';
 import { QuickRow } from './quick-row.ts';
@@ -141,6 +141,7 @@ class RowsReader {
     const { input, store, plan, facts } = this;
     const { layout } = plan;
     this.joined = null;
+    if (to - from > LONGEST_BYTES) return problem('line-too-long', { row, say: LONGEST_LINE });
     const line = input.decode(input.text.bytes, from, to);
     if (line.trim() === '') return null;
     if (line.includes('\0')) return problem('nul-inside', { row });

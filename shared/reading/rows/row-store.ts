@@ -8,6 +8,14 @@ export class RowList {
   count = 0;
   readonly rows: SkippedRow[] = [];
 
+  /** Takes back what was told of a row. */
+  forget(row: number): void {
+    const place = this.rows.findIndex((listed) => listed.row === row);
+    if (place < 0) return;
+    this.rows.splice(place, 1);
+    this.count--;
+  }
+
   add(row: number, why: string): void {
     this.count++;
     if (this.rows.length < MOST_LISTED) this.rows.push({ row, why });

@@ -3,6 +3,11 @@ import type { Encoding } from './decode-text.ts';
 const LF = 10;
 const CR = 13;
 
+/** No line of a log has more characters ... */
+export const LONGEST_LINE = 100_000;
+/** ... and UTF-8 spends four octets on one at most; what is longer is not made text of. */
+export const LONGEST_BYTES = 4 * (LONGEST_LINE + 1);
+
 /** Where the line that starts at `from` ends: the place of its LF or CR, or the end of the bytes. */
 export function lineEnd(bytes: Uint8Array, from: number): number {
   let at = from;
@@ -48,7 +53,8 @@ export function takeLines(
   let at = from;
   while (at < bytes.length && lines.length < most) {
     const to = lineEnd(bytes, at);
-    lines.push({ row: row + lines.length, from: at, to, text: decode(bytes, at, to) });
+    const text = decode(bytes, at, Math.min(to, at + LONGEST_BYTES));
+    lines.push({ row: row + lines.length, from: at, to, text });
     at = pastLineEnd(bytes, to);
   }
   return lines;

@@ -31,7 +31,10 @@ const MOST_IMPOSSIBLE = 0.2;
  */
 export function findSentinels(temps: Float64Array, unit: TemperatureUnit): Sentinel[] {
   const found: Sentinel[] = [];
-  const stepK = Math.max(STANDS_OUT_K, STANDS_OUT_STEPS * toKelvinStep(medianMove(temps), unit));
+  const stepK = Math.max(
+    STANDS_OUT_K,
+    STANDS_OUT_STEPS * toKelvinStep(medianMove(temps, unit), unit),
+  );
   const step = fromKelvinStep(stepK, unit);
   const odd = oddValues(temps, unit, step);
   if (odd.impossible > temps.length * MOST_IMPOSSIBLE) return [];
@@ -105,11 +108,14 @@ function nearest(
   return null;
 }
 
-function medianMove(temps: Float64Array): number {
+/** Of the readings that are not odd themselves: in a short log, what is odd is no small share. */
+function medianMove(temps: Float64Array, unit: TemperatureUnit): number {
   const stride = Math.max(1, Math.floor(temps.length / NEIGHBOURS));
   const moves: number[] = [];
-  for (let i = stride; i < temps.length; i += stride)
-    moves.push(Math.abs(temps[i]! - temps[i - 1]!));
+  for (let i = stride; i < temps.length; i += stride) {
+    const isOwn = isPlausible(temps[i]!, unit) && isPlausible(temps[i - 1]!, unit);
+    if (isOwn) moves.push(Math.abs(temps[i]! - temps[i - 1]!));
+  }
   const sorted = Float64Array.from(moves).sort();
   return sorted[sorted.length >> 1] ?? 0;
 }

@@ -12,6 +12,8 @@ const EVEN = 0.05;
 /** A pause of more than this many steps is told as a gap. */
 const GAP_STEPS = 5;
 const FEWEST = 10;
+/** One time off is two steps off. */
+const FEW = 2;
 
 /**
  * Where a record that keeps an even step has a time off it: one digit of a stamp that was damaged leaves the order
@@ -39,7 +41,7 @@ export function findOddTimes(timesS: Float64Array, rows: Int32Array): ReadWarnin
 
   function told(code: 'uneven-step' | 'readings-missing', places: number[]): ReadWarning[] {
     // many of them are the logger's own way of keeping time
-    if (places.length === 0 || places.length > n * EVEN) return [];
+    if (places.length === 0 || places.length > Math.max(FEW, n * EVEN)) return [];
     const say = `${Number(stepS.toPrecision(4))} s`;
     const value = String(places.length);
     return [warning(code, { row: rows[places[0]!]!, say, value })];

@@ -1,11 +1,11 @@
 import { describe, expect, test } from 'vitest';
-import { problemOf, questionOf, readingOf, valuesOf, warningsOf } from './read-text.ts';
+import { problemOf, questionOf, readingOf, valuesOf, warningsOf } from '../read-text.ts';
 
 const ROWS = '0,70.1\n10,74.5\n20,80.25\n';
 const READ = { t: [0, 10, 20], temp: [70.1, 74.5, 80.25] };
 
 describe('what stands above the readings', () => {
-  test('a preamble with commas, serials, notes and blank lines is passed', () => {
+  test('rows 16, 17: a preamble with commas, serials, notes and blank lines is passed', () => {
     const text = `Harrow Lane logger,type 7\nSerial,004512\nStarted,2026-05-04 10:00:00\n"Note, by hand",ok\n\nElapsed (s),Exhaust °F\n${ROWS}`;
 
     expect(valuesOf(text)).toEqual(READ);
@@ -17,13 +17,13 @@ describe('what stands above the readings', () => {
     });
   });
 
-  test('sixty lines of it are passed too', () => {
+  test('row 16: sixty lines of it are passed too', () => {
     const lines = Array.from({ length: 60 }, (_, i) => `Setting ${i},${i}`).join('\n');
 
     expect(valuesOf(`${lines}\nElapsed (s),Exhaust °F\n${ROWS}`)).toEqual(READ);
   });
 
-  test('a row of units under the header gives the units', () => {
+  test('row 21: a row of units under the header gives the units', () => {
     const reading = readingOf(`Elapsed,Exhaust\ns,°C\n${ROWS}`);
 
     expect(reading).toMatchObject({ channel: 'Exhaust', channelUnit: 'C', timeColumn: 'Elapsed' });
@@ -41,19 +41,19 @@ describe('what stands above the readings', () => {
     ['Temp/°C', 'C'],
     ['Temp (K)', 'K'],
     ['Exhaust ºF', 'F'],
-  ] as const)('%s says its unit', (name, unit) => {
+  ] as const)('row 24: %s says its unit', (name, unit) => {
     const warm = unit === 'K' ? '0,293.1\n10,295\n20,299\n' : ROWS;
 
     expect(readingOf(`Elapsed (s),${name}\n${warm}`).channelUnit).toBe(unit);
   });
 
-  test('a letter that is a label is no unit', () => {
+  test('row 24: a letter that is a label is no unit', () => {
     expect(questionOf(`Elapsed (s),Sensor C\n${ROWS}`).about).toBe('unit');
     expect(questionOf(`Elapsed (s),Thermocouple K\n${ROWS}`).about).toBe('unit');
   });
 
   test.each(['Units: F', 'Temperature unit;Celsius', 'Unit,°C'])(
-    '"%s" above the table does',
+    'row 24: "%s" above the table does',
     (line) => {
       const reading = readingOf(`${line}\n\nElapsed (s),Exhaust\n${ROWS}`);
 
@@ -66,7 +66,7 @@ describe('what stands above the readings', () => {
     ['70.1 °F', '74.5 °F', '80.25 °F', 'F'],
     ['70.1F', '74.5F', '80.25F', 'F'],
     ['70.1 C', '74.5 C', '80.25 C', 'C'],
-  ])('%s says the unit in the cell', (a, b, c, unit) => {
+  ])('row 25: %s says the unit in the cell', (a, b, c, unit) => {
     const text = `Elapsed (s),Exhaust\n0,${a}\n10,${b}\n20,${c}\n`;
 
     expect(valuesOf(text)).toEqual(READ);
@@ -74,20 +74,20 @@ describe('what stands above the readings', () => {
     expect(readingOf(text).columns[1]?.unitFrom).toBe('cells');
   });
 
-  test('readings in another unit, each saying its own, are converted', () => {
+  test('row 26: readings in another unit, each saying its own, are converted', () => {
     const text = 'Elapsed (s),Exhaust\n0,68 °F\n10,70 °F\n20,25 °C\n30,30 °C\n';
 
     expect(valuesOf(text).temp).toEqual([68, 70, 77, 86]);
     expect(warningsOf(text)).toContain('units-converted');
   });
 
-  test('a unit that changes without every cell saying so is refused at its row', () => {
+  test('row 26: a unit that changes without every cell saying so is refused at its row', () => {
     const text = 'Elapsed (s),Exhaust\n0,68 °F\n10,70 °F\n20,25 °C\n30,30\n40,31\n';
 
     expect(problemOf(text)).toMatchObject({ code: 'mixed-units', row: 4 });
   });
 
-  test('no unit anywhere is asked about, the likeliest first', () => {
+  test('row 28: no unit anywhere is asked about, the likeliest first', () => {
     const dryer = 'Elapsed (s),Exhaust\n0,70.1\n10,120.5\n20,154.2\n';
     const celsius = 'Elapsed (s),Exhaust\n0,21.1\n10,54.5\n20,68.2\n';
     const kelvin = 'Elapsed (s),Exhaust\n0,293.1\n10,320\n20,340.2\n';
@@ -102,7 +102,7 @@ describe('what stands above the readings', () => {
     });
   });
 
-  test('kelvin and Fahrenheit become °C in the series and stay as recorded beside it', () => {
+  test('row 29: kelvin and Fahrenheit become °C in the series and stay as recorded beside it', () => {
     // NIST SP 811 (2008) B.8: 98.6 °F is 37 °C; T/K = t/°C + 273.15
     const fahrenheit = readingOf('Elapsed (s),Exhaust °F\n0,98.6\n1,212\n2,32\n');
     const kelvin = readingOf('Elapsed (s),Exhaust K\n0,310.15\n1,373.15\n2,273.15\n');
@@ -115,7 +115,7 @@ describe('what stands above the readings', () => {
     expect(Array.from(fahrenheit.temps)).toEqual([98.6, 212, 32]);
   });
 
-  test('tenths of a degree are asked about', () => {
+  test('row 29: tenths of a degree are asked about', () => {
     const text = 'Elapsed (s),Exhaust °F\n0,701\n10,1205\n20,1542\n';
 
     expect(questionOf(text)).toMatchObject({
@@ -125,7 +125,7 @@ describe('what stands above the readings', () => {
     expect(valuesOf(text, { answers: { scale: 'tenths' } }).temp).toEqual([70.1, 120.5, 154.2]);
   });
 
-  test('raw counts are refused at their row', () => {
+  test('row 29: raw counts are refused at their row', () => {
     const text = 'Elapsed (s),Exhaust °F\n0,20123.5\n10,20456.5\n20,21999.5\n';
 
     expect(problemOf(text)).toMatchObject({ code: 'out-of-range', row: 2, column: 'Exhaust °F' });
@@ -133,14 +133,14 @@ describe('what stands above the readings', () => {
 });
 
 describe('columns', () => {
-  test('no header is read by type, with made names', () => {
+  test('row 20: no header is read by type, with made names', () => {
     const text = `0,70.1 °F\n10,74.5 °F\n20,80.25 °F\n`;
 
     expect(valuesOf(text)).toEqual(READ);
     expect(readingOf(text)).toMatchObject({ timeColumn: 'Column 1', channel: 'Column 2' });
   });
 
-  test('two probes of one name are two columns', () => {
+  test('row 22: two probes of one name are two columns', () => {
     const text = 'Elapsed (s),Temp °F,Temp °F\n0,70,60\n10,120,60.5\n20,154,61\n';
 
     expect(readingOf(text).columns.map(({ name }) => name)).toEqual([
@@ -150,11 +150,11 @@ describe('columns', () => {
     ]);
   });
 
-  test('an empty last header cell and its empty cells are nothing', () => {
+  test('row 23: an empty last header cell and its empty cells are nothing', () => {
     expect(valuesOf('Elapsed (s),Exhaust °F,\n0,70.1,\n10,74.5,\n20,80.25,\n')).toEqual(READ);
   });
 
-  test('humidity, battery and comments are kept by name and are no channel', () => {
+  test('row 38: humidity, battery and comments are kept by name and are no channel', () => {
     const text =
       'Elapsed (s),RH %,Battery (V),Exhaust °F,Comment\n0,45,3.61,70.1,start\n10,46,3.60,74.5,\n20,47,3.60,80.25,door\n';
     const reading = readingOf(text);
@@ -170,14 +170,14 @@ describe('columns', () => {
     ]);
   });
 
-  test('the exhaust is chosen before the room, wherever it stands', () => {
+  test('row 38: the exhaust is chosen before the room, wherever it stands', () => {
     const text = 'Elapsed (s),Room °F,Exhaust °F\n0,70,90\n10,71,120\n20,90,121\n';
 
     expect(readingOf(text).channel).toBe('Exhaust °F');
     expect(readingOf(text).channels).toMatchObject([{ name: 'Room °F', unit: 'F' }]);
   });
 
-  test('among nameless probes the one that swings is chosen', () => {
+  test('row 20: among nameless probes the one that swings is chosen', () => {
     const rows = Array.from(
       { length: 40 },
       (_, i) => `${i},${70 + (i % 2) / 10},${100 + (i % 20)}`,
@@ -207,7 +207,7 @@ describe('columns', () => {
     });
   });
 
-  test('°F and °C of one probe are one run, and a disagreement is said', () => {
+  test('row 27: °F and °C of one probe are one run, and a disagreement is said', () => {
     const agree = 'Elapsed (s),Exhaust °F,Exhaust °C\n0,68,20\n10,77,25\n20,86,30\n';
     const differ = 'Elapsed (s),Exhaust °F,Exhaust °C\n0,68,20\n10,77,25.4\n20,86,30\n';
 
@@ -218,7 +218,7 @@ describe('columns', () => {
 });
 
 describe('rows that are no readings', () => {
-  test('a footer and a block of statistics are set aside', () => {
+  test('row 18: a footer and a block of statistics are set aside', () => {
     const text = `Elapsed (s),Exhaust °F\n${ROWS}\nMinimum,70.1\nAverage,74.95\nEnd of file\n`;
 
     expect(valuesOf(text)).toEqual(READ);
@@ -229,7 +229,7 @@ describe('rows that are no readings', () => {
     ]);
   });
 
-  test('a header that comes again is passed over and said', () => {
+  test('row 19: a header that comes again is passed over and said', () => {
     const text = `Elapsed (s),Exhaust °F\n${ROWS}Elapsed (s),Exhaust °F\n30,81\n`;
 
     expect(valuesOf(text).temp).toEqual([...READ.temp, 81]);
@@ -240,13 +240,13 @@ describe('rows that are no readings', () => {
     });
   });
 
-  test('a second table with other columns is refused at its row', () => {
+  test('row 72: a second table with other columns is refused at its row', () => {
     const text = `Elapsed (s),Exhaust °F\n${ROWS}Elapsed (s),Exhaust °C\n30,27\n`;
 
     expect(problemOf(text)).toMatchObject({ code: 'columns-change', row: 5 });
   });
 
-  test('a short row, a long row and an open quote cost their own row only', () => {
+  test('row 64: a short row, a long row and an open quote cost their own row only', () => {
     const text =
       'Elapsed (s),Exhaust °F,Room °F\n0,70,68\n10,74\n20,80,68,1\n30,"85,68\n40,90,68\n50,95,68\n60,96,69\n70,97,69\n';
 
@@ -264,7 +264,7 @@ describe('rows that are no readings', () => {
     expect(problemOf(text)).toMatchObject({ code: 'mostly-unreadable', row: 5 });
   });
 
-  test('a last line that is cut off loses its reading and is said', () => {
+  test('row 66: a last line that is cut off loses its reading and is said', () => {
     const whole = 'Elapsed (s),Exhaust °F\n0,70.1\n10,74.5\n20,80.2\n30,85.4\n40,89.9\n';
 
     expect(warningsOf(whole)).toEqual([]);

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { problemOf, questionOf, readingOf, readText, valuesOf, warningsOf } from './read-text.ts';
+import { problemOf, questionOf, readingOf, readText, valuesOf, warningsOf } from '../read-text.ts';
 
 /** A log of three or more stamps, with readings that rise by one from 70. */
 function log(stamps: string[], name = 'Time', delimiter = ';'): string {
@@ -22,7 +22,7 @@ describe('elapsed clocks', () => {
     ['Elapsed', ['0:00:00', '0:00:10', '1:02:03'], [0, 10, 3723]],
     ['Elapsed', ['00:00:00.0', '00:00:00.2', '00:00:00.7'], [0, 0.2, 0.7]],
     ['Elapsed', ['30:00:00', '30:00:10', '30:00:20'], [0, 10, 20]],
-  ])('%s with %j', (name, stamps, times) => {
+  ])('row 48: %s with %j', (name, stamps, times) => {
     expect(timesOf(log(stamps, name))).toEqual(times);
   });
 
@@ -32,12 +32,12 @@ describe('elapsed clocks', () => {
     expect(timesOf(log(stamps, 'Seconds'))).toEqual([0, 0.1, 0.2, 0.3]);
   });
 
-  test('plain seconds without a unit are said', () => {
+  test('row 48: plain seconds without a unit are said', () => {
     expect(warningsOf(log(['0', '5', '10'], 'Time'))).toContain('clock-assumed');
     expect(timesOf(log(['0', '5', '10'], 'Time'))).toEqual([0, 5, 10]);
   });
 
-  test('numbers that rise by a sixtieth are asked about, and by a thousand', () => {
+  test('row 48: numbers that rise by a sixtieth are asked about, and by a thousand', () => {
     const sixtieths = log(['0', '0.0167', '0.0333', '0.05'], 'Time');
 
     expect(questionOf(sixtieths)).toMatchObject({
@@ -48,7 +48,7 @@ describe('elapsed clocks', () => {
     expect(questionOf(log(['0', '1000', '2000'], 'Time')).options[0]?.answer).toBe('milliseconds');
   });
 
-  test('two parts that may be minutes or hours are asked about, each answer shown', () => {
+  test('row 48: two parts that may be minutes or hours are asked about, each answer shown', () => {
     const question = questionOf(log(['10:05', '10:10', '10:15'], 'Time'));
 
     expect(question.about).toBe('clock');
@@ -81,11 +81,11 @@ describe('stamps', () => {
     ['1777888800', '1777888810', '1777888860'],
     ['1777888800000', '1777888810000', '1777888860000'],
     ['46146.41666667', '46146.41678241', '46146.41736111'],
-  ])('%s', (...stamps) => {
+  ])('rows 39, 41, 45, 46, 47: %s', (...stamps) => {
     expect(timesOf(log(stamps))).toEqual([0, 10, 60]);
   });
 
-  test('fractions of a second, with a point or a comma, are kept', () => {
+  test('row 39: fractions of a second, with a point or a comma, are kept', () => {
     const stamps = [
       '2026-05-04 10:00:00.250',
       '2026-05-04 10:00:00.500',
@@ -107,7 +107,7 @@ describe('stamps', () => {
     expect(readingOf(log(['0', '1', '2'], 'Seconds')).startedAt).toBeNull();
   });
 
-  test('a leap second and 24:00:00 are times', () => {
+  test('row 43: a leap second and 24:00:00 are times', () => {
     // RFC 3339 section 5.8 has the leap second; ISO 8601:2004 had the end of a day
     const leap = ['1990-12-31T23:59:59Z', '1990-12-31T23:59:60Z', '1991-01-01T00:00:10Z'];
     const end = ['2026-05-04 23:59:50', '2026-05-04 24:00:00', '2026-05-05 00:00:10'];
@@ -116,7 +116,7 @@ describe('stamps', () => {
     expect(timesOf(log(end))).toEqual([0, 10, 20]);
   });
 
-  test('a day that no calendar has is set aside', () => {
+  test('row 39: a day that no calendar has is set aside', () => {
     const stamps = [
       '2024-02-28 10:00:00',
       '2024-02-30 10:00:10',
@@ -129,7 +129,7 @@ describe('stamps', () => {
     ]);
   });
 
-  test('date and time in two columns are one clock', () => {
+  test('row 45: date and time in two columns are one clock', () => {
     const text =
       'Date,Time,Exhaust °F\n05/14/2026,11:59:50 PM,70\n05/14/2026,11:59:55 PM,71\n05/15/2026,12:00:05 AM,72\n';
 
@@ -150,7 +150,7 @@ describe('stamps', () => {
 });
 
 describe('day and month', () => {
-  test('one day after the twelfth settles the order for the whole file', () => {
+  test('row 40: one day after the twelfth settles the order for the whole file', () => {
     const dayFirst = ['03/05/2026 10:00:00', '04/05/2026 10:00:00', '13/05/2026 10:00:00'];
     const monthFirst = ['05/03/2026 10:00:00', '05/04/2026 10:00:00', '05/13/2026 10:00:00'];
 
@@ -159,14 +159,14 @@ describe('day and month', () => {
     expect(readingOf(log(dayFirst)).clock).toBe('day first');
   });
 
-  test('an order that changes nothing is not asked about, but said', () => {
+  test('row 40: an order that changes nothing is not asked about, but said', () => {
     const text = log(['04/05/2026 10:00:00', '04/05/2026 10:00:10', '04/05/2026 10:00:20']);
 
     expect(timesOf(text)).toEqual([0, 10, 20]);
     expect(warningsOf(text)).toContain('date-order-not-needed');
   });
 
-  test('an order that changes the times is asked about, the likelier first', () => {
+  test('row 40: an order that changes the times is asked about, the likelier first', () => {
     const text = log(['04/05/2026 23:59:50', '05/05/2026 00:00:00', '05/05/2026 00:00:10']);
     const question = questionOf(text);
 
@@ -179,7 +179,7 @@ describe('day and month', () => {
 });
 
 describe('midnight and settings of the clock', () => {
-  test('a time of day runs on past midnight', () => {
+  test('row 44: a time of day runs on past midnight', () => {
     const text = log(['23:59:50', '23:59:55', '00:00:05']);
 
     expect(timesOf(text)).toEqual([0, 5, 15]);
@@ -190,12 +190,12 @@ describe('midnight and settings of the clock', () => {
     });
   });
 
-  test('a 12-hour clock is read by its AM and PM', () => {
+  test('row 42: a 12-hour clock is read by its AM and PM', () => {
     expect(timesOf(log(['12:59:50 PM', '1:00:00 PM', '1:00:10 p.m.']))).toEqual([0, 10, 20]);
     expect(timesOf(log(['11:59:50 PM', '12:00:00 AM', '12:00:10 AM']))).toEqual([0, 10, 20]);
   });
 
-  test('a 12-hour clock that lost them is asked about', () => {
+  test('row 42: a 12-hour clock that lost them is asked about', () => {
     const text = log(['12:59:50', '1:00:00', '1:00:10']);
 
     expect(questionOf(text)).toMatchObject({
@@ -205,7 +205,7 @@ describe('midnight and settings of the clock', () => {
     expect(timesOf(text, { answers: { clock: '12-hour' } })).toEqual([0, 10, 20]);
   });
 
-  test('the end of summer time adds no hour', () => {
+  test('row 54: the end of summer time adds no hour', () => {
     const stamps = [
       '2026-10-25 02:59:40',
       '2026-10-25 02:59:50',
@@ -217,7 +217,7 @@ describe('midnight and settings of the clock', () => {
     expect(warningsOf(log(stamps))).toContain('clock-change');
   });
 
-  test('nor does its beginning, while a pause of an hour on a weekday is a pause', () => {
+  test('row 54: nor does its beginning, while a pause of an hour on a weekday is a pause', () => {
     const spring = [
       '2026-03-29 01:59:40',
       '2026-03-29 01:59:50',
@@ -231,7 +231,7 @@ describe('midnight and settings of the clock', () => {
     ]);
   });
 
-  test('a clock that falls back to the year 2000 runs on from the row before', () => {
+  test('row 56: a clock that falls back to the year 2000 runs on from the row before', () => {
     const stamps = [
       '2026-05-04 10:00:00',
       '2026-05-04 10:00:10',
@@ -245,21 +245,21 @@ describe('midnight and settings of the clock', () => {
 });
 
 describe('no clock', () => {
-  test('a sample number counts by the interval above the table', () => {
+  test('row 49: a sample number counts by the interval above the table', () => {
     const text = 'Logger 7\nSample rate: 5 s\n\nNo.,Exhaust °F\n1,70\n2,71\n4,72\n';
 
     expect(timesOf(text)).toEqual([0, 5, 15]);
     expect(warningsOf(text)).toContain('interval-used');
   });
 
-  test('without an interval it is asked', () => {
+  test('row 49: without an interval it is asked', () => {
     const text = 'No.,Exhaust °F\n1,70\n2,71\n3,72\n';
 
     expect(questionOf(text).about).toBe('interval');
     expect(timesOf(text, { answers: { interval: '2' } })).toEqual([0, 2, 4]);
   });
 
-  test('a column of readings alone is asked about too', () => {
+  test('row 49: a column of readings alone is asked about too', () => {
     const text = 'Exhaust °F\n70.5\n71.5\n72\n';
 
     expect(questionOf(text).about).toBe('interval');

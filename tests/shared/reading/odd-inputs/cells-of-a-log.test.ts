@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { problemOf, questionOf, readingOf, valuesOf, warningsOf } from './read-text.ts';
+import { problemOf, questionOf, readingOf, valuesOf, warningsOf } from '../read-text.ts';
 
 const READ = { t: [0, 10, 20, 30], temp: [70.1, 74.5, 80.25, 86] };
 
@@ -10,14 +10,14 @@ describe('delimiters', () => {
     ['pipes', '|'],
     ['commas with spaces', ', '],
     ['spaces', '   '],
-  ])('%s part columns', (_, delimiter) => {
+  ])('rows 8, 9: %s part columns', (_, delimiter) => {
     const lines = ['Elapsed_s,Exhaust_F', '0,70.1', '10,74.5', '20,80.25', '30,86', ''];
     const text = lines.join('\n').replaceAll(',', delimiter);
 
     expect(valuesOf(text)).toEqual(READ);
   });
 
-  test('a first line sep= says the delimiter', () => {
+  test('row 10: a first line sep= says the delimiter', () => {
     const text = 'sep=;\nElapsed (s);Exhaust °F\n0;70.1\n10;74.5\n20;80.25\n30;86\n';
 
     expect(valuesOf(text)).toEqual(READ);
@@ -34,7 +34,7 @@ describe('delimiters', () => {
 });
 
 describe('decimal marks', () => {
-  test('a comma is the decimal mark beside semicolons and tabs', () => {
+  test('row 11: a comma is the decimal mark beside semicolons and tabs', () => {
     const text = 'Elapsed (s);Exhaust °F\n0;70,1\n10;74,5\n20;80,25\n30;86\n';
 
     expect(valuesOf(text)).toEqual(READ);
@@ -42,13 +42,13 @@ describe('decimal marks', () => {
     expect(valuesOf(text.replaceAll(';', '\t'))).toEqual(READ);
   });
 
-  test('a quoted decimal comma is read beside commas', () => {
+  test('row 12: a quoted decimal comma is read beside commas', () => {
     const text = 'Elapsed (s),Exhaust °F\n0,"70,1"\n10,"74,5"\n20,"80,25"\n30,"86"\n';
 
     expect(valuesOf(text)).toEqual(READ);
   });
 
-  test('an unquoted decimal comma beside commas is refused with row and remedy', () => {
+  test('row 13: an unquoted decimal comma beside commas is refused with row and remedy', () => {
     const text = 'Elapsed (s),Exhaust °F\n0,70,1\n10,74,5\n20,80,2\n30,86,0\n';
 
     expect(problemOf(text)).toEqual({
@@ -68,7 +68,7 @@ describe('decimal marks', () => {
     ['1\u00a0234,5', ';', ','],
     ['1\u2009234,5', ';', ','],
     ["1'234.5", ';', '.'],
-  ])('%s groups its thousands', (grouped, delimiter) => {
+  ])('row 14: %s groups its thousands', (grouped, delimiter) => {
     const cell = delimiter === ',' ? `"${grouped}"` : grouped;
     const mark = grouped.at(-2) ?? '.';
     const rows = [`0,${cell}`, `10,990${mark}5`, `20,980${mark}25`].map((row) =>
@@ -79,7 +79,7 @@ describe('decimal marks', () => {
     expect(problemOf(text)).toMatchObject({ code: 'out-of-range', row: 2, value: '1234.5' });
   });
 
-  test('a comma before three digits everywhere is asked about where both make sense', () => {
+  test('row 15: a comma before three digits everywhere is asked about where both make sense', () => {
     const text = 'Elapsed (s);Exhaust °F\n0;1,070\n10;1,074\n20;1,081\n';
 
     expect(questionOf(text)).toMatchObject({
@@ -89,7 +89,7 @@ describe('decimal marks', () => {
     expect(valuesOf(text, { answers: { decimal: 'comma' } }).temp).toEqual([1.07, 1.074, 1.081]);
   });
 
-  test('a comma before three digits is a decimal mark where thousands would be no temperature', () => {
+  test('row 15: a comma before three digits is a decimal mark where thousands would be no temperature', () => {
     const text = 'Elapsed (s);Exhaust °F\n0;70,125\n10;74,250\n20;80,375\n';
 
     expect(valuesOf(text).temp).toEqual([70.125, 74.25, 80.375]);
@@ -108,7 +108,7 @@ describe('numbers', () => {
     ['٧٠.١', 70.1],
     ['-0.4', -0.4],
     [' 70.1 ', 70.1],
-  ])('%s is a reading', (cell, value) => {
+  ])('rows 34, 35: %s is a reading', (cell, value) => {
     const text = `Elapsed (s),Exhaust °C\n0,${cell}\n10,${cell}\n20,${cell}\n`;
 
     expect(valuesOf(text).temp).toEqual([value, value, value]);
@@ -122,7 +122,7 @@ describe('numbers', () => {
   });
 
   test.each(['1e999', '9'.repeat(400)])(
-    'a number too large for a reading is refused: %.10s',
+    'row 36: a number too large for a reading is refused: %.10s',
     (cell) => {
       const text = `Elapsed (s),Exhaust °F\n0,70.1\n10,${cell}\n20,80\n`;
 
@@ -135,13 +135,13 @@ describe('numbers', () => {
     },
   );
 
-  test('brackets are not taken for a reading', () => {
+  test('row 35: brackets are not taken for a reading', () => {
     const text = 'Elapsed (s),Exhaust °F\n0,70.1\n10,(5.0)\n20,80\n30,81\n';
 
     expect(readingOf(text).skippedRows).toEqual([{ row: 3, why: 'not a number: (5.0)' }]);
   });
 
-  test('formulas and markup are text', () => {
+  test('row 71: formulas and markup are text', () => {
     const text = 'Elapsed (s),Exhaust °F,=1+1\n0,70,@SUM(A1)\n10,71,<b>x</b>\n20,72,+cmd\n';
 
     expect(valuesOf(text).temp).toEqual([70, 71, 72]);
@@ -164,7 +164,7 @@ describe('cells without a reading', () => {
     '#VALUE!',
     'null',
     'None',
-  ])('%s leaves its row out and says so', (word) => {
+  ])('rows 30, 32: %s leaves its row out and says so', (word) => {
     const text = `Elapsed (s),Exhaust °F\n0,70.1\n10,${word}\n20,80.25\n30,86\n`;
     const reading = readingOf(text);
 
@@ -174,14 +174,14 @@ describe('cells without a reading', () => {
     expect(warningsOf(text)).toContain('open-sensor');
   });
 
-  test.each(['', '   ', '-', '.'])('an empty cell "%s" is no reading', (cell) => {
+  test.each(['', '   ', '-', '.'])('row 33: an empty cell "%s" is no reading', (cell) => {
     const text = `Elapsed (s),Exhaust °F\n0,70.1\n10,${cell}\n20,80.25\n30,86\n`;
 
     expect(valuesOf(text)).toEqual({ t: [0, 20, 30], temp: [70.1, 80.25, 86] });
     expect(readingOf(text).skippedCount).toBe(1);
   });
 
-  test('a probe that dies half-way leaves its gap to itself', () => {
+  test('row 37: a probe that dies half-way leaves its gap to itself', () => {
     const text =
       'Elapsed (s),Exhaust °F,Room °F\n0,70,68\n10,75,68\n20,81,OL\n30,86,OL\n40,90,OL\n';
     const reading = readingOf(text);
@@ -196,7 +196,7 @@ describe('numbers that stand for no reading', () => {
     `Elapsed (s),Exhaust °C\n${cells.map((cell, i) => `${i * 5},${cell}`).join('\n')}\n`;
 
   test.each(['-999.9', '-9999', '9999', '6553.5', '32767', '127', '-127'])(
-    '%s is left out where it stands out',
+    'row 31: %s is left out where it stands out',
     (value) => {
       const text = rise(['40.1', '42.3', value, value, '48.2', '50.4']);
 
@@ -206,13 +206,13 @@ describe('numbers that stand for no reading', () => {
     },
   );
 
-  test('85.0 at power-on is left out', () => {
+  test('row 31: 85.0 at power-on is left out', () => {
     expect(valuesOf(rise(['85.0', '21.3', '21.4', '21.6', '22.1'])).temp).toEqual([
       21.3, 21.4, 21.6, 22.1,
     ]);
   });
 
-  test('85.0 and 127 in the middle of a plausible curve are readings', () => {
+  test('row 31: 85.0 and 127 in the middle of a plausible curve are readings', () => {
     const near85 = ['79.5', '82.0', '85.0', '87.5', '85.0', '82.0'];
     const near127 = ['120.5', '124', '127', '129', '127', '124'];
 
@@ -220,7 +220,7 @@ describe('numbers that stand for no reading', () => {
     expect(valuesOf(rise(near127)).temp).toEqual([120.5, 124, 127, 129, 127, 124]);
   });
 
-  test('a winter reading below nought is no sentinel', () => {
+  test('row 62: a winter reading below nought is no sentinel', () => {
     const text = 'Elapsed (s),Exhaust °F\n0,-4.5\n10,-1\n20,3.5\n30,9\n';
 
     expect(valuesOf(text).temp).toEqual([-4.5, -1, 3.5, 9]);

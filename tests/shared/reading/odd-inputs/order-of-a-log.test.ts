@@ -1,10 +1,10 @@
 import { describe, expect, test } from 'vitest';
-import { questionOf, readingOf, valuesOf, warningsOf } from './read-text.ts';
+import { questionOf, readingOf, valuesOf, warningsOf } from '../read-text.ts';
 
 const log = (rows: string[]) => `Time,Exhaust °F\n${rows.join('\n')}\n`;
 
 describe('rows in another order', () => {
-  test('newest first is turned round', () => {
+  test('row 53: newest first is turned round', () => {
     const text = log([
       '2026-05-04 10:00:30,73',
       '2026-05-04 10:00:20,72',
@@ -16,7 +16,7 @@ describe('rows in another order', () => {
     expect(warningsOf(text)).toContain('reversed');
   });
 
-  test('a straggler is put in its place', () => {
+  test('row 52: a straggler is put in its place', () => {
     const text = log([
       '2026-05-04 10:00:00,70',
       '2026-05-04 10:00:20,72',
@@ -28,7 +28,7 @@ describe('rows in another order', () => {
     expect(readingOf(text).warnings[0]).toMatchObject({ code: 'reordered' });
   });
 
-  test('a clock that starts again is two runs, and one is asked for', () => {
+  test('row 52: a clock that starts again is two runs, and one is asked for', () => {
     const text = `Elapsed (s),Exhaust °F\n${['0,70', '60,71', '120,72', '180,80', '1300,90', '0,60', '60,61', '120,62'].join('\n')}\n`;
 
     expect(questionOf(text)).toMatchObject({
@@ -45,7 +45,7 @@ describe('rows in another order', () => {
     expect(readingOf(text, { answers: { runs: '2' } }).skippedCount).toBe(5);
   });
 
-  test('pieces of one record in another order are put in order', () => {
+  test('row 52: pieces of one record in another order are put in order', () => {
     const late = Array.from(
       { length: 30 },
       (_, i) => `2026-05-04 11:${String(i).padStart(2, '0')}:00,${100 + i}`,
@@ -60,7 +60,7 @@ describe('rows in another order', () => {
 });
 
 describe('equal stamps', () => {
-  test('readings under a stamp of a minute are spread evenly over it', () => {
+  test('row 50: readings under a stamp of a minute are spread evenly over it', () => {
     const rows = ['10:00', '10:00', '10:01', '10:01', '10:01', '10:02', '10:02', '10:02', '10:03'];
     const text = `hh:mm,Exhaust °F\n${rows.map((stamp, i) => `${stamp},${70 + i}`).join('\n')}\n`;
 
@@ -68,7 +68,7 @@ describe('equal stamps', () => {
     expect(warningsOf(text)).toContain('spread-in-stamp');
   });
 
-  test('rows alike under a coarse stamp are readings too', () => {
+  test('rows 50, 51: rows alike under a coarse stamp are readings too', () => {
     const rows = [
       '2026-05-04 10:00:00',
       '2026-05-04 10:00:00',
@@ -80,7 +80,7 @@ describe('equal stamps', () => {
     expect(valuesOf(text)).toEqual({ t: [0, 0.5, 1, 1.5], temp: [70, 70, 70, 70] });
   });
 
-  test('a block that comes again is left out and counted', () => {
+  test('row 51: a block that comes again is left out and counted', () => {
     const block = Array.from(
       { length: 10 },
       (_, i) => `2026-05-04 10:${String(i * 2).padStart(2, '0')}:00,${70 + i}`,
@@ -95,7 +95,7 @@ describe('equal stamps', () => {
     });
   });
 
-  test('a row written twice between finer stamps is one reading', () => {
+  test('row 51: a row written twice between finer stamps is one reading', () => {
     const rows = Array.from(
       { length: 20 },
       (_, i) => `2026-05-04 10:00:${String(i).padStart(2, '0')},${70 + i}`,
@@ -108,7 +108,7 @@ describe('equal stamps', () => {
 });
 
 describe('gaps', () => {
-  test('ten minutes without readings are said, with the row after them', () => {
+  test('row 57: ten minutes without readings are said, with the row after them', () => {
     const rows = [0, 10, 20, 30, 40, 640, 650, 660].map((s) => `${s},70`);
     const text = `Elapsed (s),Exhaust °F\n${rows.join('\n')}\n`;
 
@@ -117,7 +117,7 @@ describe('gaps', () => {
     ]);
   });
 
-  test('steps by hand and by events are no gaps', () => {
+  test('row 58: steps by hand and by events are no gaps', () => {
     const times = [0, 15, 40, 51, 70, 200, 215, 400, 411, 425, 600];
     const text = `Elapsed (s),Exhaust °F\n${times.map((s) => `${s},${70 + s / 10}`).join('\n')}\n`;
 
@@ -125,7 +125,7 @@ describe('gaps', () => {
     expect(warningsOf(text).filter((code) => code === 'gap').length).toBeLessThan(4);
   });
 
-  test('a probe that never moves is said', () => {
+  test('row 61: a probe that never moves is said', () => {
     expect(warningsOf('Elapsed (s),Exhaust °F\n0,70\n10,70\n20,70\n')).toContain('no-change');
   });
 });
