@@ -1,7 +1,7 @@
 import type { GuardSays, GuardView, GuardWhy } from '../analysis/guard/guard-state.ts';
 import type { Rating } from '../analysis/rating.ts';
 import type { DisplayUnit } from '../units.ts';
-import { formatMoment, formatRated, formatTemp } from './format.ts';
+import { formatRated, formatTemp } from './format.ts';
 
 /** What the guard's words need to know beside its state. */
 export type AboutGuard = {
@@ -44,12 +44,6 @@ export function wordGuard(view: GuardView, about: AboutGuard): WordedGuard {
       `${formatTemp(unconfirmed.tempC, about.unit)} is far off the forecast. Read again now.`,
     instructions: instructionsOf(says, about.fuel === 'gas'),
   };
-}
-
-/** One line for a finished run: when the guard first called; null where it never did. */
-export function wordAlarm(alarmS: number | null): string | null {
-  if (alarmS === null) return null;
-  return `The guard would have said cut the heat at ${formatMoment(alarmS)}.`;
 }
 
 function sentenceOf(why: GuardWhy, { unit, rating }: AboutGuard): string {

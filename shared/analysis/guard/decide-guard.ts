@@ -12,6 +12,8 @@ const USUAL_RESPONSE_S = 3;
 const MOST_RESPONSE_S = 10;
 /** Slower than this nothing climbs, K/s. */
 const CLIMB_KPERS = 0.02;
+/** The quick part of a leg, s: up to the end of the allowance it fades by itself and forecasts nothing (bench). */
+const QUICK_PART_S = 40;
 /** An exhaust under its earlier cut-outs and this is on a way that it came back from before, K. */
 const KNOWN_WAY_K = 1.2;
 /** A filter lags behind the reading by this at most where it follows well, K. */
@@ -63,11 +65,13 @@ function decideWhileOn(
   const bandEndC = rating.opensC + rating.opensTolK;
   if (track.tempC <= bandEndC) return QUIET;
   const isClimbing = track.slopeKPerS > CLIMB_KPERS;
-  const course = isClimbing ? foresee(track, track.timeS - state.turns.legFromS) : null;
+  const ageS = track.timeS - state.turns.legFromS;
+  const course = isClimbing ? foresee(track, ageS) : null;
   const { cutOutC } = state.turns;
   const onKnownWay =
     cutOutC !== null && cutOutC < rating.ceilingC && track.tempC < cutOutC + KNOWN_WAY_K;
-  if (course && fit !== 'off-trend' && !onKnownWay) {
+  const isQuickPart = ageS < QUICK_PART_S && track.tempC < bandEndC + rating.overshootK;
+  if (course && fit !== 'off-trend' && !onKnownWay && !isQuickPart) {
     const waitS = LEAST_LEAD_S + responseS(state) + track.spacingS;
     if (tempAfter(course, waitS) >= rating.highLimitC)
       return { says: 'cut-heat', why: 'limit-near' };

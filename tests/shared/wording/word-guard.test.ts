@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import type { GuardSays, GuardView, GuardWhy } from '#shared/analysis/guard/guard-state.ts';
 import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
-import { wordAlarm, wordGuard, type AboutGuard } from '#shared/wording/word-guard.ts';
+import { wordGuard, type AboutGuard } from '#shared/wording/word-guard.ts';
 
 const ABOUT: AboutGuard = { unit: 'F', fuel: 'electric', rating: DEFAULT_RATING, nowS: 600 };
 const QUIET: GuardView = { says: 'quiet', why: null, forecast: null, unconfirmed: null };
@@ -61,10 +61,5 @@ describe('the guard in words', () => {
 
       expect(all).not.toMatch(/bypass|jump|!/i);
     }
-  });
-
-  test('says of a finished run when it would have called', () => {
-    expect(wordAlarm(550)).toBe('The guard would have said cut the heat at 9:10.');
-    expect(wordAlarm(null)).toBeNull();
   });
 });
