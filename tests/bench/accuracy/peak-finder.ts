@@ -5,16 +5,20 @@ import type { Series } from '#shared/analysis/series.ts';
 import { middle } from './truth/true-points.ts';
 import type { FoundTurn } from './match-turns.ts';
 
-/** Half the width of the moving average, s, and the prominence asked for, K: the best of those tried on seeds 1–10. */
-const HALF_WIDTH_S = 2.5;
-const PROMINENCE_K = 4 / 1.8;
+/** Half the width of the moving average, s, and the prominence asked for, K: the best of those tried on seeds 1 and 2. */
+export const PLAIN_SETTINGS = { halfWidthS: 2.5, prominenceK: 4 / 1.8 };
 
 /**
  * The thing to beat: a median of three against wild readings, a moving average, peaks and valleys by prominence. It is
  * what a general-purpose peak finder with a page of rules would do.
  */
-export function findPeaksPlainly({ timesS, tempsC }: Series): FoundTurn[] {
-  const smoothC = movingAverage(timesS, medianOfThree(tempsC), HALF_WIDTH_S);
+export function findPeaksPlainly(
+  { timesS, tempsC }: Series,
+  { halfWidthS, prominenceK } = PLAIN_SETTINGS,
+): FoundTurn[] {
+  // Between readings that far apart a median or a mean would only flatten the turns.
+  const isFine = (timesS[1] ?? 0) - (timesS[0] ?? 0) < halfWidthS;
+  const smoothC = isFine ? movingAverage(timesS, medianOfThree(tempsC), halfWidthS) : tempsC;
   const found: FoundTurn[] = [];
   let low = 0;
   let high = 0;
@@ -22,12 +26,12 @@ export function findPeaksPlainly({ timesS, tempsC }: Series): FoundTurn[] {
   smoothC.forEach((tempC, i) => {
     if (tempC > smoothC[high]!) high = i;
     if (tempC < smoothC[low]!) low = i;
-    if (direction >= 0 && smoothC[high]! - tempC >= PROMINENCE_K) {
+    if (direction >= 0 && smoothC[high]! - tempC >= prominenceK) {
       if (direction === 1)
         found.push({ kind: 'cut-out', timeS: timesS[high]!, tempC: smoothC[high]! });
       direction = -1;
       low = i;
-    } else if (direction <= 0 && tempC - smoothC[low]! >= PROMINENCE_K) {
+    } else if (direction <= 0 && tempC - smoothC[low]! >= prominenceK) {
       if (direction === -1 && found.length > 0)
         found.push({ kind: 'reset', timeS: timesS[low]!, tempC: smoothC[low]! });
       direction = 1;
