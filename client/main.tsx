@@ -9,6 +9,8 @@ if (!root) throw new Error('index.html has no #root');
 async function rootOf(pathname: string): Promise<ComponentType> {
   if (pathname === '/shared')
     return (await import('./pages/customer/customer-root.tsx')).CustomerRoot;
+  if (/^\/visits\/[^/]+\/stopwatch\/?$/.test(pathname))
+    return (await import('./pages/stopwatch/stopwatch-root.tsx')).StopwatchRoot;
   return (await import('./application.tsx')).Application;
 }
 

@@ -1,0 +1,98 @@
+import { formatBand, formatRated } from '#shared/wording/format.ts';
+import { drawMarks } from './draw-marks.ts';
+import { drawHotSpan, drawPaper, drawWall } from './draw-paper.ts';
+import { drawEdges, drawHoles, drawMinutes, drawScale } from './draw-scale.ts';
+import { xOf, yOf, type Frame } from './frame.ts';
+import { chooseGridSteps } from './grid-steps.ts';
+import { buildPyramid } from './pyramid.ts';
+import { words, type Shape } from './shapes.ts';
+import type { Bands, Strip } from './strip.ts';
+import { drawReadingDots, tracePath } from './trace-path.ts';
+
+/** Where the exhaust goes if nothing changes, from the pen to the wall. */
+export type LiveForecast = { earliestS: number; likelyS: number | null; latestS: number | null };
+
+export type LiveStrip = Pick<Strip, 'bands' | 'points' | 'hotSpans' | 'gaps'> & {
+  timesS: Float64Array;
+  tempsC: Float64Array;
+  forecast: LiveForecast | null;
+};
+
+/** The strip while it is being written: paper, wall, trace, marks; the pen itself is the page's. */
+export function drawLive(frame: Frame, strip: LiveStrip, withHoles: boolean): Shape[] {
+  const { bands, timesS, tempsC, hotSpans } = strip;
+  const steps = chooseGridSteps(frame);
+  const pyramid = buildPyramid(timesS, tempsC, strip.gaps);
+  const trace = tracePath(pyramid, frame, Math.round(frame.plot.width));
+  const clip = frame.plot;
+  return [
+    ...drawPaper(frame, bands, steps),
+    ...(bands ? drawWall(frame, bands.highLimitC) : []),
+    ...hotSpans.flatMap((span) => drawHotSpan(frame, span)),
+    { kind: 'line', path: trace, ink: 'strip', widthPx: 5, opacity: 0.85, round: true, clip },
+    { kind: 'line', path: trace, ink: 'ink', widthPx: 2, round: true, clip },
+    ...drawReadingDots(pyramid, frame),
+    ...drawForecast(frame, strip),
+    drawEdges(frame),
+    ...drawScale(frame, steps, 'right'),
+    ...drawMinutes(frame, steps),
+    ...(withHoles ? drawHoles(frame, steps, frame.sheet.height - 8) : []),
+    ...(bands ? nameBands(frame, bands) : []),
+    ...drawMarks(frame, strip.points),
+  ];
+}
+
+/** Dots to the wall, and a cross where they meet it. */
+function drawForecast(frame: Frame, { bands, forecast, timesS, tempsC }: LiveStrip): Shape[] {
+  const lastS = timesS.at(-1);
+  const lastC = tempsC.at(-1);
+  if (!bands || !forecast || forecast.likelyS === null) return [];
+  if (lastS === undefined || lastC === undefined || forecast.likelyS <= lastS) return [];
+  const from = { x: xOf(frame, lastS), y: yOf(frame, lastC) };
+  const to = { x: xOf(frame, forecast.likelyS), y: yOf(frame, bands.highLimitC) };
+  const lengthPx = Math.hypot(to.x - from.x, to.y - from.y);
+  const dots = Math.min(60, Math.floor(lengthPx / 6));
+  const right = frame.plot.left + frame.plot.width;
+  const shapes: Shape[] = [];
+  for (let i = 1; i < dots; i++) {
+    const x = from.x + ((to.x - from.x) * i) / dots;
+    if (x > right) break;
+    const y = from.y + ((to.y - from.y) * i) / dots;
+    shapes.push({ kind: 'disc', x, y, r: 1.1, fill: 'stop', rim: null, rimPx: 0 });
+  }
+  if (to.x > right) return shapes;
+  return [...shapes, cross(to.x, to.y)];
+}
+
+function cross(x: number, y: number): Shape {
+  const path = [x - 6, y - 6, x + 6, y + 6, NaN, NaN, x + 6, y - 6, x - 6, y + 6];
+  return { kind: 'line', path, ink: 'stop', widthPx: 2 };
+}
+
+/** Stripes are named at the right, before the scale; the wall at the left, under it. */
+function nameBands(frame: Frame, bands: Bands): Shape[] {
+  const { plot, unit } = frame;
+  const right = plot.left + plot.width - 8;
+  const name = (text: string, tempC: number): Shape[] => {
+    const y = yOf(frame, tempC) - 2;
+    if (y < plot.top + 12 || y > plot.top + plot.height) return [];
+    const style = { weight: 600, stretch: 'normal', align: 'right', haloPx: 4 } as const;
+    return [words(text, { x: right, y }, style)];
+  };
+  const bare = (text: string) => text.replace(/\s*°.$/, '');
+  return [
+    ...name(
+      `opens ${bare(formatBand(bands.opensC, bands.opensTolK, unit))}`,
+      bands.opensC - bands.opensTolK,
+    ),
+    ...name(
+      `closes ${bare(formatBand(bands.closesC, bands.closesTolK, unit))}`,
+      bands.closesC - bands.closesTolK,
+    ),
+    words(
+      `high limit ${bare(formatRated(bands.highLimitC, unit))}`,
+      { x: plot.left + 8, y: yOf(frame, bands.highLimitC) + 14 },
+      { weight: 600, stretch: 'normal', ink: 'stop', haloPx: 4 },
+    ),
+  ];
+}

@@ -1,0 +1,68 @@
+import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
+import type { DisplayUnit } from '#shared/units.ts';
+import { formatRated, formatSpan, formatStep } from '#shared/wording/format.ts';
+import { NoteSign, WatchSign } from '../../components/signs.tsx';
+import { ShrinkBar } from './shrink-bar.tsx';
+
+export type GuardFacts = {
+  view: GuardView;
+  nowS: number;
+  unit: DisplayUnit;
+  highLimitC: number;
+  /** The last reading; null before the first. */
+  lastC: number | null;
+  isGas: boolean;
+  isHeatOff: boolean;
+};
+
+/** One printed line, or the tinted band. Cut-heat takes the place of clock and chart: see HaltPanel. */
+export function GuardPanel(facts: GuardFacts) {
+  const { view, nowS, unit, highLimitC, lastC } = facts;
+  if (view.says !== 'watch') {
+    return (
+      <section className="sw-guard" aria-label="Guard">
+        <NoteSign className="size-8" />
+        <p>
+          <b>Guard is watching.</b>{' '}
+          {lastC === null
+            ? `The limit is ${formatRated(highLimitC, unit)}.`
+            : `${roundStep(highLimitC - lastC, unit)} to the limit.`}
+        </p>
+      </section>
+    );
+  }
+  const crossing = view.forecast?.highLimit ?? null;
+  return (
+    <section className="sw-guard sw-guard-watch" aria-label="Guard">
+      <WatchSign className="mt-0.5 size-[38px] text-watch" />
+      <div>
+        <p>
+          <b>Watch.</b> {watchSentence(facts)}
+        </p>
+        {crossing?.likelyS != null && (
+          <ShrinkBar
+            leftS={crossing.likelyS - nowS}
+            earliestS={crossing.earliestS - nowS}
+            latestS={crossing.latestS === null ? null : crossing.latestS - nowS}
+            limitWords={formatRated(highLimitC, unit)}
+          />
+        )}
+      </div>
+    </section>
+  );
+}
+
+/** The forecast in words, as LOOK has it. */
+export function watchSentence({ view, nowS, unit, highLimitC }: GuardFacts): string {
+  const crossing = view.forecast?.highLimit;
+  const limit = formatRated(highLimitC, unit);
+  if (!crossing || crossing.likelyS === null) return 'Above its band, and no cut-out yet.';
+  const leftS = Math.max(0, crossing.likelyS - nowS);
+  const reachS = ((crossing.latestS ?? crossing.likelyS) - crossing.earliestS) / 2;
+  return `At this rate it reaches ${limit} in ${formatSpan(leftS)}, give or take ${formatSpan(Math.max(1, reachS))}.`;
+}
+
+/** `59 °F`: whole degrees, this is read from the corner of an eye. */
+function roundStep(stepK: number, unit: DisplayUnit): string {
+  return formatStep(stepK, unit).replace(/\.[0-9]/, '');
+}

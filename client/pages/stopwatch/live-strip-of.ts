@@ -1,0 +1,40 @@
+import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
+import { specifiedFor } from '#shared/judging/judging-for.ts';
+import type { HandRun } from '#shared/recorder/replay-run.ts';
+import { toCelsius } from '#shared/units.ts';
+import type { LiveStrip } from '../../chart/draw-live.ts';
+import type { HotSpan } from '../../chart/strip.ts';
+import type { StopwatchMachine } from './sources.ts';
+
+/** The run as it stands on the paper right now. */
+export function liveStripOf(run: HandRun, view: GuardView, machine: StopwatchMachine): LiveStrip {
+  const { readings, start } = run;
+  const isCalm = view.says === 'quiet';
+  return {
+    bands: specifiedFor(machine, start.setup.setting),
+    points: [],
+    hotSpans: hotSpans(run),
+    gaps: [],
+    timesS: Float64Array.from(readings, ({ atS }) => atS),
+    tempsC: Float64Array.from(readings, ({ temp }) => toCelsius(temp, start.unit)),
+    forecast: isCalm ? null : (view.forecast?.highLimit ?? null),
+  };
+}
+
+/** From where the guard began to be uneasy until it was quiet again, or the last reading. */
+function hotSpans({ guard, readings }: HandRun): HotSpan[] {
+  const spans: HotSpan[] = [];
+  let fromS: number | null = null;
+  for (const { atS, says } of guard) {
+    if (says !== 'quiet') fromS ??= atS;
+    else if (fromS !== null) {
+      spans.push({ fromS, toS: atS, words: [], traceIsHot: false });
+      fromS = null;
+    }
+  }
+  const lastS = readings.at(-1)?.atS ?? 0;
+  if (fromS !== null && lastS > fromS) {
+    spans.push({ fromS, toS: lastS, words: [], traceIsHot: false });
+  }
+  return spans;
+}

@@ -1,0 +1,189 @@
+import { guardAt } from '#shared/analysis/guard/guard.ts';
+import type { GuardSetup, GuardView } from '#shared/analysis/guard/guard-state.ts';
+import type { MarkKind } from '#shared/analysis/series.ts';
+import {
+  compareClocks,
+  elapsedS,
+  reopenClock,
+  startClock,
+  type Now,
+  type RunClock,
+} from '#shared/recorder/clock.ts';
+import { guardAfter, guardOfRun, type GuardSoFar } from '#shared/recorder/guard-run.ts';
+import { lastToTakeBack, replayRun, type HandRun } from '#shared/recorder/replay-run.ts';
+import type { EndSetup, RunEvent, RunEventOf } from '#shared/recorder/run-event.ts';
+
+type StampName = 'id' | 'runId' | 'n' | 'atS' | 'wallMs';
+type WithoutStamp<Event> = Event extends RunEvent ? Omit<Event, StampName> : never;
+/** What happened, without the stamp that the recorder gives it. */
+export type Happening = WithoutStamp<RunEvent>;
+
+export type RecorderParts = {
+  /** Resolves once the event would survive a power cut. */
+  keep: (event: RunEvent) => Promise<void>;
+  newId: () => string;
+  now: () => Now;
+  guardSetup: (run: HandRun) => GuardSetup;
+};
+
+/** What the screen shows: only what already lies on the device. */
+export type Recording = {
+  run: HandRun;
+  events: readonly RunEvent[];
+  guard: GuardSoFar;
+  /** Why the last thing was not kept, in words; null where it was. */
+  problem: string | null;
+};
+
+export type Recorder = ReturnType<typeof openRecorder>;
+
+/** The first event of a new run, kept before the recorder opens. */
+export async function beginRun(
+  { keep, newId, now }: Pick<RecorderParts, 'keep' | 'newId' | 'now'>,
+  start: Omit<RunEventOf<'start'>, StampName | 'kind'>,
+  downMonoMs: number,
+): Promise<RunEvent> {
+  const { monoMs, wallMs } = now();
+  const event: RunEvent = {
+    ...start,
+    kind: 'start',
+    id: newId(),
+    runId: newId(),
+    n: 0,
+    atS: 0,
+    wallMs: Math.round(wallMs - (monoMs - downMonoMs)),
+  };
+  await keep(event);
+  return event;
+}
+
+/**
+ * A run as it goes on. Events are kept one after the other; each is on the device before it is in `recording`.
+ *
+ * @param kept the run's events as they lie on the device, beginning with its start
+ * @param isNew its start was kept by this page a moment ago: the run's time is that of this page's own clock
+ * @throws {RangeError} the events make no run
+ */
+export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], isNew: boolean) {
+  let recording = recordingOf(kept, parts);
+  let clock = openClock();
+  let queue: Promise<unknown> = Promise.resolve();
+  let said = recording.run.guard.at(-1)?.says ?? 'quiet';
+  const listeners = new Set<() => void>();
+
+  function openClock(): RunClock {
+    const now = parts.now();
+    const { last } = recording.run;
+    if (!isNew) return reopenClock(last, now).clock;
+    const sinceStartMs = now.wallMs - last.wallMs;
+    return startClockAt(now, sinceStartMs);
+  }
+
+  function show(next: Recording): void {
+    recording = next;
+    for (const tell of listeners) tell();
+  }
+
+  function atNow(): number {
+    return elapsedS(clock, parts.now().monoMs);
+  }
+
+  /** @returns whether it was kept */
+  function record(happening: Happening, atS = atNow()): Promise<boolean> {
+    const kept = queue.then(() => keepNext(happening, atS));
+    queue = kept;
+    return kept;
+  }
+
+  async function keepNext(happening: Happening, atS: number): Promise<boolean> {
+    const { run } = recording;
+    const event: RunEvent = {
+      ...happening,
+      id: parts.newId(),
+      runId: run.start.runId,
+      n: run.last.n + 1,
+      atS,
+      wallMs: parts.now().wallMs,
+    };
+    try {
+      await parts.keep(event);
+    } catch (error) {
+      show({ ...recording, problem: error instanceof Error ? error.message : String(error) });
+      return false;
+    }
+    show(grown(recording, event));
+    if (event.kind !== 'guard') noteGuard(recording.guard.state, atS);
+    return true;
+  }
+
+  /** What the guard began to say is part of the run. */
+  function noteGuard({ says, why }: GuardView, atS: number): void {
+    if (says === said) return;
+    said = says;
+    void record({ kind: 'guard', says, why: why ?? '' }, atS);
+  }
+
+  return {
+    recording: () => recording,
+    subscribe(tell: () => void): () => void {
+      listeners.add(tell);
+      return () => void listeners.delete(tell);
+    },
+    record,
+
+    /** Seconds of the run at a moment of the page's monotonic clock; now, where none is given. */
+    at: (monoMs: number = parts.now().monoMs) => Math.max(0, elapsedS(clock, monoMs)),
+
+    /** What the guard says as time goes on without a reading. */
+    guardAt: (atS: number): GuardView => guardAt(recording.guard.state, atS),
+
+    /** Compares the clocks, and heeds the guard; called a few times a second and whenever the page comes back. */
+    compare(wasSeen: boolean): void {
+      const compared = compareClocks(clock, parts.now(), wasSeen);
+      clock = compared.clock;
+      const { found } = compared;
+      if (found?.kind === 'clock-step') void record(found);
+      if (found?.kind === 'asleep') void record({ kind: 'asleep', fromS: found.fromS }, found.toS);
+      noteGuard(guardAt(recording.guard.state, atNow()), atNow());
+    },
+
+    /** Said once after a reload: from the last event on only the phone's clock measured. */
+    noteReopened(): void {
+      if (!isNew) void record({ kind: 'asleep', fromS: recording.run.last.atS });
+    },
+
+    read: (temp: number, atS: number) => record({ kind: 'reading', temp, from: 'hand' }, atS),
+    mark: (mark: MarkKind, atS: number, text: string | null = null) =>
+      record({ kind: 'mark', mark, text }, atS),
+    correct: (of: string, temp: number) => record({ kind: 'correction', of, temp }),
+    end: (label: string, setup: EndSetup) => record({ kind: 'end', label, setup }),
+
+    /** Takes the newest thing back. @returns what it was; null where there is nothing */
+    undo(): RunEvent | null {
+      const last = lastToTakeBack(recording.events);
+      if (last) void record({ kind: 'undo', takes: last.id });
+      return last;
+    },
+
+    /** Everything that was asked for so far is on the device, or was refused. */
+    settled: () => queue.then(() => undefined),
+  };
+}
+
+function startClockAt(now: Now, sinceStartMs: number): RunClock {
+  const { baseMonoMs, last } = startClock(now);
+  return { baseS: sinceStartMs / 1000, baseMonoMs, last };
+}
+
+function recordingOf(events: readonly RunEvent[], { guardSetup }: RecorderParts): Recording {
+  const run = replayRun(events);
+  if (!run) throw new RangeError('these events make no run');
+  return { run, events, guard: guardOfRun(run, guardSetup(run)), problem: null };
+}
+
+function grown(recording: Recording, event: RunEvent): Recording {
+  const events = [...recording.events, event];
+  const run = replayRun(events);
+  if (!run) throw new RangeError('these events make no run');
+  return { run, events, guard: guardAfter(recording.guard, event, run), problem: null };
+}
