@@ -1,4 +1,4 @@
-import { useState, type ReactNode } from 'react';
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { takeNewVersion, useNewVersion } from '../../device/versions.ts';
 import { usePageAge } from '../../device/page-age.ts';
@@ -16,29 +16,27 @@ export function DeviceLine({ zone }: { zone: string }) {
   return (
     <aside
       aria-label="On this phone"
-      className="grid px-4 font-gothic text-[15px] leading-[1.25] font-medium empty:hidden desk:px-12 print:hidden [&>*]:border-b [&>*]:border-hair"
+      className="sticky top-0 z-10 bg-paper px-4 font-gothic text-[15px] leading-[1.25] font-medium desk:px-12 print:hidden [&>*]:border-b [&>*]:border-hair [&>*:empty]:hidden"
     >
-      <div role="status" className="grid empty:hidden">
+      <div role="status" className="flex flex-wrap items-center gap-x-5">
         {waiting && (
-          <Line>
-            <Link to="/unsent" className="inline-flex min-h-touch items-center font-semibold">
-              {waiting}
-            </Link>
-            {isSending && <span className="text-print">Sending…</span>}
-          </Line>
+          <Link to="/unsent" className="inline-flex min-h-touch items-center font-semibold">
+            {waiting}
+          </Link>
+        )}
+        {waiting && isSending && <span className="text-print">Sending…</span>}
+        {ageMs !== null && (
+          <span className="inline-flex min-h-touch items-center">{ageWords(ageMs, zone)}</span>
         )}
         {others.map((words) => (
-          <Line key={words}>{words}</Line>
+          <span key={words} className="inline-flex min-h-touch items-center">
+            {words}
+          </span>
         ))}
-        {ageMs !== null && <Line>{ageWords(ageMs, zone)}</Line>}
       </div>
       <NewVersion />
     </aside>
   );
-}
-
-function Line({ children }: { children: ReactNode }) {
-  return <p className="flex min-h-touch flex-wrap items-center gap-x-4">{children}</p>;
 }
 
 function NewVersion() {
@@ -47,12 +45,10 @@ function NewVersion() {
   if (!isReady) return null;
   const take = async () => setIsHeld((await takeNewVersion()) === 'recording');
   return (
-    <div role="status">
-      <Line>
-        A new version is ready.
-        <Word onClick={() => void take()}>Use it now</Word>
-        {isHeld && <span className="text-print">A run is being recorded; end it first.</span>}
-      </Line>
+    <div role="status" className="flex min-h-touch flex-wrap items-center gap-x-5">
+      A new version is ready.
+      <Word onClick={() => void take()}>Use it now</Word>
+      {isHeld && <span className="text-print">A run is being recorded; end it first.</span>}
     </div>
   );
 }

@@ -12,6 +12,7 @@ import { dayOf } from '../../format/when.ts';
 import { useSession } from '../frame/session-context.ts';
 import { dayHeading, stepDay } from './day-step.ts';
 import { RoundStop } from './round-stop.tsx';
+import { usePreparedDay } from './use-prepared-day.ts';
 import { byTechnician, countVisits, nextVisit, opensWords } from './rounds-words.ts';
 
 const MINUTE_MS = 60_000;
@@ -57,6 +58,7 @@ function Day({ rounds, nowMs }: { rounds: Rounds; nowMs: number }) {
   const { day, visits } = rounds;
   const today = dayOf(nowMs, shop.zone);
   const isOwn = person.role === 'technician';
+  usePreparedDay(isOwn ? visits : null);
   const next = isOwn ? nextVisit(visits, nowMs) : null;
   const state = [
     isOwn && person.name,

@@ -16,7 +16,7 @@ export function othersWords({ name, unsent }: Unsent['others'][number]): string 
 }
 
 export function ageWords(fetchedAtMs: number, zone: string): string {
-  return `No answer from the shop’s server. This is as of ${timeWords(fetchedAtMs, zone)}.`;
+  return `Not connected, as of ${timeWords(fetchedAtMs, zone)}`;
 }
 
 /** How the last attempt went, where it did not go. */
