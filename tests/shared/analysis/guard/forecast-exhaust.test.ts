@@ -66,6 +66,17 @@ describe('a course', () => {
     expect(spreadAfter({ ...course, fadePerS: 0, fadeErrorPerS: 0.001 }, 40)).toBeCloseTo(0.08, 9);
   });
 
+  test('spreads by fade as the course itself bends with it', () => {
+    // Central difference of the course in its fade (JCGM 100, 5.1.3, note 2).
+    const step = 1e-6;
+    const up = tempAfter({ ...course, fadePerS: 0.005 + step }, 150);
+    const down = tempAfter({ ...course, fadePerS: 0.005 - step }, 150);
+
+    const spreadK = spreadAfter({ ...course, fadeErrorPerS: 0.001 }, 150);
+
+    expect(spreadK).toBeCloseTo((Math.abs(up - down) / (2 * step)) * 0.001, 6);
+  });
+
   test('of an exact curvature takes its fade from that, of an unknown one from legs of its age', () => {
     const exact = {
       tempC: 75,

@@ -162,6 +162,16 @@ describe('a cut-heat', () => {
     expect(feed(still, ramp(190.2, 180, -0.5, 2), 2, nextS + 6).says).toBe('quiet');
   });
 
+  test('called under the ceiling stays likewise until the exhaust falls', () => {
+    const { state, nextS: offS } = climb(100, 184, 0.6, 1);
+
+    const level = feed(mark(state, 'heat-off', offS), [185, 186, 186.5, 186.6, 186.6], 1, offS);
+
+    expect(state).toMatchObject({ says: 'cut-heat', why: 'limit-near' });
+    expect(level).toMatchObject({ says: 'cut-heat', why: 'not-falling-yet' });
+    expect(feed(level, ramp(186.6, 180, -0.5), 1, offS + 5).says).toBe('quiet');
+  });
+
   test('comes anew when the heat is turned on again', () => {
     const off = mark(hot, 'heat-off', nextS);
     const cool = feed(off, ramp(190, 150, -0.5, 2), 2, nextS);
