@@ -32,6 +32,7 @@ const ductPairSchema = z.object({
 });
 const settingsPairSchema = z.object({
   verdict: z.enum(['as-it-should', 'no-difference', 'not-enough', 'backwards', 'cannot-tell']),
+  why: z.enum(['few-cut-outs', 'limit-cuts', 'wide']).nullable(),
   lowerByK: z.number().nullable(),
   lowerByWithinK: z.number().nullable(),
   expectedK: z.number(),

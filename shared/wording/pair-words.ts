@@ -35,17 +35,18 @@ function rowOf(
   formatApart: (value: number) => string,
 ): WordedPair['rows'][number] | null {
   if (!figure) return null;
-  const sign = figure.difference < 0 ? '−' : '+';
-  const apart = formatApart(Math.abs(figure.difference));
+  const size = formatApart(Math.abs(figure.difference));
+  // What rounds to nothing has no side.
+  const sign = size === formatApart(0) ? '' : figure.difference < 0 ? '−' : '+';
   return {
     label,
     first: formatMean(figure.first.mean),
     second: formatMean(figure.second.mean),
-    apart: `${sign}${apart}, give or take ${formatApart(figure.within)}`,
+    apart: `${sign}${size}, give or take ${formatApart(figure.within)}`,
   };
 }
 
-/** A difference of times: a tenth of a second is more than is known. */
+/** A difference of times; whole seconds, but a tenth where it is under ten. */
 function formatSeconds(spanS: number): string {
-  return `${Math.round(spanS)}\u00a0s`;
+  return `${spanS < 9.95 ? spanS.toFixed(1) : Math.round(spanS)}\u00a0s`;
 }

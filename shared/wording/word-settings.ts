@@ -36,6 +36,11 @@ function sentencesOf(pair: SettingsPair, { unit, hotter, cooler }: AboutSettings
     pair.expectedFrom === 'ratings'
       ? `By the machine’s own ratings it is to be ${expected} lower.`
       : `A bias heater lowers it by about ${expected} (common practice; the service sheet outranks this).`;
+  if (pair.why === 'limit-cuts') {
+    return [
+      'A limit cuts before the thermostat does, so the setting cannot be seen. Put the air right first.',
+    ];
+  }
   if (pair.lowerByK === null || pair.lowerByWithinK === null) {
     return ['One of the runs has too few cut-outs to compare.', should];
   }
@@ -100,7 +105,8 @@ function checksOf({ control, hotter, cooler }: AboutSettings): string[] {
   ];
 }
 
-function openChecks({ verdict }: SettingsPair): string[] {
+function openChecks({ verdict, why }: SettingsPair): string[] {
+  if (why === 'limit-cuts') return ['The checks of the finding on the limit'];
   return verdict === 'cannot-tell'
     ? ['Both settings again, through at least three cycles each']
     : [];

@@ -64,7 +64,7 @@ function PairSheet({ worded, first, second, ownId, zone }: PairSheetProps) {
         {worded.title}
       </h3>
       <p className="words pt-1.5 text-[16px]">
-        <SideWords side={first} ownId={ownId} zone={zone} />; beside it{' '}
+        <SideWords side={first} ownId={ownId} zone={zone} />.{' '}
         <SideWords side={second} ownId={ownId} zone={zone} />.
       </p>
       <p className="max-w-read py-2.5 text-say">{worded.sentences.join(' ')}</p>
@@ -82,13 +82,13 @@ function SideWords({ side, ownId, zone }: { side: Side; ownId: string; zone: str
   if (id === ownId) {
     return (
       <>
-        {how}: <b className="font-semibold">this run</b>
+        {sentenceCase(how)}: <b className="font-semibold">this run</b>
       </>
     );
   }
   return (
     <>
-      {how}:{' '}
+      {sentenceCase(how)}:{' '}
       <Link to={`/runs/${id}`} className="relative -my-[15px] inline-block py-[15px]">
         {label}, {when}
       </Link>
@@ -108,7 +108,7 @@ function Figures({ worded, first, second }: { worded: WordedPair; first: Side; s
   return (
     <>
       <div className="hidden desk:block">
-        <Table caption="Figures of the two runs" head={head}>
+        <Table caption="Figures of the two runs" head={head} className="mb-5">
           {worded.rows.map((row) => (
             <tr key={row.label}>
               <Td className="lab">{row.label}</Td>

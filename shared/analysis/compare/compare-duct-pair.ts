@@ -61,7 +61,9 @@ export function compareDuctPair(off: Analysis, on: Analysis, probesErrorK: numbe
 function signsOf(off: Analysis, on: Analysis, differences: RunDifferences): DuctSign[] {
   const { cutOuts, overshoots, onTimes } = differences;
   const signs: DuctSign[] = [];
-  if (has(on, ['limit-cycling']) && !has(off, ['limit-cycling'])) signs.push('limit-bursts');
+  // Where a limit cuts, peaks and overshoots are not the thermostat's.
+  if (has(on, ['limit-cycling']) && !has(off, ['limit-cycling']))
+    return isShorterOn(onTimes) ? ['limit-bursts', 'short-heats'] : ['limit-bursts'];
   const hot = has(on, HOT) && !has(off, HOT);
   if (hot || isMore(cutOuts, ALIKE_K)) signs.push('runs-hot');
   if (isMore(overshoots, ALIKE_K)) signs.push('more-overshoot');

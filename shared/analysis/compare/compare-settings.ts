@@ -4,6 +4,8 @@ import { compareRuns, type RunDifferences } from './run-figures.ts';
 /** What runs on a hotter and on a cooler heat setting say together. */
 export type SettingsPair = {
   verdict: 'as-it-should' | 'no-difference' | 'backwards' | 'not-enough' | 'cannot-tell';
+  /** Why it cannot be told; null where it can. */
+  why: 'few-cut-outs' | 'limit-cuts' | 'wide' | null;
   /** How much lower the cooler setting cuts out, K, and half its 95 % interval; null with too few cut-outs. */
   lowerByK: number | null;
   lowerByWithinK: number | null;
@@ -25,7 +27,7 @@ const NONE_SHARE = 0.5;
  *
  * Assumes one machine, load and duct, and nothing changed between the runs but the setting. Statistic: the 95 % interval
  * of the difference of the mean cut-outs (Welch's t), against none, half and the whole of what is expected. Where the
- * interval lies across a limit it cannot be told.
+ * interval lies across a limit, or a limit cuts before the thermostat, it cannot be told.
  *
  * @param hotter analysis of the run on the hotter setting
  * @param ratedK what the machine is specified to open lower by on the cooler one, K; null where that is not known
@@ -39,8 +41,17 @@ export function compareSettings(
   const differences = compareRuns(hotter, cooler, probesErrorK);
   const expectedK = ratedK ?? BIAS_LOWERS_K;
   const { cutOuts } = differences;
+  const cuts = [hotter, cooler].some(({ findings }) =>
+    findings.some(({ code }) => code === 'limit-cycling'),
+  );
+  const why = cuts ? 'limit-cuts' : cutOuts ? null : 'few-cut-outs';
+  const verdict =
+    why === null && cutOuts
+      ? verdictOf(-cutOuts.difference, cutOuts.within, expectedK)
+      : 'cannot-tell';
   return {
-    verdict: cutOuts ? verdictOf(-cutOuts.difference, cutOuts.within, expectedK) : 'cannot-tell',
+    verdict,
+    why: why ?? (verdict === 'cannot-tell' ? 'wide' : null),
     lowerByK: cutOuts && -cutOuts.difference,
     lowerByWithinK: cutOuts && cutOuts.within,
     expectedK,

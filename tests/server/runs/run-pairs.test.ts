@@ -31,7 +31,7 @@ beforeAll(async () => {
   booked = await bookVisit(owner, technician);
 }, WORKER_START_MS);
 
-describe('a run of a machine', () => {
+describe('a run of a machine', { timeout: 2 * WORKER_START_MS }, () => {
   let off: string;
 
   beforeAll(async () => {

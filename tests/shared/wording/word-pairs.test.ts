@@ -46,6 +46,7 @@ const settingsPairs: SettingsPair[] = (
   ['as-it-should', 'no-difference', 'not-enough', 'backwards', 'cannot-tell'] as const
 ).map((verdict) => ({
   verdict,
+  why: verdict === 'cannot-tell' ? 'wide' : null,
   lowerByK: 2,
   lowerByWithinK: 0.5,
   expectedK: 15 / 1.8,
@@ -102,7 +103,7 @@ describe('the words for a pair of runs', () => {
       apart: '+8.0\u00a0°F, give or take 1.1\u00a0°F',
     });
     expect(rows[1]).toMatchObject({ first: '1:30', second: '45\u00a0s' });
-    expect(rows[1]?.apart).toBe('−45\u00a0s, give or take 4\u00a0s');
+    expect(rows[1]?.apart).toBe('−45\u00a0s, give or take 4.0\u00a0s');
     expect(rows.at(-1)).toMatchObject({ label: 'First cut-out at', first: '5:00', second: '3:30' });
   });
 
@@ -112,6 +113,20 @@ describe('the words for a pair of runs', () => {
 
     expect(words('gas')).toContain('carbon monoxide');
     expect(words('electric')).not.toContain('carbon monoxide');
+  });
+
+  test('give what rounds to nothing no side', () => {
+    const [pair] = settingsPairs;
+    const none = {
+      ...differences.cutOuts,
+      difference: -0.01,
+    } as SettingsPair['differences']['cutOuts'];
+    const about = { unit: 'F' as const, control: 'thermostat', hotter: 'high', cooler: 'low' };
+    const rows = pair
+      ? wordSettings({ ...pair, differences: { ...differences, cutOuts: none } }, about).rows
+      : [];
+
+    expect(rows[0]?.apart).toBe('0.0\u00a0°F, give or take 1.1\u00a0°F');
   });
 
   test('name the bias heater first where the setting makes no difference, and no bias heater on a board', () => {

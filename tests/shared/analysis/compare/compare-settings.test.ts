@@ -62,4 +62,17 @@ describe('two heat settings', () => {
       lowerByK: null,
     });
   });
+
+  test('where a limit cuts first the setting cannot be seen', () => {
+    const bursts = Array.from({ length: 10 }, (_, i) => [
+      heat(128, i === 0 ? 120 : 15),
+      cool(119, 25),
+    ]).flat();
+    const cut = judge(readRun([...bursts, heat(125, 10)], probe));
+
+    expect(compareSettings(high, cut, unrated)).toMatchObject({
+      verdict: 'cannot-tell',
+      why: 'limit-cuts',
+    });
+  });
 });
