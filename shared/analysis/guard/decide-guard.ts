@@ -22,7 +22,7 @@ const CEILING_SLACK_K = 0.25;
 const WATCH_CEILING_S = 180;
 const WATCH_LIMIT_S = 60;
 const WATCH_ABOVE_S = 90;
-/** Above all cut-outs of the run by this, K. */
+/** Above all cut-outs of the run by this, and half-way through the allowance, K. */
 const ABOVE_CUT_OUTS_K = 3;
 /** Stored heat goes on warming the exhaust as if the heat were on for this long, beside the probe's lag, s. */
 const STORED_HEAT_S = 18;
@@ -95,7 +95,8 @@ function watch(state: GuardState, track: ExhaustTrack, seen: Seen): Decision {
     return { says: 'watch', why: 'limit-near' };
   }
   const { cutOutC } = state.turns;
-  if (course && cutOutC !== null && track.tempC > cutOutC + ABOVE_CUT_OUTS_K) {
+  const isInAllowance = track.tempC > allowedC - rating.overshootK / 2;
+  if (course && cutOutC !== null && isInAllowance && track.tempC > cutOutC + ABOVE_CUT_OUTS_K) {
     return { says: 'watch', why: 'above-cut-outs' };
   }
   if (course && state.click && climbsOn(state, state.click, track)) {
