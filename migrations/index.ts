@@ -5,6 +5,7 @@ import * as jobs from './003-jobs.ts';
 import * as runs from './004-runs.ts';
 import * as probeCalibrations from './005-probe-calibrations.ts';
 import * as sendings from './006-sendings.ts';
+import * as handRuns from './007-hand-runs.ts';
 
 type Migration = { name: string; up(db: Knex): Promise<void>; down(db: Knex): Promise<void> };
 
@@ -15,6 +16,7 @@ const MIGRATIONS: Migration[] = [
   { name: '004-runs', ...runs },
   { name: '005-probe-calibrations', ...probeCalibrations },
   { name: '006-sendings', ...sendings },
+  { name: '007-hand-runs', ...handRuns },
 ];
 
 /** A fixed list, so that names and order are the same from source, in tests and in the built server. */

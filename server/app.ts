@@ -99,7 +99,7 @@ function createApi(parts: AppParts): Router {
   api.use(probeRoutes(jobs.probeService));
   api.use(jobRoutes(jobs.jobService, jobs.visitService));
   api.use(visitRoutes(jobs.visitService, jobs.roundsService));
-  api.use(sendingRoutes(wireSendings(parts, people), parts.now));
+  api.use(sendingRoutes(wireSendings(parts, people, runs), parts.now));
   api.use(uploadRoutes(runs.uploads, runs.receive));
   api.use(runRoutes(runs));
   api.use(shareRoutes({ ...runs, shop: shop.get, publicUrl }));

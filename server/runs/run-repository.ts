@@ -15,6 +15,7 @@ type RunRow = {
   id: string;
   visit_id: string;
   upload_id: string;
+  source: string;
   probe_id: string | null;
   label: string;
   started_at_ms: number | string;
@@ -102,6 +103,7 @@ function toRow(run: Run): RunRow {
     id: run.id,
     visit_id: run.visitId,
     upload_id: run.uploadId,
+    source: run.source,
     probe_id: conditions.probeId,
     label: run.label,
     started_at_ms: run.startedAtMs,
@@ -128,6 +130,7 @@ function toRun(row: RunRow): Run {
     id: row.id,
     visitId: row.visit_id,
     uploadId: row.upload_id,
+    source: row.source === 'stopwatch' ? 'stopwatch' : 'file',
     label: row.label,
     startedAtMs: Number(row.started_at_ms),
     acceptedAtMs: Number(row.accepted_at_ms),

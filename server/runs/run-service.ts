@@ -3,16 +3,13 @@ import { join } from 'node:path';
 import type { Knex } from 'knex';
 import type { ProbeCorrection } from '#shared/analysis/rating.ts';
 import type { Person } from '#shared/schemas/people.ts';
-import type { RunConditions } from '#shared/schemas/runs.ts';
 import { createAudit } from '#server/people/audit-repository.ts';
 import { AppError, notFound } from '#server/errors.ts';
 import { createAnalysisRepository } from './analysis-repository.ts';
 import { moveDurably, type DataFolders } from './data-folders.ts';
-import { judgedWith } from '#shared/judging/judged-with.ts';
-import { judgedByAnother, judgingFor, specifiedFor } from '#shared/judging/judging-for.ts';
-import { findReference } from './find-reference.ts';
+import { judgedByAnother, judgingFor } from '#shared/judging/judging-for.ts';
+import { createJudgingOf } from './judging-of.ts';
 import type { LogWorker } from './log-worker.ts';
-import { createMachineRuns } from './machine-runs.ts';
 import type { Run, UploadedFile } from './run.ts';
 import { createRunRepository } from './run-repository.ts';
 import type { RunSources } from './run-sources.ts';
@@ -30,38 +27,13 @@ export type RunParts = {
   now: () => Date;
 };
 
-type SaidOfRun = Pick<LogToImport, 'id' | 'visitId' | 'conditions' | 'marks' | 'startedAtMs'>;
-
 export type RunService = ReturnType<typeof createRunService>;
 
 export function createRunService({ db, worker, sources, folders, now }: RunParts) {
   const runs = createRunRepository(db);
   const samples = createSampleRepository(db);
   const analyses = createAnalysisRepository(db);
-  const machineRuns = createMachineRuns(db, sources);
-
-  async function judgingOf(log: SaidOfRun) {
-    const { machine, visit } = await sources.visitFacts(log.visitId);
-    const { minCycles } = await sources.shop();
-    const used = await judgedWithOf(log.conditions, log.startedAtMs ?? visit.startsAtMs);
-    const judged = specifiedFor(machine, log.conditions.setting);
-    const reference = await findReference(machineRuns, machine.id, log);
-    return { machine, judged, used, said: { ...log, judgedWith: used, minCycles, reference } };
-  }
-
-  /** Before the file is read its clock is not known; the visit tells the day, which is all that drift asks. */
-  async function judgedWithOf(conditions: RunConditions, atMs: number) {
-    const probe = await findProbe(conditions);
-    const calibrations = probe ? await sources.listCalibrations(probe.id) : [];
-    return judgedWith(probe, calibrations, atMs);
-  }
-
-  async function findProbe({ probeId }: RunConditions) {
-    if (probeId === null) return null;
-    const probe = await sources.findProbe(probeId);
-    if (!probe) throw new AppError(400, 'no-probe', 'Choose a probe of the list.');
-    return probe;
-  }
+  const judgingOf = createJudgingOf(db, sources);
 
   /** A file becomes runs: all of it, or nothing. @returns the runs' ids, in the order of the spans */
   async function importRuns(by: Person, log: LogToImport): Promise<string[]> {

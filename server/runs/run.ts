@@ -31,6 +31,8 @@ export type Run = {
   id: string;
   visitId: string;
   uploadId: string;
+  /** How it came: a probe's file, or taken by hand. */
+  source: 'file' | 'stopwatch';
   label: string;
   startedAtMs: number;
   acceptedAtMs: number;

@@ -110,6 +110,7 @@ function toRun({ log, read, startedAtMs }: Accepted, part: ImportedRun, accepted
     id: randomUUID(),
     visitId: log.visitId,
     uploadId: log.id,
+    source: 'file',
     label: part.label,
     startedAtMs: Math.round(startedAtMs + fromS * 1000),
     acceptedAtMs,

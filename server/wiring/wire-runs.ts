@@ -1,7 +1,9 @@
 import type { AppParts } from '#server/app.ts';
 import { createAnalysisRepository } from '#server/runs/analysis-repository.ts';
 import { dataFolders } from '#server/runs/data-folders.ts';
+import { createJudgingOf } from '#server/runs/judging-of.ts';
 import { createLogWorker } from '#server/runs/log-worker.ts';
+import { createHandRuns } from '#server/runs/make-hand-run.ts';
 import { createNoteRepository } from '#server/runs/note-repository.ts';
 import { createNoteService } from '#server/runs/note-service.ts';
 import { fileReceiver } from '#server/runs/receive-file.ts';
@@ -34,6 +36,7 @@ export function wireRuns(parts: AppParts, { people, shop, audit }: PeopleWiring,
   const folders = dataFolders(dataDir);
   const worker = createLogWorker(workers.runs);
   const runs = createRunService({ db, worker, sources, folders, now });
+  const judgingOf = createJudgingOf(db, sources);
   const pages = createRunPages(db, sources);
   const readings = createRunReadings(db);
   const onDefect = (error: unknown) => logger.error({ err: error }, 'unexpected error');
@@ -43,6 +46,7 @@ export function wireRuns(parts: AppParts, { people, shop, audit }: PeopleWiring,
     pages,
     readings,
     folders,
+    handRuns: createHandRuns({ db, worker, folders, judgingOf, now }),
     notes: createNoteService(createNoteRepository(db), runs, now),
     uploads: createUploadService({ worker, sources, runs, audit, onDefect }),
     receive: fileReceiver(folders.staged),
