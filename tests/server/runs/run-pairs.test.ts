@@ -29,14 +29,14 @@ async function pageOf(id: string): Promise<RunPage> {
 
 beforeAll(async () => {
   booked = await bookVisit(owner, technician);
-}, WORKER_START_MS);
+}, 2 * WORKER_START_MS);
 
 describe('a run of a machine', { timeout: 2 * WORKER_START_MS }, () => {
   let off: string;
 
   beforeAll(async () => {
     off = await runUnder({ duct: 'off' });
-  }, WORKER_START_MS);
+  }, 2 * WORKER_START_MS);
 
   test('stands by itself where there is none to set it beside', async () => {
     expect((await pageOf(off)).pairs).toEqual({ duct: null, settings: null });

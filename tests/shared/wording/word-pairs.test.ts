@@ -21,25 +21,24 @@ const differences: DuctPair['differences'] = {
   swings: null,
 };
 
-const ductPairs: DuctPair[] = (
-  [
-    { verdict: 'house-duct', signs: ['limit-bursts', 'runs-hot', 'more-overshoot', 'short-heats'] },
-    { verdict: 'same-both-ways' },
-    { verdict: 'same-both-ways', sharedFault: 'limit-cycling' },
-    { verdict: 'same-both-ways', sharedFault: 'opens-high' },
-    { verdict: 'cannot-tell', why: 'few-cycles' },
-    { verdict: 'cannot-tell', why: 'near-the-limit' },
-    { verdict: 'cannot-tell', why: 'other-way' },
-    { verdict: 'cannot-tell', why: 'odd-without-duct' },
-  ] as const
-).map((told) => ({
+type Told = Partial<DuctPair> & Pick<DuctPair, 'verdict'>;
+const TOLD: Told[] = [
+  { verdict: 'house-duct', signs: ['limit-bursts', 'runs-hot', 'more-overshoot', 'short-heats'] },
+  { verdict: 'same-both-ways' },
+  { verdict: 'same-both-ways', sharedFault: 'limit-cycling' },
+  { verdict: 'same-both-ways', sharedFault: 'opens-high' },
+  { verdict: 'cannot-tell', why: 'few-cycles' },
+  { verdict: 'cannot-tell', why: 'near-the-limit' },
+  { verdict: 'cannot-tell', why: 'other-way' },
+  { verdict: 'cannot-tell', why: 'odd-without-duct' },
+];
+const ductPairs = TOLD.map((told): DuctPair => ({
   signs: [],
   why: null,
   sharedFault: null,
   differences,
   firstCutOutS: { off: 300, on: 210 },
   ...told,
-  ...('signs' in told ? { signs: [...told.signs] } : {}),
 }));
 
 const settingsPairs: SettingsPair[] = (
@@ -117,10 +116,7 @@ describe('the words for a pair of runs', () => {
 
   test('give what rounds to nothing no side', () => {
     const [pair] = settingsPairs;
-    const none = {
-      ...differences.cutOuts,
-      difference: -0.01,
-    } as SettingsPair['differences']['cutOuts'];
+    const none = differences.cutOuts && { ...differences.cutOuts, difference: -0.01 };
     const about = { unit: 'F' as const, control: 'thermostat', hotter: 'high', cooler: 'low' };
     const rows = pair
       ? wordSettings({ ...pair, differences: { ...differences, cutOuts: none } }, about).rows
