@@ -1,6 +1,7 @@
 import type { Random } from '#server/commands/heat-model/random.ts';
 import { hotMachine, unattended } from '../machines.ts';
 import type { Maker, Told } from '../plan.ts';
+import { endAfterTurn } from './end-record.ts';
 
 /** Runs that cycle by themselves at the wrong temperature, or at no steady one; plain ones and thin ones. */
 export const THERMOSTAT_PLANS: Maker[] = [
@@ -22,7 +23,7 @@ export const THERMOSTAT_PLANS: Maker[] = [
   {
     name: 'opens low',
     meant: 'opens-low',
-    make: (random) => turning(random, [138, 146], [113, 122]),
+    make: (random) => turning(random, [138, 146], [113, 117.5]),
   },
   {
     name: 'opens low, just',
@@ -83,26 +84,39 @@ export const THERMOSTAT_PLANS: Maker[] = [
   {
     name: 'drifts, too hot',
     meant: 'drifting',
-    make: (random) => ({ ...drifts(random, [170, 173], [7, 12]), machine: hotMachine(random) }),
+    make: (random) => ({
+      ...drifts(random, [168, 172], [7, 11], [141, 149]),
+      machine: hotMachine(random),
+    }),
   },
-  { name: 'scatters', meant: 'scattered', make: (random) => scatters(random, [3.3, 5]) },
-  { name: 'scatters a little', meant: 'scattered', make: (random) => scatters(random, [1.5, 2.9]) },
+  { name: 'scatters', meant: 'scattered', make: (random) => scatters(random, [4, 6.5]) },
+  { name: 'scatters a little', meant: 'scattered', make: (random) => scatters(random, [1.5, 3.5]) },
   {
     name: 'one late',
     meant: 'mixed',
-    // Hot enough to get past the late opening and round again.
+    // Hot enough to get past the late opening and round again; too few cut-outs for a scatter.
     make: (random) => ({
       machine: hotMachine(random),
-      faults: { oneLate: { opening: 2, byK: random.between(10, 12) }, scatterK: 0.1 },
-      watch: { forS: 950 },
+      faults: { oneLate: { opening: 2, byK: random.between(10, 12) }, scatterK: 0 },
+      finish: (plan) => endAfterTurn(plan, 7, random.between(15, 30)),
     }),
   },
   {
-    name: 'one early',
+    name: 'one late among many',
+    meant: 'scattered',
+    make: (random) => ({
+      machine: hotMachine(random),
+      faults: { oneLate: { opening: 3, byK: random.between(10, 12) }, scatterK: 0.1 },
+      watch: { forS: 1100 },
+    }),
+  },
+  {
+    name: 'one early among many',
     meant: 'mixed',
     make: (random) => ({
-      faults: { oneLate: { opening: 3, byK: random.between(-8.5, -6) }, scatterK: 0.1 },
-      watch: { forS: random.between(800, 1000) },
+      faults: { oneLate: { opening: 3, byK: random.between(-7, -5.5) }, scatterK: 0.1 },
+      accuracyK: 0.5 / 1.8,
+      watch: { forS: random.between(1700, 2000) },
     }),
   },
 ];
@@ -122,10 +136,10 @@ function hot(random: Random, cutOutF: Span, resetF: Span): Told {
 }
 
 /** By so many °F over the record; the drift a cycle follows from how many cycles there are. */
-function drifts(random: Random, cutOutF: Span, totalF: Span): Told {
+function drifts(random: Random, cutOutF: Span, totalF: Span, resetF: Span = [127, 131]): Told {
   const driftTotalK = random.between(...totalF) / 1.8;
   return {
-    ...turning(random, cutOutF, [127, 131], 1300),
+    ...turning(random, cutOutF, resetF, 1300),
     faults: { scatterK: random.between(0.05, 0.3) },
     finish: (plan) => {
       const openings = unattended(plan.machine, plan.faults, plan.watch.forS).clicksS.length;
@@ -138,6 +152,6 @@ function drifts(random: Random, cutOutF: Span, totalF: Span): Told {
 function scatters(random: Random, scatterK: Span): Told {
   return {
     faults: { scatterK: random.between(...scatterK) },
-    watch: { forS: random.between(1100, 1500) },
+    watch: { forS: random.between(1600, 2100) },
   };
 }
