@@ -5,7 +5,8 @@ import { toCelsius } from '#shared/units.ts';
 /**
  * What became of a damaged log. `another value`: one reading is another plain number of the same form, the rest is
  * the same, and nothing tells the two files apart. `shorter`: the file ends earlier, at the end of a line or of its
- * last number, and every reading of it is right. `silent`: another series, and not a word.
+ * last number, and every reading of it is right. `another time`: one time of a record without an even step is another,
+ * still in order. `silent`: another series, and not a word.
  */
 export const FATES = [
   'same',
@@ -14,6 +15,7 @@ export const FATES = [
   'refused',
   'shorter',
   'another value',
+  'another time',
   'silent',
 ] as const;
 export type Fate = (typeof FATES)[number];
@@ -37,7 +39,8 @@ function fateOf(whole: LogReading, reading: LogReading): Fate {
   if (sameUnit && whole.resultHash === reading.resultHash) return 'same';
   if (tellsMore(whole, reading)) return 'told';
   if (sameUnit && isShorter(whole, reading)) return 'shorter';
-  return sameUnit && hasOneOtherValue(whole, reading) ? 'another value' : 'silent';
+  if (sameUnit && hasOneOtherValue(whole, reading)) return 'another value';
+  return sameUnit && hasOneOtherTime(whole, reading) ? 'another time' : 'silent';
 }
 
 /** It has a warning or a row set aside that the whole log's reading does not have. */
@@ -65,6 +68,41 @@ function hasOneOtherValue(whole: LogReading, reading: LogReading): boolean {
   if (reading.temps.length !== whole.temps.length) return false;
   if (reading.series.timesS.some((timeS, i) => timeS !== whole.series.timesS[i])) return false;
   return reading.temps.filter((temp, i) => !Object.is(temp, whole.temps[i])).length === 1;
+}
+
+/** Times count from the first reading, so that its own change moves all others alike. */
+function hasOneOtherTime(whole: LogReading, reading: LogReading): boolean {
+  if (reading.temps.some((temp, i) => !Object.is(temp, whole.temps[i]))) return false;
+  const { timesS } = whole.series;
+  if (timesS.length !== reading.temps.length || isEven(timesS)) return false;
+  const shiftS = reading.series.timesS.at(-2)! - timesS.at(-2)!;
+  const differs = (timeS: number, i: number) => Math.abs(timeS - timesS[i]! - shiftS) > 1e-6;
+  return reading.series.timesS.filter(differs).length <= 1;
+}
+
+function isEven(timesS: Float64Array): boolean {
+  const steps = Array.from(timesS.subarray(1), (timeS, i) => timeS - timesS[i]!);
+  const usual = [...steps].sort((a, b) => a - b)[steps.length >> 1]!;
+  return steps.filter((step) => Math.abs(step - usual) < 0.05 * usual).length > steps.length / 2;
+}
+
+/** Kept readings of a damaged log that the whole one does not have at that time: told, and yet wrong. */
+export function countStrangers(whole: LogReading, reading: LogReading): number {
+  const shiftS = startS(reading) - startS(whole);
+  const byTime = new Map(
+    Array.from(whole.temps, (temp, i) => [micro(whole.series.timesS[i]!), temp]),
+  );
+  return Array.from(reading.temps).filter((temp, i) => {
+    return byTime.get(micro(reading.series.timesS[i]! + shiftS)) !== temp;
+  }).length;
+}
+
+function micro(timeS: number): number {
+  return Math.round(timeS * 1e6);
+}
+
+function startS({ startedAt }: LogReading): number {
+  return startedAt === null ? 0 : Date.parse(`${startedAt.replace(' ', 'T')}Z`) / 1000;
 }
 
 /** The largest change of a reading at the same time, K; Infinity where times differ. */

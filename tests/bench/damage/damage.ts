@@ -18,21 +18,26 @@ const MOST_SHOWN = 40;
 export async function bench(args: string[]): Promise<void> {
   const tries = Number(args[0] ?? TRIES);
   const seed = Number(args[1] ?? SEED);
-  const total: Batch = { counts: {}, valueChangesK: [], oddities: [] };
+  const total: Batch = { counts: {}, valueChangesK: [], toldWithStrangers: 0, oddities: [] };
   let child = start();
-  for (let from = 0; from < tries; from += BATCH) {
+  let stopped = false;
+  let done = 0;
+  // whoever ends a long run early gets what it found so far
+  process.once('SIGTERM', () => (stopped = true));
+  for (let from = 0; from < tries && !stopped; from += BATCH) {
     const to = Math.min(tries, from + BATCH);
     const batch = await oneBatch(child, [seed, from, to]);
     if (batch) add(total, batch);
-    else {
-      child.kill();
+    else if (!stopped) {
+      child.kill('SIGKILL');
       child = start();
       total.counts.hung = (total.counts.hung ?? 0) + 1;
       console.log(`hung somewhere in tries ${from} to ${to}`);
     }
+    if (batch) done = to;
   }
-  child.kill();
-  print(total, tries, seed);
+  child.kill('SIGKILL');
+  print(total, done, seed);
 }
 
 function start(): ChildProcess {
@@ -50,12 +55,15 @@ function oneBatch(child: ChildProcess, range: [number, number, number]): Promise
       how();
     };
     child.once('message', (batch: Batch) => finish(() => resolve(batch)));
-    child.once('exit', (code) => finish(() => reject(new Error(`the child ended with ${code}`))));
+    child.once('exit', (code, signal) =>
+      finish(() => (signal ? resolve(null) : reject(new Error(`the child ended with ${code}`)))),
+    );
     child.send(range);
   });
 }
 
-function add(total: Batch, { counts, valueChangesK, oddities }: Batch): void {
+function add(total: Batch, { counts, valueChangesK, toldWithStrangers, oddities }: Batch) {
+  total.toldWithStrangers += toldWithStrangers;
   for (const fate of [...FATES, 'crashed', 'hung'] as const) {
     total.counts[fate] = (total.counts[fate] ?? 0) + (counts[fate] ?? 0);
   }
@@ -63,11 +71,13 @@ function add(total: Batch, { counts, valueChangesK, oddities }: Batch): void {
   total.oddities.push(...oddities);
 }
 
-function print({ counts, valueChangesK, oddities }: Batch, tries: number, seed: number): void {
+function print(total: Batch, tries: number, seed: number): void {
+  const { counts, valueChangesK, toldWithStrangers, oddities } = total;
   console.log(`${tries} tries, seed ${seed}`);
   for (const fate of [...FATES, 'crashed', 'hung'] as const) {
     console.log(`${fate.padEnd(14)} ${String(counts[fate] ?? 0).padStart(8)}`);
   }
+  console.log(`told, and some reading is still not the whole log's: ${toldWithStrangers}`);
   const changes = valueChangesK.sort((a, b) => a - b);
   const at = (share: number) => (changes[Math.floor(share * (changes.length - 1))] ?? 0).toFixed(1);
   console.log(`another value: by ${at(0.5)} K in half of them, ${at(0.95)} K in 95 of 100`);

@@ -4,10 +4,10 @@ import { expect, test } from 'vitest';
 const ROWS = 72;
 const FOLDER = new URL('./', import.meta.url);
 
-/** How many tests of this folder name each row, in their title ("row 17: …") or their table (row: 17). */
+/** How many tests of this folder name each row, in a title ("row 17: …") or a table (row: 17). */
 function casesByRow(): Map<number, number> {
   const cases = new Map<number, number>();
-  for (const name of readdirSync(FOLDER).filter((file) => file.endsWith('.test.ts'))) {
+  for (const name of readdirSync(FOLDER).filter((file) => /\.test\.ts$|^cases-of-/.test(file))) {
     const text = readFileSync(new URL(name, FOLDER), 'utf8');
     for (const match of text.matchAll(/'rows? ([\d, ]+):|\{ ?\n? *row: (\d+)/g)) {
       for (const row of (match[1] ?? match[2]!).split(',').map(Number)) {

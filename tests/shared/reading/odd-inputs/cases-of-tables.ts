@@ -1,11 +1,11 @@
-import { test } from 'vitest';
-import { checkOdd, log, T, TEMP, type Odd } from './check-odd.ts';
+import { log, T, TEMP, type Odd } from './check-odd.ts';
 
 const ROWS = '0,70.1\n10,74.5\n20,80.25\n';
 const READ = { t: T, temp: TEMP, unit: 'F' } as const;
 const even = (n: number, row: (i: number) => string) => Array.from({ length: n }, (_, i) => row(i));
 
-const CASES: Odd[] = [
+/** Odd inputs: tables. */
+export const TABLE_CASES: Odd[] = [
   {
     row: 16,
     what: 'a preamble of numbers and dates',
@@ -191,5 +191,3 @@ const CASES: Odd[] = [
     refused: { code: 'columns-change', row: 6 },
   },
 ];
-
-test.each(CASES)('row $row: $what', checkOdd);

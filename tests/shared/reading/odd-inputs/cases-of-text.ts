@@ -1,12 +1,12 @@
-import { expect, test } from 'vitest';
-import { inUtf16, inWindows1252, problemOf, readText } from '../read-text.ts';
-import { checkOdd, HEADER, log, T, TEMP, type Odd } from './check-odd.ts';
+import { inUtf16, inWindows1252 } from '../read-text.ts';
+import { HEADER, log, T, TEMP, type Odd } from './check-odd.ts';
 
 const LOG = log('0,70.1', '10,74.5', '20,80.25');
 const READ = { t: T, temp: TEMP, unit: 'F' } as const;
 const bytes = (text: string) => new TextEncoder().encode(text);
 
-const CASES: Odd[] = [
+/** Odd inputs: text. */
+export const TEXT_CASES: Odd[] = [
   {
     row: 1,
     what: 'a mark before a quoted header',
@@ -171,33 +171,3 @@ const CASES: Odd[] = [
     refused: { code: 'archive-file' },
   },
 ];
-
-test.each(CASES)('row $row: $what', checkOdd);
-
-test('row 70: a thousand and one columns are refused with the limit', () => {
-  const wide = `${Array.from({ length: 1002 }, (_, i) => `c${i}`).join(',')}\n`;
-
-  expect(problemOf(wide)).toMatchObject({ code: 'too-many-columns', row: 1 });
-});
-
-test('row 70: one line of 50 MB is refused within a second', () => {
-  const line = new Uint8Array(50_000_000).fill(55);
-  const startMs = performance.now();
-
-  expect(problemOf(line)).toMatchObject({ code: 'line-too-long', row: 1 });
-  expect(performance.now() - startMs).toBeLessThan(2_000);
-});
-
-test('row 70: a million empty lines before the readings end early, by name', () => {
-  const outcome = readText(`${'\n'.repeat(1_000_000)}${LOG}`);
-
-  expect(outcome).toMatchObject({ kind: 'refused', problem: { code: 'no-readings' } });
-});
-
-test('row 70: a hundred thousand quotes cost no more than their length', () => {
-  const startMs = performance.now();
-  const outcome = readText(log('0,70.1', `10,${'"'.repeat(99_000)}`, '20,80.25', '30,84', '40,87'));
-
-  expect(outcome.kind).toBe('read');
-  expect(performance.now() - startMs).toBeLessThan(2_000);
-});

@@ -2,20 +2,18 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { readLog } from '#shared/reading/read-log.ts';
 import type { Answers } from '#shared/reading/log-reading.ts';
-import type { WholeLog } from '#tests/support/judge-damage.ts';
+import type { WholeLog } from './judge-damage.ts';
 
-const FOLDER = new URL('../../../sample-logs/', import.meta.url);
+const FOLDER = new URL('../../sample-logs/', import.meta.url);
 const LF = 10;
-/** Long enough for a few cycles, short enough for thousands of tries a minute. */
-const MOST_LINES = 160;
 
 export type NamedLog = WholeLog & { name: string };
 
 /** Every sample log, its first lines only: 25 layouts, clocks, encodings and units. */
-export function wholeLogs(): NamedLog[] {
+export function wholeLogs(mostLines: number): NamedLog[] {
   const names = readdirSync(FOLDER).filter((name) => /\.(csv|txt)$/.test(name));
   return names.sort().map((name) => {
-    const bytes = firstLines(readFileSync(fileURLToPath(new URL(name, FOLDER))));
+    const bytes = firstLines(readFileSync(fileURLToPath(new URL(name, FOLDER))), mostLines);
     return { name, ...answered(bytes, {}, name) };
   });
 }
@@ -29,10 +27,10 @@ function answered(bytes: Uint8Array, answers: Answers, name: string): WholeLog {
   return answered(bytes, { ...answers, [about]: options[0]!.answer }, name);
 }
 
-function firstLines(bytes: Uint8Array): Uint8Array {
+function firstLines(bytes: Uint8Array, mostLines: number): Uint8Array {
   let lines = 0;
   for (let i = 0; i < bytes.length; i++) {
-    if (bytes[i] === LF && ++lines === MOST_LINES) {
+    if (bytes[i] === LF && ++lines === mostLines) {
       // a line feed of UTF-16, low octet first, has its zero after it
       return bytes.slice(0, bytes[i + 1] === 0 ? i + 2 : i + 1);
     }

@@ -1,12 +1,12 @@
-import { test } from 'vitest';
-import { checkOdd, log, stamped, T, TEMP, type Odd } from './check-odd.ts';
+import { log, stamped, T, TEMP, type Odd } from './check-odd.ts';
 
 const READ = { t: T, temp: TEMP } as const;
 const at = (hour: number, n: number, day = '2026-05-04') =>
   Array.from({ length: n }, (_, i) => `${day} ${hour}:00:${String(i).padStart(2, '0')}`);
 const seconds = (s: number) => new Date(Date.UTC(2026, 4, 4, 10, 0, s)).toISOString().slice(0, 19);
 
-const CASES: Odd[] = [
+/** Odd inputs: clocks. */
+export const CLOCK_CASES: Odd[] = [
   {
     row: 39,
     what: 'an offset of two digits, and a comma before the fraction',
@@ -220,5 +220,3 @@ const CASES: Odd[] = [
     aside: [],
   },
 ];
-
-test.each(CASES)('row $row: $what', checkOdd);

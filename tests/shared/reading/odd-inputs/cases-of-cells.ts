@@ -1,10 +1,10 @@
-import { test } from 'vitest';
-import { checkOdd, log, T, TEMP, type Odd } from './check-odd.ts';
+import { log, T, TEMP, type Odd } from './check-odd.ts';
 
 const READ = { t: T, temp: TEMP, unit: 'F' } as const;
 const curve = (odd: string) => log('0,70.1', '10,74.5', odd, '30,84.0', '40,88.2', '50,91.1');
 
-const CASES: Odd[] = [
+/** Odd inputs: cells. */
+export const CELL_CASES: Odd[] = [
   {
     row: 8,
     what: 'semicolons with commas in the notes',
@@ -192,5 +192,3 @@ const CASES: Odd[] = [
     aside: [3],
   },
 ];
-
-test.each(CASES)('row $row: $what', checkOdd);
