@@ -5,6 +5,4 @@ process.on('message', ([seed, from, to]: [number, number, number]) => {
   process.send?.(tryDamage(seed, from, to));
 });
 
-// whoever ends the run ends the parent, which still prints what it has
-process.on('SIGTERM', () => undefined);
 process.on('disconnect', () => process.exit());
