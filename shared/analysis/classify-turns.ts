@@ -7,8 +7,11 @@ import { bandOf } from './judge-point.ts';
 const OFF_MARKS: MarkKind[] = ['heat-off', 'stopped', 'door'];
 /** A mark is tapped a little after the fact, s. */
 const TAPPED_LATE_S = 3;
-/** A last peak this far off the other cut-outs is no cut-out of the same thermostat, K (4 °F). */
+/** A last peak this far off the only other cut-out is no cut-out of the same thermostat, K (4 °F). */
 const OUT_OF_LINE_K = 4 / 1.8;
+/** … and with more to go by so many of their standard deviations, but no less than this, K (1.5 °F). */
+const DEVIATIONS = 4;
+const LEAST_OUT_OF_LINE_K = 1.5 / 1.8;
 
 /**
  * Tells for each extreme what turned it (see `TurnedBy`): the record's ends are known already; a person's marks,
@@ -80,12 +83,25 @@ function lostForGood(extremes: Extreme[], rating: Rating | null): number | null 
 
 function isOutOfLine(peak: Extreme, others: Extreme[], rating: Rating | null): boolean {
   if (others.length > 0) {
-    const usualC = median(others.map(({ tempC }) => tempC));
-    return Math.abs(peak.tempC - usualC) > Math.max(OUT_OF_LINE_K, 2 * peak.uK);
+    const tempsC = others.map(({ tempC }) => tempC);
+    const outK = Math.max(outOfLineK(tempsC), 2 * peak.uK);
+    return Math.abs(peak.tempC - median(tempsC)) > outK;
   }
   if (!rating) return false;
   const { lowC, highEndC } = bandOf('cut-out', rating);
   return peak.tempC + peak.uK < lowC || peak.tempC - peak.uK > highEndC;
+}
+
+/** How far off others a peak is out of line, K, by their own spread; the first, from cold, may be higher than the rest. */
+function outOfLineK(tempsC: number[]): number {
+  const settledC = tempsC.length > 2 ? tempsC.slice(1) : tempsC;
+  if (settledC.length < 2) return OUT_OF_LINE_K;
+  const middleC = settledC.reduce((sum, tempC) => sum + tempC, 0) / settledC.length;
+  const squares = settledC.reduce((sum, tempC) => sum + (tempC - middleC) ** 2, 0);
+  const deviationK = Math.sqrt(squares / (settledC.length - 1));
+  // Two or three say little of their spread: what they lack is made up for with what is usual.
+  const believedK = Math.hypot(deviationK, LEAST_OUT_OF_LINE_K / DEVIATIONS);
+  return Math.min(OUT_OF_LINE_K, Math.max(LEAST_OUT_OF_LINE_K, DEVIATIONS * believedK));
 }
 
 function fellForGood(

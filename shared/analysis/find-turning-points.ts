@@ -5,6 +5,7 @@ import { quantile } from './statistics/quantile.ts';
 import { boundByReadings } from './turns/bound-by-readings.ts';
 import { findExtremes } from './turns/find-extremes.ts';
 import { firstAtOrAfter } from './first-at-or-after.ts';
+import { withLastTurn } from './turns/find-last-turn.ts';
 import { locateTurns, type LocatedTurn, type RoughTurn } from './turns/locate-turns.ts';
 
 /** The zig-zag looks for a little less than the threshold: smoothing has taken something off each swing. */
@@ -12,6 +13,8 @@ const ROUGH_SHARE = 0.8;
 /** Swings stand clear of a threshold where nine in ten of them are this much greater. */
 const CLEAR_OF = 1.5;
 const CLEAR_SHARE = 0.1;
+/** With fewer readings a leg than this smoothing eats into the swings. */
+const FEW_READINGS = 12;
 const LEVEL_STEP = 1.25;
 const MOST_ROUNDS = 4;
 /** A located turn lies within this share of its smaller swing from the reading. */
@@ -44,7 +47,9 @@ export function findTurningPoints(
   for (let round = 0; round < MOST_ROUNDS; round++) {
     const extremes = locate(series, view, rough, noise);
     const kept = withoutWeakSwings(extremes, swingK);
-    if (kept.length === extremes.length) return extremes;
+    if (kept.length === extremes.length) {
+      return withLastTurn(extremes, view, noise, swingK);
+    }
     rough = kept.map((i) => rough[i]!);
   }
   return locate(series, view, rough, noise);
@@ -61,7 +66,10 @@ function findRough(view: BinnedView, swingK: number): Rough {
   const smooth = findExtremes(view.smoothC, ROUGH_SHARE * swingK);
   if (view.smoothC === view.tempsC) return smooth;
   const plain = findClearExtremes(view.tempsC, swingK);
-  return plain.length > smooth.length ? plain : smooth;
+  const isSparse = view.tempsC.length < FEW_READINGS * plain.length;
+  return plain.length > smooth.length || (isSparse && plain.length === smooth.length)
+    ? plain
+    : smooth;
 }
 
 /**

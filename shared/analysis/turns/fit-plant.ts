@@ -29,7 +29,7 @@ export type FittedPlant = {
   residualsK: Float64Array;
 };
 
-const MOST_ROUNDS = 40;
+const MOST_ROUNDS = 30;
 /** Rounds in which the levels and starts alone are found, before times and time constants move. */
 const LINEAR_ROUNDS = 2;
 /** A round that gains less than this much of twice the log posterior is the last. */
@@ -98,6 +98,9 @@ function improve(
     for (let j = 0; j < p; j++) damped[j * p + j]! *= 1 + damping;
     const factor = choleskyFactor(damped, p);
     const step = factor && choleskySolve(factor, right, p);
+    // What the whole step would gain were the problem linear.
+    if (step && step.reduce((sum, value, j) => sum + value * right[j]!, 0) < ENOUGH_GAIN)
+      return null;
     for (let share = 1; step && share > 0.1; share *= SHORTEN) {
       const parameters = moved(problem.shape, state.parameters, step, share);
       const fitted = new Float64Array(state.fitted.length);

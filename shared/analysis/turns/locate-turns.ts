@@ -41,7 +41,7 @@ const FEW_READINGS = 10;
 const MOST_SPARSE = 240;
 /** Turns fitted at once: at least so many, and more where readings are so few that it costs no more than this. */
 const LEAST_AT_ONCE = 12;
-const MOST_WORK = 1.8e6;
+const MOST_WORK = 9e5;
 
 /**
  * Locates turns by fitting a switched plant through all of them: the temperature and time of the noise-free extreme, and
@@ -126,12 +126,13 @@ function startFrom({ parameters, shape }: FittedLegs) {
   return { lagS, switchesS: parameters.slice(SHARED, placeOfSwitch(shape.switches)) };
 }
 
-/** The cost of a round goes with the values and the square of the parameters. */
+/** The cost of a round goes with the square of the parameters, times the values and some more parameters. */
 function turnsAtOnce(view: BinnedView, { turns, startS, endS }: TurnsToLocate): number {
   const count = firstAtOrAfter(view.timesS, endS) - firstAtOrAfter(view.timesS, startS);
   const each = Math.min(VALUES_PER_LEG, count / (turns.length + 1));
+  const workOf = (most: number) => (each * most + 3 * (2 * most + 13)) * (2 * most + 13) ** 2;
   let most = LEAST_AT_ONCE;
-  while (most < turns.length && most * each * (2 * most + 13) ** 2 < MOST_WORK) most++;
+  while (most < turns.length && workOf(most + 1) < MOST_WORK) most++;
   return most;
 }
 

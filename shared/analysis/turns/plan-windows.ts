@@ -20,7 +20,7 @@ const USED_OF_LONG = 1.2;
  * Left out at the record's own ends, as a share of the leg: the start is rounded by the lags, and the last extreme
  * may be the start of a turn that the record does not show whole.
  */
-const LEFT_OUT = 0.12;
+export const LEFT_OUT = 0.12;
 /** Left out where the leg goes on to a turn that is not in the window: its rounded corner. */
 const CORNER = 0.4;
 

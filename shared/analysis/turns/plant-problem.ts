@@ -61,11 +61,12 @@ const LEVEL_SHARE = 0.02;
 const USUAL_NOISE_K = 0.1;
 /** A turn comes so many lags after its switch. */
 const TURN_AFTER = 0.8;
-/** A fit needs two values a turn and so many more. */
-const LEAST_SPARE = 6;
+/** A fit needs so many values a turn, each with a time of its own, and so many more for what all share. */
+const VALUES_A_TURN = 1.3;
+const LEAST_SPARE = 10;
 /** With fewer values a leg than this a fit is tried from other lags too, as shares of a usual leg. */
 const FEW_VALUES = 15;
-const OTHER_LAGS = [0.04, 0.1, 0.25];
+const OTHER_LAGS = [0.06, 0.2];
 /** Residuals that widen errors by more than this show that the stores were mistaken. */
 const MISFIT = 1.1;
 /** A fit this much less likely than the best, in twice the log, is left out. */
@@ -90,7 +91,7 @@ export function fitTurns(
   from: Pick<PlantStart, 'lagS' | 'switchesS'> | null,
 ): WeighedPlants {
   const count = values.timesS.length;
-  if (count < 2 * turns.length + LEAST_SPARE) return [];
+  if (count < VALUES_A_TURN * turns.length + LEAST_SPARE) return [];
   const isSparse = count < FEW_VALUES * (turns.length + 1);
   const fitFrom = (start: PlantStart) =>
     fitPlant(plantProblem(values, turns, window, noise, start));
