@@ -76,6 +76,7 @@ export const RULES: readonly Rule[] = [
   { method: 'POST', path: '/machines/:id/parts', who: ALL, technician: seesMachine },
   { method: 'POST', path: '/machines/:id/parts/:partId/remove', who: ALL, technician: seesMachine },
   { method: 'GET', path: '/machines/:id/runs', who: ALL, technician: seesMachine },
+  { method: 'GET', path: '/machines/:id/references', who: ALL, technician: seesMachine },
 
   { method: 'GET', path: '/ratings', who: ALL },
   { method: 'POST', path: '/ratings', who: DESK },

@@ -6,7 +6,7 @@ import type { Device } from './device.ts';
 const ON_SITE = [
   /^\/api\/rounds(\?day=[\d-]+)?$/,
   /^\/api\/(visits|machines|jobs|runs)\/[\w-]+$/,
-  /^\/api\/machines\/[\w-]+\/runs$/,
+  /^\/api\/machines\/[\w-]+\/(runs|references)$/,
   /^\/api\/runs\/[\w-]+\/trace\?columns=\d+$/,
   /^\/api\/(ratings|probes|calibrations)$/,
 ];

@@ -24,3 +24,29 @@ export async function findReference(
   const { analysis } = await machineRuns.judged(chosen);
   return toReferenceRun(analysis, chosen.conditions.duct === duct);
 }
+
+/** A clean run to go by, for one way of running the machine. */
+export type MachineReference = Pick<RunConditions, 'setting' | 'load' | 'duct'> & {
+  reference: ReferenceRun;
+};
+
+/** What findReference gives for every way that a machine is run, where it gives anything: for a device to take along. */
+export async function listReferences(
+  machineRuns: MachineRuns,
+  machineId: string,
+): Promise<MachineReference[]> {
+  const found: MachineReference[] = [];
+  const ways = new Map<string, RunConditions>();
+  for (const { conditions } of await machineRuns.list(machineId)) {
+    for (const duct of ['on', 'off'] as const) {
+      const way = { ...conditions, duct };
+      ways.set(`${way.setting} ${way.load} ${duct}`, way);
+    }
+  }
+  for (const conditions of ways.values()) {
+    const reference = await findReference(machineRuns, machineId, { id: '', conditions });
+    const { setting, load, duct } = conditions;
+    if (reference) found.push({ setting, load, duct, reference });
+  }
+  return found;
+}

@@ -7,6 +7,8 @@ import { personOf } from '#server/people/signed-in.ts';
 import { validate } from '#server/validate.ts';
 import { judgeAgainSchema, newNoteSchema } from '#shared/schemas/runs.ts';
 import type { DataFolders } from './data-folders.ts';
+import { listReferences } from './find-reference.ts';
+import type { MachineRuns } from './machine-runs.ts';
 import type { NoteService } from './note-service.ts';
 import { packChunk } from './pack-samples.ts';
 import type { RunPages } from './run-page.ts';
@@ -26,10 +28,22 @@ export type RunRouteParts = {
   notes: NoteService;
   readings: RunReadings;
   folders: DataFolders;
+  machineRuns: MachineRuns;
 };
 
-export function runRoutes({ runs, pages, notes, readings, folders }: RunRouteParts): Router {
+export function runRoutes({
+  runs,
+  pages,
+  notes,
+  readings,
+  folders,
+  machineRuns,
+}: RunRouteParts): Router {
   const router = Router();
+
+  router.get('/machines/:id/references', async (req, res) => {
+    res.json(await listReferences(machineRuns, req.params.id));
+  });
 
   router.get('/runs/:id', async (req, res) => {
     res.json(await pages.get(personOf(req), req.params.id));

@@ -3,6 +3,7 @@ import { createAnalysisRepository } from '#server/runs/analysis-repository.ts';
 import { dataFolders } from '#server/runs/data-folders.ts';
 import { createJudgingOf } from '#server/runs/judging-of.ts';
 import { createLogWorker } from '#server/runs/log-worker.ts';
+import { createMachineRuns } from '#server/runs/machine-runs.ts';
 import { createHandRuns } from '#server/runs/make-hand-run.ts';
 import { createNoteRepository } from '#server/runs/note-repository.ts';
 import { createNoteService } from '#server/runs/note-service.ts';
@@ -46,6 +47,7 @@ export function wireRuns(parts: AppParts, { people, shop, audit }: PeopleWiring,
     pages,
     readings,
     folders,
+    machineRuns: createMachineRuns(db, sources),
     handRuns: createHandRuns({ db, worker, folders, judgingOf, now }),
     notes: createNoteService(createNoteRepository(db), runs, now),
     uploads: createUploadService({ worker, sources, runs, audit, onDefect }),

@@ -46,13 +46,13 @@ export type HandRun = {
  * The run that a list of events makes.
  *
  * @param events of one run in any order, each at least once
- * @returns null where it does not begin with its start, or an event in between is missing: not all of it is here
+ * @returns null where its start is not among them
  */
 export function replayRun(events: readonly RunEvent[]): HandRun | null {
   const ordered = inOrder(events);
   const [start] = ordered;
   const last = ordered.at(-1);
-  if (!last || start?.kind !== 'start' || hasHole(ordered)) return null;
+  if (!last || start?.kind !== 'start') return null;
   const taken = new Set(ofKind(ordered, 'undo').map(({ takes }) => takes));
   const stands = ({ id }: RunEvent) => !taken.has(id);
   const corrections = correctionsOf(ordered.filter(stands));
@@ -86,11 +86,6 @@ export function lastToTakeBack(
 
 function isTakeable(event: RunEvent): event is RunEventOf<'reading' | 'mark' | 'correction'> {
   return event.kind === 'reading' || event.kind === 'mark' || event.kind === 'correction';
-}
-
-/** Two tabs without a lock between them can give one number twice; both events stand. */
-function hasHole(ordered: RunEvent[]): boolean {
-  return ordered.some(({ n }, i) => n > (ordered[i - 1]?.n ?? -1) + 1);
 }
 
 /** An event that came twice counts once. */

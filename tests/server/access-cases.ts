@@ -180,6 +180,10 @@ export const CASES: Record<string, Case> = {
     expected: notOther,
     ...just(({ machine }) => `/machines/${machine.id}/runs`),
   },
+  'GET /machines/:id/references': {
+    expected: notOther,
+    ...just(({ machine }) => `/machines/${machine.id}/references`),
+  },
 
   'GET /ratings': { expected: signedIn, ...just(() => '/ratings') },
   'POST /ratings': { expected: desk, ...just(() => '/ratings', THERMOSTAT_155) },

@@ -9,7 +9,7 @@ import type { EndSetup, RunSetup } from '#shared/recorder/run-event.ts';
 import type { RunToJudge } from '#shared/recorder/series-of-run.ts';
 import type { Sources } from './sources.ts';
 
-type Known = Pick<Sources, 'machine' | 'probes' | 'calibrations' | 'session'>;
+type Known = Pick<Sources, 'machine' | 'probes' | 'calibrations' | 'session' | 'references'>;
 
 /** What the guard goes by: the machine's rating for this setting, and the probe in hand. */
 export function guardSetupOf(known: Known, { start }: HandRun): GuardSetup {
@@ -34,8 +34,16 @@ export function analysisInputOf(
     conditions: { ...setup, roomUnit: run.start.unit },
     marks,
     minCycles: known.session.shop.minCycles,
+    reference: referenceFor(known, setup),
   });
   return judgingOfSpan(judging, 0, series.timesS.at(-1) ?? 0);
+}
+
+function referenceFor({ references }: Known, { setting, load, duct }: EndSetup) {
+  const alike = references.find(
+    (each) => each.setting === setting && each.load === load && each.duct === duct,
+  );
+  return alike?.reference ?? null;
 }
 
 function probeUsed({ probes, calibrations }: Known, probeId: RunSetup['probeId'], atMs: number) {

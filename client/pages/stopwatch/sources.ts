@@ -1,3 +1,5 @@
+import type { ReferenceRun } from '#shared/analysis/analysis.ts';
+import type { EndSetup } from '#shared/recorder/run-event.ts';
 import type { StoredCalibration } from '#shared/schemas/calibrations.ts';
 import type { MachinePage } from '#shared/schemas/homes.ts';
 import type { VisitPage } from '#shared/schemas/jobs.ts';
@@ -24,6 +26,12 @@ export type Sources = {
   machine: StopwatchMachine;
   probes: StoredProbe[];
   calibrations: StoredCalibration[];
+  references: MachineReference[];
+};
+
+/** A clean run to go by, for one way of running the machine; the server made it. */
+export type MachineReference = Pick<EndSetup, 'setting' | 'load' | 'duct'> & {
+  reference: ReferenceRun;
 };
 
 const MACHINE = { id: 'string', make: 'string', model: 'string', fuel: 'string' } as const;
@@ -72,6 +80,22 @@ const SHAPES = {
   calibrations: [
     { fields: { id: 'string', probeId: 'string', madeAtMs: 'number', points: ['any'] } },
   ],
+  references: [
+    {
+      fields: {
+        ...{ setting: 'string', load: 'string', duct: 'string' },
+        reference: {
+          fields: {
+            cycles: 'number',
+            onS: 'number',
+            offS: 'number',
+            swingK: 'number',
+            fall: 'any',
+          },
+        },
+      },
+    },
+  ],
 } satisfies Record<string, Shape>;
 
 function checker<T>(isRight: (answer: unknown) => answer is T) {
@@ -99,6 +123,10 @@ export const calibrationsChecker = checker((answer): answer is StoredCalibration
   matches(answer, SHAPES.calibrations),
 );
 
+export const referencesChecker = checker((answer): answer is MachineReference[] =>
+  matches(answer, SHAPES.references),
+);
+
 /** Who is signed in, from the server or as it was last. */
 export function findSession(): Promise<StopwatchSession> {
   return readSession(() => fetchJson(sessionChecker, '/api/session'), sessionChecker.parse);
@@ -107,12 +135,14 @@ export function findSession(): Promise<StopwatchSession> {
 /** The visit, its machine with what that is specified to have, and the probes. */
 export async function findSources(session: StopwatchSession, visitId: string): Promise<Sources> {
   const visit = await fetchJson(visitChecker, `/api/visits/${visitId}`);
-  const [machine, probes, calibrations] = await Promise.all([
-    fetchJson(machineChecker, `/api/machines/${visit.job.machine.id}`),
+  const machineUrl = `/api/machines/${visit.job.machine.id}`;
+  const [machine, probes, calibrations, references] = await Promise.all([
+    fetchJson(machineChecker, machineUrl),
     orNone(fetchJson(probesChecker, '/api/probes')),
     orNone(fetchJson(calibrationsChecker, '/api/calibrations')),
+    orNone(fetchJson(referencesChecker, `${machineUrl}/references`)),
   ]);
-  return { session, visit, machine, probes, calibrations };
+  return { session, visit, machine, probes, calibrations, references };
 }
 
 /** A list that cannot be had must not stop the work: the run then goes without its probe. */
