@@ -16,9 +16,18 @@ const MAKERS: Maker[] = [
   ...LITTLE_HEAT_PLANS,
 ];
 
-/** Every run of a seed, or those whose name holds a word: the same ones each time. */
+/** Every run of a seed, or those whose name holds a word: the same ones each time, whatever plans stand beside them. */
 export function plansOf(seed: number, named = ''): Plan[] {
-  return MAKERS.flatMap((maker, i) =>
-    maker.name.includes(named) ? [fillPlan(maker, createRandom(seed * 1000 + i))] : [],
-  );
+  return MAKERS.flatMap((maker, i) => {
+    if (!maker.name.includes(named)) return [];
+    const alike = MAKERS.slice(0, i).filter(({ name }) => name === maker.name).length;
+    return [fillPlan(maker, createRandom(seed * 65536 + numberOf(maker.name) + alike))];
+  });
+}
+
+/** A name as a number under 65536: its letters folded together. */
+function numberOf(name: string): number {
+  let folded = 0;
+  for (const letter of name) folded = (folded * 31 + letter.charCodeAt(0)) % 65521;
+  return folded;
 }

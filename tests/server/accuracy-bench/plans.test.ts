@@ -31,7 +31,6 @@ test('the truth of a plain plan is what the plan is there to give', () => {
     'sound',
     'opens high',
     'opens low',
-    'closes high',
     'relay sticks',
     'runs away from cold',
     'grounded coil hangs',

@@ -13,7 +13,7 @@ export const LIMIT_PLANS: Maker[] = [
     name: 'crushed duct, quick bursts',
     meant: 'limit-cycling',
     make: (random) => ({
-      ...bursts(random, { fromS: 7, toS: 16, leastSwingK: 3.2, mostSwingK: 9 }, [52, 80], [3, 6]),
+      ...bursts(random, { fromS: 7, toS: 16, leastSwingK: 3.2, mostSwingK: 8 }, [52, 80], [3, 6]),
       mostSpacingS: 2,
     }),
   },
@@ -23,7 +23,7 @@ export const LIMIT_PLANS: Maker[] = [
     make: (random) => ({
       ...bursts(
         random,
-        { fromS: 14, toS: 40, leastSwingK: 3.2, mostSwingK: 9.5 },
+        { fromS: 14, toS: 40, leastSwingK: 3.2, mostSwingK: 8.2 },
         [45, 76],
         [5, 10],
       ),
