@@ -9,6 +9,7 @@ import { PageHeading } from '../../components/page-heading.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
 import { dayOf } from '../../format/when.ts';
+import { RunningRun } from '../../records/running-run.tsx';
 import { useSession } from '../frame/session-context.ts';
 import { dayHeading, stepDay } from './day-step.ts';
 import { RoundStop } from './round-stop.tsx';
@@ -69,6 +70,9 @@ function Day({ rounds, nowMs }: { rounds: Rounds; nowMs: number }) {
     <SitePage top={<DayHeading>{dayHeading(day, today)}</DayHeading>} deck={<PhoneTabs />}>
       <p className="lab px-4 pt-3">{state.filter(Boolean).join(' · ')}</p>
       <DaySteps day={day} today={today} />
+      <div className="px-4">
+        <RunningRun />
+      </div>
       {visits.length === 0 && <EmptyDay isOwn={isOwn} isToday={day === today} />}
       {isOwn ? (
         <Stops visits={visits} zone={shop.zone} nextId={next?.id} heading="h2" />

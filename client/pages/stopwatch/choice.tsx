@@ -16,9 +16,9 @@ export function Choice<Value extends string>(props: ChoiceProps<Value>) {
       className={`relative bg-strip px-3 pt-2 pb-3 ${fault ? 'pl-5 before:absolute before:inset-y-0 before:left-0 before:w-1.5 before:bg-stop' : ''}`}
     >
       <legend className="lab float-left mb-1.5 w-full">{label}</legend>
-      <div className="clear-both flex flex-wrap gap-2">
+      <div className="clear-both flex flex-wrap gap-1.5">
         {options.map((option) => (
-          <label key={option.value} className="relative min-w-[56px] flex-1">
+          <label key={option.value} className="relative min-w-[47px] flex-1">
             <input
               type="radio"
               name={name}

@@ -1,5 +1,11 @@
-import { figuresOf, wheelsOf, type Typing, type Wheel } from '#shared/recorder/keypad.ts';
-import { emptyTyping } from '#shared/recorder/keypad.ts';
+import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
+import {
+  emptyTyping,
+  figuresOf,
+  wheelsOf,
+  type Typing,
+  type Wheel,
+} from '#shared/recorder/keypad.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
 import { expectedAt, type Entry } from './use-entry.ts';
 import { formatAt, formatElapsed, formatTyped } from './format-elapsed.ts';
@@ -11,15 +17,19 @@ type Situation = {
   entry: Entry;
   run: HandRun;
   nowS: number;
-  /** The guard wants something else than a reading. */
-  says: 'quiet' | 'watch' | 'cut-heat' | 'unplug';
+  view: Pick<GuardView, 'says' | 'unconfirmed'>;
 };
+
+/** A kept value stands in the wheels for so long. */
+const KEPT_SHOWN_S = 3;
 
 export function counterWords(situation: Situation): CounterWords {
   const { entry } = situation;
   if (entry.free) return freeWords(entry.free);
   if (entry.typing) return typingWords(entry.typing, situation);
-  if (entry.kept) return keptWords(entry.kept, situation);
+  const { kept } = entry;
+  const isCalm = situation.view.says === 'quiet' || situation.view.says === 'watch';
+  if (kept && isCalm && situation.nowS - kept.atS < KEPT_SHOWN_S) return keptWords(kept, situation);
   return waitingWords(situation);
 }
 
@@ -70,7 +80,7 @@ function keptWords({ temp, atS }: { temp: number; atS: number }, { run }: Situat
   return { wheels, printed: `Kept, ${formatAt(atS)}`, figure: '', todo: 'Undo takes it back' };
 }
 
-function waitingWords({ run, nowS, says }: Situation): CounterWords {
+function waitingWords({ run, nowS, view }: Situation): CounterWords {
   const expected = expectedAt(run, nowS);
   const typing = emptyTyping(expected);
   const wheels = wheelsOf(typing, expected, run.start);
@@ -79,6 +89,10 @@ function waitingWords({ run, nowS, says }: Situation): CounterWords {
   const lastAt = last ? `Last, ${formatAt(last.atS)}:` : 'No reading yet';
   const figures = { last: 'the last two figures', all: 'all three figures' };
   const todo = `Type ${typing.asks === 'last' ? figures.last : figures.all}`;
+  const { says, unconfirmed } = view;
+  if (unconfirmed && last) {
+    return { wheels, printed: `${figure} is far off.`, figure: '', todo: 'Read again now' };
+  }
   if (says === 'watch')
     return { wheels, printed: lastAt, figure, todo: 'Hand on the heat selector' };
   if (says === 'quiet') return { wheels, printed: lastAt, figure, todo };

@@ -1,6 +1,7 @@
 import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
 import type { DisplayUnit } from '#shared/units.ts';
 import { formatRated, formatSpan, formatStep } from '#shared/wording/format.ts';
+import { wordGuard } from '#shared/wording/word-guard.ts';
 import { NoteSign, WatchSign } from '../../components/signs.tsx';
 import { ShrinkBar } from './shrink-bar.tsx';
 
@@ -9,6 +10,7 @@ export type GuardFacts = {
   nowS: number;
   unit: DisplayUnit;
   highLimitC: number;
+  ceilingC: number;
   /** The last reading; null before the first. */
   lastC: number | null;
   isGas: boolean;
@@ -53,10 +55,11 @@ export function GuardPanel(facts: GuardFacts) {
 }
 
 /** The forecast in words, as LOOK has it. */
-export function watchSentence({ view, nowS, unit, highLimitC }: GuardFacts): string {
+export function watchSentence(facts: GuardFacts): string {
+  const { view, nowS, unit, highLimitC } = facts;
   const crossing = view.forecast?.highLimit;
   const limit = formatRated(highLimitC, unit);
-  if (!crossing || crossing.likelyS === null) return 'Above its band, and no cut-out yet.';
+  if (!crossing || crossing.likelyS === null) return wordsOfGuard(facts).why ?? '';
   const leftS = Math.max(0, crossing.likelyS - nowS);
   const reachS = ((crossing.latestS ?? crossing.likelyS) - crossing.earliestS) / 2;
   return `At this rate it reaches ${limit} in ${formatSpan(leftS)}, give or take ${formatSpan(Math.max(1, reachS))}.`;
@@ -65,4 +68,10 @@ export function watchSentence({ view, nowS, unit, highLimitC }: GuardFacts): str
 /** `59 °F`: whole degrees, this is read from the corner of an eye. */
 function roundStep(stepK: number, unit: DisplayUnit): string {
   return formatStep(stepK, unit).replace(/\.[0-9]/, '');
+}
+
+/** The guard's reasons and doubts in words. */
+export function wordsOfGuard({ view, nowS, unit, highLimitC, ceilingC, isGas }: GuardFacts) {
+  const fuel = isGas ? 'gas' : 'electric';
+  return wordGuard(view, { unit, fuel, rating: { ceilingC, highLimitC }, nowS });
 }

@@ -1,6 +1,6 @@
 import type { DisplayUnit } from '#shared/units.ts';
 import { formatRated, formatSpan } from '#shared/wording/format.ts';
-import type { GuardFacts } from './guard-panel.tsx';
+import { wordsOfGuard, type GuardFacts } from './guard-panel.tsx';
 
 /** The octagon that takes the place of clock and chart: three words, the time left, one thing to do. */
 export function HaltPanel(facts: GuardFacts) {
@@ -26,7 +26,8 @@ export function HaltPanel(facts: GuardFacts) {
 }
 
 /** What stands on the octagon, and is read out. */
-export function haltWords({ view, isGas, isHeatOff }: GuardFacts): { head: string; todo: string } {
+export function haltWords(facts: GuardFacts): { head: string; todo: string } {
+  const { view, isGas, isHeatOff } = facts;
   if (view.says === 'unplug') {
     return {
       head: isGas ? 'Shut the gas' : 'Pull the plug',
@@ -38,7 +39,7 @@ export function haltWords({ view, isGas, isHeatOff }: GuardFacts): { head: strin
   return {
     head: 'Cut the heat',
     todo: isHeatOff
-      ? 'Heat off is marked. Keep reading until it falls.'
+      ? `${wordsOfGuard(facts).why ?? 'Heat off is marked.'} Keep reading.`
       : 'Turn the selector to no-heat and let the drum turn. Then press Heat off.',
   };
 }

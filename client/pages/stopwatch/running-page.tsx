@@ -1,4 +1,5 @@
 import { useMemo, useState, useSyncExternalStore } from 'react';
+import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import type { MarkKind } from '#shared/analysis/series.ts';
 import type { EndSetup } from '#shared/recorder/run-event.ts';
 import { toCelsius } from '#shared/units.ts';
@@ -99,7 +100,7 @@ export function RunningPage({
     },
   });
 
-  const words = counterWords({ entry: entry.entry, run, nowS, says: view.says });
+  const words = counterWords({ entry: entry.entry, run, nowS, view });
   const last = run.readings.at(-1);
   const { free } = entry.entry;
   return (
@@ -216,7 +217,8 @@ function guardFacts(recorder: Recorder, { machine }: Sources, nowS: number): Gua
     view: recorder.guardAt(nowS),
     nowS,
     unit: run.start.unit,
-    highLimitC: guard.state.setup.rating?.highLimitC ?? toCelsius(196, 'F'),
+    highLimitC: (guard.state.setup.rating ?? DEFAULT_RATING).highLimitC,
+    ceilingC: (guard.state.setup.rating ?? DEFAULT_RATING).ceilingC,
     lastC: last ? toCelsius(last.temp, run.start.unit) : null,
     isGas: machine.fuel === 'gas',
     isHeatOff: guard.state.off !== null,

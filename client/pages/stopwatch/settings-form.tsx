@@ -12,8 +12,8 @@ const RHYTHMS = [
   ...RHYTHMS_S.map((rhythm) => ({ value: String(rhythm), words: `${rhythm}\u00a0s` })),
 ];
 const HANDS = [
-  { value: 'right', words: 'Right' },
-  { value: 'left', words: 'Left' },
+  { value: 'right', words: 'Right hand' },
+  { value: 'left', words: 'Left hand' },
 ] as const;
 
 const SWITCHES = [
@@ -38,7 +38,7 @@ export function SettingsForm({ preferences, onPrefer }: SettingsFormProps) {
         }
       />
       <Choice
-        label="Keys at the side of the"
+        label="Keys laid out for the"
         name="hand"
         value={preferences.hand}
         options={HANDS}

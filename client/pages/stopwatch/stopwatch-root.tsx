@@ -6,7 +6,7 @@ import { newId } from '../../device/new-id.ts';
 import { startDevice } from '../../device/start-device.ts';
 import { keepThing, onAnswers, serverClock, thisDevice } from '../../device/this-device.ts';
 import { guardSetupOf } from './judge-run.ts';
-import { findRunning, keepRunEvent, listKeptRuns } from './kept-runs.ts';
+import { findRunning, keepRunEvent, listKeptRuns } from '../../device/kept-runs.ts';
 import { loadPreferences, keepPreferences } from './preferences.ts';
 import { beginRun, openRecorder, type Recorder } from './recorder.ts';
 import { RunningPage } from './running-page.tsx';
@@ -167,6 +167,7 @@ function OfRun({ recorder, sources, preferences, onPrefer, onAnother }: OfRunPro
   const isOver = run.end !== null || run.isThrownAway;
   useEffect(() => (isOver ? undefined : holdUpdates()), [isOver]);
   useEffect(() => (isOver ? undefined : checkClock(recorder)), [isOver, recorder]);
+  useEffect(fetchWhatComesLater, []);
 
   if (run.isThrownAway) {
     return (
@@ -193,6 +194,13 @@ function OfRun({ recorder, sources, preferences, onPrefer, onAnother }: OfRunPro
       onPrefer={onPrefer}
     />
   );
+}
+
+/** While the run goes on, so that its end needs no network. */
+function fetchWhatComesLater(): void {
+  const quietly = () => {};
+  import('./outcome-page.tsx').catch(quietly);
+  import('#shared/analysis/analyse-run.ts').catch(quietly);
 }
 
 const CHECK_EVERY_MS = 60_000;

@@ -7,6 +7,7 @@ import { KeyLink } from '../../components/key-link.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { OUTCOME_WORDS } from '../../format/job-words.ts';
 import { timeWords } from '../../format/when.ts';
+import { RunningRun } from '../../records/running-run.tsx';
 
 type RunsSectionProps = { visit: VisitPage; zone: string };
 
@@ -34,14 +35,22 @@ export function RunsSection({ visit, zone }: RunsSectionProps) {
         </ul>
       )}
       {visit.mayRecord ? (
-        <KeyLink
-          to={`/visits/${visit.id}/upload`}
-          face={runs.length === 0 ? 'main' : 'plain'}
-          size="site"
-          className="mt-3.5 w-full"
-        >
-          Upload a probe file
-        </KeyLink>
+        <>
+          <RunningRun visitId={visit.id} />
+          <div className="mt-3.5 grid gap-2.5">
+            <KeyLink
+              to={`/visits/${visit.id}/stopwatch`}
+              reloadDocument
+              face={runs.length === 0 ? 'main' : 'plain'}
+              size="site"
+            >
+              Take a run by stopwatch
+            </KeyLink>
+            <KeyLink to={`/visits/${visit.id}/upload`} size="site">
+              Upload a probe file
+            </KeyLink>
+          </div>
+        </>
       ) : (
         <p className="pt-3 text-small text-print">
           Runs are recorded by {visit.technician.name}, whose visit this is.

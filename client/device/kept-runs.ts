@@ -1,6 +1,6 @@
 import { isRunEvent, type RunEvent } from '#shared/recorder/run-event.ts';
 import { replayRun } from '#shared/recorder/replay-run.ts';
-import { keepThing, thisDevice } from '../../device/this-device.ts';
+import { keepThing, thisDevice } from './this-device.ts';
 
 const CHAIN = 'run:';
 /** The character after the colon: where the chains of runs end. */
