@@ -1,81 +1,83 @@
-import { createRandom, type Random } from '#server/commands/heat-model/random.ts';
-import { simulateRun } from '#server/commands/heat-model/simulate-run.ts';
+import type { Machine } from '#server/commands/heat-model/machine.ts';
+import type { Random } from '#server/commands/heat-model/random.ts';
 import { trueTurningPoints } from '#server/commands/heat-model/true-turning-points.ts';
-import { randomMachine } from '../machines.ts';
+import { randomMachine, unattended } from '../machines.ts';
 import type { Maker, Plan, Told } from '../plan.ts';
-
-/** Half-cycles, s, and swings, K, that a kind of bursts must show at the probe. */
-type Wanted = { fromS: number; toS: number; leastSwingK: number; mostSwingK: number };
 
 /** A limit on the heater housing that cuts again and again for want of air. */
 export const LIMIT_PLANS: Maker[] = [
   {
     name: 'crushed duct, quick bursts',
     meant: 'limit-cycling',
-    make: (random) => ({
-      ...bursts(random, { fromS: 7, toS: 16, leastSwingK: 3.2, mostSwingK: 8 }, [52, 80], [3, 6]),
-      mostSpacingS: 2,
-    }),
+    make: (random) => {
+      const quick = { mixingS: 1.2, heaterJPerK: random.between(120, 250), probeLagS: 2 };
+      return { ...bursts(random, [3.4, 6], [2, 5], quick), mostSpacingS: 2 };
+    },
   },
   {
     name: 'crushed duct',
     meant: 'limit-cycling',
-    make: (random) => ({
-      ...bursts(
-        random,
-        { fromS: 14, toS: 40, leastSwingK: 3.2, mostSwingK: 8.2 },
-        [45, 76],
-        [5, 10],
-      ),
-      mostSpacingS: 5,
-    }),
+    make: (random) => ({ ...bursts(random, [5, 8.2], [5, 10]), mostSpacingS: 5 }),
   },
   {
+    // The rated differential is 13.9 K: from well under 0.7 of it to over.
     name: 'crushed duct, wide swings',
     meant: 'limit-cycling',
-    make: (random) => ({
-      ...bursts(random, { fromS: 14, toS: 80, leastSwingK: 8, mostSwingK: 12 }, [38, 60], [8, 14]),
-      mostSpacingS: 5,
-    }),
+    make: (random) => ({ ...bursts(random, [8.2, 11.5], [8, 14]), mostSpacingS: 5 }),
   },
 ];
 
 type Span = [low: number, high: number];
 
-function bursts(random: Random, wanted: Wanted, closesC: Span, lagS: Span): Told {
+/** Swings under this are no turns here, and cut-outs over that are the thermostat's, K and °C. */
+const SEEN_K = 2.6;
+const UNDER_C = 63;
+
+function bursts(random: Random, swingK: Span, lagS: Span, machine: Partial<Machine> = {}): Told {
   return {
-    machine: { ...randomMachine(random), drumWPerK: random.between(65, 100), mixingS: 2.5 },
-    faults: { airflow: [{ fromS: 0, share: random.between(0.22, 0.3) }] },
+    machine: {
+      ...randomMachine(random),
+      drumWPerK: random.between(65, 100),
+      mixingS: 2.5,
+      ...machine,
+    },
+    faults: { airflow: [{ fromS: 0, share: random.between(0.22, 0.28) }] },
     watch: { forS: random.between(500, 800) },
-    finish: (plan) => tryLimits(plan, wanted, () => drawLimit(random, closesC, lagS)),
+    finish: (plan) => setLimit(plan, random.between(...swingK), random.between(...lagS)),
   };
 }
 
-function drawLimit(random: Random, closesC: Span, lagS: Span): Plan['machine']['boxLimit'] {
-  return {
-    opensC: random.between(98, 112),
-    closesC: random.between(...closesC),
-    lagS: random.between(...lagS),
-  };
-}
-
-/** Tried anew until the bursts show at the outlet as wanted, and well under the thermostat. */
-function tryLimits(plan: Plan, wanted: Wanted, draw: () => Plan['machine']['boxLimit']): Plan {
+/** The limit that makes the outlet swing so far, opening no higher than keeps the outlet under the thermostat. */
+function setLimit(plan: Plan, swingK: number, lagS: number): Plan {
   let made = plan;
-  for (let attempt = 0; attempt < 60; attempt++) {
-    made = { ...plan, machine: { ...plan.machine, boxLimit: draw() } };
-    if (bursting(made, wanted)) return made;
+  for (let opensC = 108; opensC >= 84; opensC -= 6) {
+    made = withSwing(plan, swingK, { opensC, lagS });
+    if (burstsOf(made).highestC < UNDER_C) return made;
   }
   return made;
 }
 
-function bursting(plan: Plan, { fromS, toS, leastSwingK, mostSwingK }: Wanted): boolean {
-  const run = simulateRun(plan.machine, plan.faults, plan.watch, createRandom(1));
-  const turns = trueTurningPoints(run, 2.6);
-  const cutOuts = turns.filter(({ kind }) => kind === 'cut-out').map(({ tempC }) => tempC);
-  const [first, last] = turns.slice(-2);
-  if (!first || !last || cutOuts.length < 4 || Math.max(...cutOuts) > 63.5) return false;
-  const swingK = Math.abs(last.tempC - first.tempC);
-  const halfS = (last.timeS - turns.at(-3)!.timeS) / 2;
-  return halfS >= fromS && halfS <= toS && swingK >= leastSwingK && swingK <= mostSwingK;
+/** How far under its opening the limit closes, found by halving: the further, the wider the swings. */
+function withSwing(plan: Plan, swingK: number, limit: { opensC: number; lagS: number }): Plan {
+  let lowK = 4;
+  let highK = 60;
+  let made = plan;
+  for (let round = 0; round < 7; round++) {
+    const lessK = (lowK + highK) / 2;
+    const boxLimit = { ...limit, closesC: limit.opensC - lessK };
+    made = { ...plan, machine: { ...plan.machine, boxLimit } };
+    if (burstsOf(made).swingK > swingK) highK = lessK;
+    else lowK = lessK;
+  }
+  return made;
+}
+
+/** The last swing and the highest turn of a plan's run; no swing at all counts as 0. */
+function burstsOf({ machine, faults, watch }: Plan): { swingK: number; highestC: number } {
+  const turns = trueTurningPoints(unattended(machine, faults, watch.forS), SEEN_K);
+  const [before, last] = turns.slice(-2);
+  return {
+    swingK: before && last ? Math.abs(last.tempC - before.tempC) : 0,
+    highestC: Math.max(-Infinity, ...turns.map(({ tempC }) => tempC)),
+  };
 }
