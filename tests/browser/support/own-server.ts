@@ -1,0 +1,52 @@
+import { spawn, type ChildProcess } from 'node:child_process';
+import { once } from 'node:events';
+import { mkdtemp, rm } from 'node:fs/promises';
+import { createServer } from 'node:net';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+
+/** A built server of the test's own, with the demo shop, that may be killed and started again at the same address. */
+export async function ownServer() {
+  const folder = await mkdtemp(join(tmpdir(), 'fusekeeper-own-'));
+  const port = await freePort();
+  const url = `http://127.0.0.1:${port}`;
+  let child: ChildProcess | undefined;
+
+  async function start(): Promise<void> {
+    const started = spawn(process.execPath, ['dist/server/index.js'], {
+      env: { PATH: process.env['PATH'], DATA_DIR: folder, PORT: String(port), LOG_LEVEL: 'warn' },
+      stdio: ['ignore', 'pipe', 'inherit'],
+    });
+    child = started;
+    let said = '';
+    started.stdout.on('data', (chunk: Buffer) => (said += chunk.toString()));
+    while (!said.includes('Fusekeeper is at')) await once(started.stdout, 'data');
+  }
+
+  async function kill(): Promise<void> {
+    if (!child || child.exitCode !== null || child.signalCode !== null) return;
+    child.kill('SIGKILL');
+    await once(child, 'exit');
+  }
+
+  return {
+    url,
+    start,
+    /** As a power cut would: nothing is ended in good order. */
+    kill,
+    async remove(): Promise<void> {
+      await kill();
+      await rm(folder, { recursive: true, force: true });
+    },
+  };
+}
+
+async function freePort(): Promise<number> {
+  const server = createServer().listen(0, '127.0.0.1');
+  await once(server, 'listening');
+  const address = server.address();
+  server.close();
+  await once(server, 'close');
+  if (address === null || typeof address === 'string') throw new Error('no free port');
+  return address.port;
+}
