@@ -1,7 +1,7 @@
 import type { Noise } from '../estimate-noise.ts';
 import type { BinnedView, Extreme } from '../run-facts.ts';
 import { median } from '../statistics/quantile.ts';
-import { locateTurns, type LocatedTurn } from './locate-turns.ts';
+import { LEAST_AT_ONCE, locateTurns, type LocatedTurn } from './locate-turns.ts';
 import { LEFT_OUT } from './plan-windows.ts';
 
 /** A last leg that ends within this share of its swing of where the like turns lie may have turned. */
@@ -41,10 +41,12 @@ export function withLastTurn(
 
   const endS = view.timesS[view.timesS.length - 1]!;
   const turnS = Math.min(last.timeS, endS - 0.25 * view.widthS);
-  const turns = [...extremes.slice(1, -1), { ...last, timeS: turnS }];
+  // Those before teach no more than a window holds.
+  const from = Math.max(1, extremes.length - LEAST_AT_ONCE);
+  const turns = [...extremes.slice(from, -1), { ...last, timeS: turnS }];
   const task = {
     turns,
-    startS: extremes[0]!.timeS,
+    startS: extremes[from - 1]!.timeS,
     // What is left out at a record's end is made up for: here the last readings matter.
     endS: turnS + (endS + 1e-6 - turnS) / (1 - LEFT_OUT),
   };

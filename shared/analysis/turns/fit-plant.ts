@@ -33,7 +33,7 @@ const MOST_ROUNDS = 30;
 /** Rounds in which the levels and starts alone are found, before times and time constants move. */
 const LINEAR_ROUNDS = 2;
 /** A round that gains less than this much of twice the log posterior is the last. */
-const ENOUGH_GAIN = 0.05;
+const ENOUGH_GAIN = 0.1;
 /** No shared parameter moves further at once; the whole step is shortened, so that it keeps its direction. */
 const MOST_STEP = 1;
 const SHORTEN = 0.4;

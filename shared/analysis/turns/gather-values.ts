@@ -13,11 +13,11 @@ export type WindowValues = {
 };
 
 /** Values a leg keeps: of what lies near its turns, and of the rest; more are averaged. */
-const NEAR_VALUES = 80;
-const FAR_VALUES = 30;
+const NEAR_VALUES = 50;
+const FAR_VALUES = 16;
 export const VALUES_PER_LEG = NEAR_VALUES + FAR_VALUES;
 /** Near a turn is within this share of a usual leg: there an average would flatten the corner. */
-const NEAR_SHARE = 0.2;
+const NEAR_SHARE = 0.12;
 
 /**
  * The window's values, averaged where there are more than its legs need: far from turns first, where legs are straight.

@@ -40,7 +40,7 @@ const MANY_TURNS = 60;
 const FEW_READINGS = 10;
 const MOST_SPARSE = 240;
 /** Turns fitted at once: at least so many, and more where readings are so few that it costs no more than this. */
-const LEAST_AT_ONCE = 12;
+export const LEAST_AT_ONCE = 12;
 const MOST_WORK = 9e5;
 
 /**

@@ -68,7 +68,7 @@ const LEAST_SPARE = 10;
 const FEW_VALUES = 15;
 const OTHER_LAGS = [0.06, 0.2];
 /** Residuals that widen errors by more than this show that the stores were mistaken. */
-const MISFIT = 1.1;
+const MISFIT = 1.3;
 /** A fit this much less likely than the best, in twice the log, is left out. */
 const MOST_BEHIND = 12;
 
@@ -106,10 +106,7 @@ export function fitTurns(
       fits.push(fitFrom({ ...start, stores: NO_SHORT_CUT, lags: ONE_LAG }));
     }
   } else if (first && widening(first, values.timesS) > MISFIT) {
-    for (const stores of [ONE_STORE, TWO_STORES]) {
-      fits.push(fitFrom({ ...from, stores, lags: ONE_LAG }));
-    }
-    fits.push(fitFrom({ ...from, stores: TWO_STORES, lags: THREE_LAGS }));
+    fits.push(fitFrom({ ...from, stores: TWO_STORES, lags: ONE_LAG }));
   }
   return weighed(fits.filter((fit) => fit !== null));
 }

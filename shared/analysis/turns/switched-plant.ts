@@ -141,7 +141,7 @@ function legOf({ fromsS }: SolvedPlant, timeS: number, from: number): number {
   return leg;
 }
 
-const STEP = 1e-4;
+const STEP = 1e-5;
 /** Less than this share of a start is taken as none. */
 const FORGOTTEN = 1e-7;
 
@@ -158,17 +158,15 @@ export function plantSlopes(
   const slopes = new Float64Array(timesS.length * p);
   const solved = solvePlant(parameters, shape);
   fillOwnSlopes(solved, timesS, slopes, p);
+  const base = new Float64Array(timesS.length);
   const above = new Float64Array(timesS.length);
-  const below = new Float64Array(timesS.length);
+  plantTemps(solved, timesS, base);
   const pushed = Float64Array.from(parameters);
   for (let j = 0; j < SHARED; j++) {
     pushed[j] = parameters[j]! + STEP;
     plantTemps(solvePlant(pushed, shape), timesS, above);
-    pushed[j] = parameters[j]! - STEP;
-    plantTemps(solvePlant(pushed, shape), timesS, below);
     pushed[j] = parameters[j]!;
-    for (let i = 0; i < timesS.length; i++)
-      slopes[i * p + j] = (above[i]! - below[i]!) / (2 * STEP);
+    for (let i = 0; i < timesS.length; i++) slopes[i * p + j] = (above[i]! - base[i]!) / STEP;
   }
   return slopes;
 }

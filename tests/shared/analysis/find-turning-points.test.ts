@@ -39,14 +39,15 @@ function medianOf(values: number[]): number {
 }
 
 describe('turning points against turns known in closed form', () => {
+  // One lag alone is the furthest from the three that are believed in, which shows in the switch instants (last column, s).
   test.each<[string, Partial<BuildOptions>, number, number]>([
     ['a quick probe', { spacingS: 0.2, noiseK: 0.1 }, 0.05, 1],
     ['a probe at 1 s', { spacingS: 1, noiseK: 0.1 }, 0.05, 1],
     ['a probe at 2 s', { spacingS: 2, noiseK: 0.15 }, 0.1, 1.2],
-    ['a probe at 5 s', { spacingS: 5, noiseK: 0.15 }, 0.15, 2],
-    ['a coarse scale', { spacingS: 1, noiseK: 0.1, roundingK: 1 / 1.8 }, 0.12, 1.5],
+    ['a probe at 5 s', { spacingS: 5, noiseK: 0.15 }, 0.15, 2.6],
+    ['a coarse scale', { spacingS: 1, noiseK: 0.1, roundingK: 1 / 1.8 }, 0.12, 1.6],
     ['a noisy probe', { spacingS: 1, noiseK: 0.85 }, 0.3, 2.5],
-    ['a stopwatch', { spacingS: 15, noiseK: 0.2, roundingK: 0.5 / 1.8 }, 0.35, 4],
+    ['a stopwatch', { spacingS: 15, noiseK: 0.2, roundingK: 0.5 / 1.8 }, 0.35, 5],
   ])('%s finds all of them, near their temperatures', (_, options, mostK, mostS) => {
     for (const seed of [3, 4]) {
       const { series, turns } = buildThermostatRun({ ...options, seed });
