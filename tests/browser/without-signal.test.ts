@@ -32,6 +32,7 @@ test('a visit is worked on with the server dead, and all of it is sent once when
     await page.reload();
     await expect(page.getByText(/^Not connected, as of \d/)).toBeVisible();
     await page.getByRole('link', { name: 'Rosalind Peake', exact: true }).click();
+    await expect(page.getByText('not ticked yet')).toBeVisible();
     for (const caution of await page.getByRole('checkbox').all()) await caution.click();
     await expect(page.getByText(/^ticked .*, not sent yet$/)).toBeVisible();
     await page.getByRole('button', { name: /^(Write a note|Change the notes)$/ }).click();
@@ -74,6 +75,7 @@ test('signing out is stopped while something is on the phone only', async ({ pag
     await untilLaidBy(page);
     await context.setOffline(true);
     await page.getByRole('link', { name: 'Rosalind Peake', exact: true }).click();
+    await expect(page.getByText('not ticked yet')).toBeVisible();
     for (const caution of await page.getByRole('checkbox').all()) await caution.click();
     await page.getByRole('link', { name: '1 not sent yet' }).click();
     await page.getByRole('link', { name: 'More' }).click();
