@@ -1,20 +1,14 @@
 import { QueryClientProvider } from '@tanstack/react-query';
 import { createBrowserRouter, RouterProvider } from 'react-router-dom';
-import { createQueryClient } from './api/query-client.ts';
-import { joinQueries } from './device/join-queries.ts';
-import { askAgain } from './device/page-age.ts';
-import { startDevice } from './device/start-device.ts';
+import { applicationQueries } from './api/application-queries.ts';
 import { routes } from './routes.tsx';
 
-const queryClient = createQueryClient();
-startDevice((url) => askAgain(queryClient, [url]));
-joinQueries(queryClient);
 const router = createBrowserRouter(routes);
 
 /** Everything behind the sign-in, and the sign-in itself. */
 export function Application() {
   return (
-    <QueryClientProvider client={queryClient}>
+    <QueryClientProvider client={applicationQueries}>
       <RouterProvider router={router} />
     </QueryClientProvider>
   );

@@ -3,6 +3,7 @@ import { Navigate, Outlet, useLocation, useMatches } from 'react-router-dom';
 import type { Session } from '#shared/schemas/people.ts';
 import { isSignedOut } from '../../api/query-client.ts';
 import { sessionQuery } from '../../api/session.ts';
+import '../../device/start-with-queries.ts';
 import { DeskHead, PhoneTabs, SkipLink } from '../../components/frame.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
 import { DeviceLine } from './device-line.tsx';

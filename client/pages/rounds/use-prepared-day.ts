@@ -1,23 +1,10 @@
-import { useQueryClient, type QueryClient } from '@tanstack/react-query';
+import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useSyncExternalStore } from 'react';
 import type { Rounds } from '#shared/schemas/jobs.ts';
-import { jobQuery } from '../../api/jobs.ts';
-import { machineQuery, machineRunsQuery } from '../../api/machines.ts';
-import { calibrationsQuery } from '../../api/calibrations.ts';
-import { probesQuery } from '../../api/probes.ts';
-import { ratingsQuery } from '../../api/ratings.ts';
-import { runQuery, traceQuery } from '../../api/runs.ts';
-import { visitQuery } from '../../api/visits.ts';
 import { asOf } from '../../device/as-of.ts';
 
-/** What was asked for within ten minutes is not asked for again. */
-const QUIET = { staleTime: 10 * 60_000, retry: false };
-/** Runs of a machine that are fetched whole; all of them come as cards. */
-const WHOLE_RUNS = 2;
-
 /**
- * Lays a person's day by for places without a signal: visits, machines, their runs, ratings and probes, one after the
- * other behind what the page itself needs. `visits` null: not somebody's own day.
+ * Lays a person's day by for places without a signal. `visits` null: not somebody's own day.
  */
 export function usePreparedDay(visits: Rounds['visits'] | null): void {
   const queryClient = useQueryClient();
@@ -25,31 +12,10 @@ export function usePreparedDay(visits: Rounds['visits'] | null): void {
   useEffect(() => {
     if (!visits || isAway) return;
     const stop = new AbortController();
-    void prepare(queryClient, visits, stop.signal);
+    // Behind what the page itself needs, and in a chunk of its own.
+    void import('./prepare-day.ts').then(({ prepareDay }) =>
+      prepareDay(queryClient, visits, stop.signal),
+    );
     return () => stop.abort();
   }, [queryClient, visits, isAway]);
-}
-
-async function prepare(queryClient: QueryClient, visits: Rounds['visits'], stop: AbortSignal) {
-  const common = [
-    () => queryClient.prefetchQuery({ ...ratingsQuery(), ...QUIET }),
-    () => queryClient.prefetchQuery({ ...probesQuery(), ...QUIET }),
-    () => queryClient.prefetchQuery({ ...calibrationsQuery(), ...QUIET }),
-  ];
-  for (const lay of [...common, ...visits.map((visit) => () => prepareVisit(queryClient, visit))]) {
-    if (!stop.aborted) await lay();
-  }
-}
-
-async function prepareVisit(queryClient: QueryClient, { id, job }: Rounds['visits'][number]) {
-  const machineId = job.machine.id;
-  await queryClient.prefetchQuery({ ...visitQuery(id), ...QUIET });
-  await queryClient.prefetchQuery({ ...machineQuery(machineId), ...QUIET });
-  await queryClient.prefetchQuery({ ...machineRunsQuery(machineId), ...QUIET });
-  if (job.callsBack) await queryClient.prefetchQuery({ ...jobQuery(job.callsBack.id), ...QUIET });
-  const runs = queryClient.getQueryData(machineRunsQuery(machineId).queryKey) ?? [];
-  for (const run of runs.slice(0, WHOLE_RUNS)) {
-    await queryClient.prefetchQuery({ ...runQuery(run.id), ...QUIET });
-    await queryClient.prefetchQuery({ ...traceQuery(run.id), ...QUIET });
-  }
 }

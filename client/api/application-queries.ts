@@ -1,0 +1,4 @@
+import { createQueryClient } from './query-client.ts';
+
+/** The one of everything behind the sign-in. */
+export const applicationQueries = createQueryClient();
