@@ -91,11 +91,12 @@ const APART_TIMES = 1.3;
 const HIDDEN_CYCLE_FALLS = 1.5;
 
 /**
- * A fall between like turns in a coarse record: slow where every such fall from it on is, and none before it was. What
+ * A fall between like turns in a coarse record: slow where every such fall near it is from it on, and none before. What
  * takes so much longer that a whole cycle may hide between its readings is left alone.
  */
 function slowFromHere(leg: RunLeg, falls: RunLeg[]): Compared | null {
-  const like = falls.filter((other) => areWholeAlike(leg, other) && isAlike(leg, other));
+  const near = [leg, ...nearestLegs(falls, leg)];
+  const like = near.filter((other) => areWholeAlike(leg, other) && isAlike(leg, other));
   const beforeS = like.filter(({ from }) => from.timeS < leg.from.timeS).map(lengthOf);
   const sinceS = like.filter(({ from }) => from.timeS >= leg.from.timeS).map(lengthOf);
   if (beforeS.length < LEAST_EACH || sinceS.length < LEAST_EACH) return null;
