@@ -7,6 +7,8 @@ import { bandOf } from './judge-point.ts';
 const OFF_MARKS: MarkKind[] = ['heat-off', 'stopped', 'door'];
 /** A mark is tapped a little after the fact, s. */
 const TAPPED_LATE_S = 3;
+/** A cut-out shows at the probe within this of its click; heat turned off later than that made the turn itself, s. */
+const CLICK_TURNS_S = 20;
 /** A last peak this far off the only other cut-out is no cut-out of the same thermostat, K (4 °F). */
 const OUT_OF_LINE_K = 4 / 1.8;
 /** … and with more to go by so many of their standard deviations, but no less than this, K (1.5 °F). */
@@ -57,7 +59,10 @@ function byPerson(extremes: Extreme[], i: number, marks: Mark[], lateS: number):
     return during.some((mark) => isOff(mark) || mark.kind === 'heat-on');
   const lastOff = during.findLast(isOff);
   if (!lastOff) return false;
-  const clicked = during.some(({ kind, timeS }) => kind === 'click' && timeS <= lastOff.timeS);
+  const clicked = during.some(
+    ({ kind, timeS }) =>
+      kind === 'click' && timeS <= lastOff.timeS && lastOff.timeS - timeS <= CLICK_TURNS_S,
+  );
   const backOn = during.some(({ kind, timeS }) => kind === 'heat-on' && timeS > lastOff.timeS);
   return !clicked && !backOn;
 }

@@ -73,6 +73,19 @@ describe('a turn made by a person', () => {
     expect(turnedBy(CYCLING, marks)[1]).toBe('machine');
   });
 
+  test('a click long before the mark does not: the heat went on until it was turned off', () => {
+    const turned = turnedBy(
+      [
+        [0, 70],
+        [400, 178],
+        [700, 90],
+      ],
+      [{ timeS: 270, kind: 'click' }, heatOff(396)],
+    );
+
+    expect(turned[1]).toBe('person');
+  });
+
   test('heat off in the fall makes the next valley a person’s, not the cut-out before it', () => {
     const turned = turnedBy(CYCLING, [heatOff(330), { timeS: 368, kind: 'heat-on' }]);
 

@@ -82,7 +82,7 @@ function slow(fall: Fall, clean: Fall[], { run, method }: SeenRun): How {
       const ownS = fallTime(probeC, fall, topC, footC);
       const otherS = fallTime(probeC, other, topC, footC);
       if (ownS === null || otherS === null) return 'no';
-      const longer = over(ownS - otherS - 15 - 3 * method.spacingS, 6 + 2 * method.spacingS);
+      const longer = over(ownS - otherS - 10 - method.spacingS, 6 + method.spacingS);
       return all(longer, over(ownS / otherS - 1.75, 0.35));
     });
   return any(...hows);
