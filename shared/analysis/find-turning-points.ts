@@ -46,7 +46,7 @@ export function findTurningPoints(
   let rough = findRough(view, swingK);
   for (let round = 0; round < MOST_ROUNDS; round++) {
     const extremes = locate(series, view, rough, noise);
-    const kept = withoutWeakSwings(extremes, swingK);
+    const kept = withoutWeakSwings(extremes, swingK, leastLegS(view, extremes));
     if (kept.length === extremes.length) {
       return withLastTurn(extremes, view, noise, swingK);
     }
@@ -166,16 +166,22 @@ function atReading(view: BinnedView, turn: RoughTurn, noiseK: number): LocatedTu
   return { timeS: turn.timeS, tempC: turn.tempC, uK, switched: null };
 }
 
+/** Where readings are many, two turns within two of them are one noise; where they are few a leg may have no more. */
+function leastLegS({ tempsC, widthS }: BinnedView, extremes: Extreme[]): number {
+  return tempsC.length < FEW_READINGS * extremes.length ? 0 : 2 * widthS;
+}
+
 /**
  * Places of the extremes that are left when the smallest swing under the threshold is taken out again and again: it
  * joins the two legs beside it. At the record's ends the next extreme becomes the end.
  */
-function withoutWeakSwings(extremes: Extreme[], swingK: number): number[] {
+function withoutWeakSwings(extremes: Extreme[], swingK: number, leastS: number): number[] {
   const kept = extremes.map((_, i) => i);
   for (;;) {
     const at = weakestSwing(
       kept.map((i) => extremes[i]!),
       swingK,
+      leastS,
     );
     if (at === null) return kept;
     if (at === 0) kept.shift();
@@ -184,13 +190,15 @@ function withoutWeakSwings(extremes: Extreme[], swingK: number): number[] {
   }
 }
 
-/** A located peak that lies under its valley is no swing at all. */
-function weakestSwing(extremes: Extreme[], swingK: number): number | null {
+/** A located peak that lies under its valley, or within a reading of it, is no swing at all. */
+function weakestSwing(extremes: Extreme[], swingK: number, leastS: number): number | null {
   let weakest: number | null = null;
   let leastK = swingK;
   for (let i = 0; i + 1 < extremes.length; i++) {
-    const { kind, tempC } = extremes[i]!;
-    const swing = (kind === 'valley' ? 1 : -1) * (extremes[i + 1]!.tempC - tempC);
+    const { kind, tempC, timeS } = extremes[i]!;
+    const next = extremes[i + 1]!;
+    const isLeg = next.timeS - timeS >= leastS;
+    const swing = isLeg ? (kind === 'valley' ? 1 : -1) * (next.tempC - tempC) : 0;
     if (swing < leastK) {
       leastK = swing;
       weakest = i;
