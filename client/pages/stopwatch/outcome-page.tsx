@@ -67,16 +67,18 @@ export function OutcomePage({ run, sources, onAnother }: OutcomePageProps) {
 function Sent({ runId }: { runId: string }) {
   const { unsent } = useUnsent();
   return (
-    <p role="status" className="words border-t border-print pt-3 text-table">
-      {unsent > 0 ? (
-        `On this phone, ${unsent} to send. It goes when the network is back.`
-      ) : (
-        <>
-          Sent. The shop judges it with its own engine:{' '}
-          <a href={`/runs/${runId}`}>see the run there</a>.
-        </>
+    <div className="border-t border-print pt-3">
+      <p role="status" className="words text-table">
+        {unsent > 0
+          ? `On this phone, ${unsent} to send. It goes when the network is back.`
+          : 'Sent. The shop judged it as well.'}
+      </p>
+      {unsent === 0 && (
+        <a className="word" href={`/runs/${runId}`}>
+          See the run there
+        </a>
       )}
-    </p>
+    </div>
   );
 }
 
