@@ -25,6 +25,13 @@ const CRUSHED_DUCT: DemoJob[] = [
               { timeS: 420, text: 'Heat cuts out far below 155: the limit, not the thermostat' },
             ],
           },
+          {
+            log: 'in-band-duct-off.csv',
+            at: '13:50',
+            label: 'Duct off',
+            probe: 'K2',
+            notes: [{ timeS: 600, text: 'Duct off: full rounds, at the thermostat' }],
+          },
         ],
       },
       {

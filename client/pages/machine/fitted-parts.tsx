@@ -1,12 +1,11 @@
 import type { FittedPart, MachinePage } from '#shared/schemas/homes.ts';
+import { FittedDifferences } from '../../forms/fitted-differences.tsx';
 import { KeyLink, WordLink } from '../../components/key-link.tsx';
-import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { RATING_KIND_WORDS, ratedWords } from '../../format/rating-words.ts';
 import { useNowMs } from '../../format/use-now.ts';
 import { dateWords } from '../../format/when.ts';
 import { useSession } from '../frame/session-context.ts';
-import { describeDifferences } from './describe-differences.ts';
 
 /** What is in the machine, what came out, and where that differs from what should be in it. */
 export function FittedParts({ machine }: { machine: MachinePage }) {
@@ -19,7 +18,7 @@ export function FittedParts({ machine }: { machine: MachinePage }) {
       >
         Fitted parts
       </SectionHead>
-      <Differences machine={machine} />
+      <FittedDifferences machine={machine} className="my-3 max-w-form" />
       <ul>
         {[...inPlace, ...removed].map((part) => (
           <PartRow key={part.id} part={part} machineId={machine.id} />
@@ -29,24 +28,6 @@ export function FittedParts({ machine }: { machine: MachinePage }) {
         <KeyLink to={`/machines/${machine.id}/parts/new`}>Fit a part</KeyLink>
       </div>
     </section>
-  );
-}
-
-function Differences({ machine }: { machine: MachinePage }) {
-  const differences = describeDifferences(machine);
-  if (differences.length === 0) return null;
-  return (
-    <Notice
-      kind="watch"
-      head="What is fitted differs from what the machine is specified to have."
-      className="my-3 max-w-form"
-    >
-      {differences.map((words) => (
-        <p key={words} className="pt-1">
-          {words}
-        </p>
-      ))}
-    </Notice>
   );
 }
 

@@ -21,6 +21,7 @@ export function JudgedAgainst({ run, unit, zone }: JudgedAgainstProps) {
       <SectionHead id="judged">Judged against</SectionHead>
       {judgedBy ? (
         <dl>
+          <Row name="Heat setting">{run.conditions.setting}</Row>
           <Row name={judgedBy.name}>{judgedWords(judgedBy, unit)}</Row>
           <Row name="Allowance for the air">
             {formatStep(judgedBy.overshootK, unit)} above, {formatStep(judgedBy.undershootK, unit)}{' '}

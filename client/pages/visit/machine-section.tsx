@@ -5,6 +5,7 @@ import { WordLink } from '../../components/key-link.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { Failed, Waiting } from '../../components/waiting.tsx';
+import { FittedDifferences } from '../../forms/fitted-differences.tsx';
 import { machineWords } from '../../format/job-words.ts';
 import { RATING_KIND_WORDS, ratedWords } from '../../format/rating-words.ts';
 import { dateWords } from '../../format/when.ts';
@@ -63,6 +64,7 @@ function MachineFacts({ machine, zone, nowMs }: MachineFactsProps) {
           ))}
         </Rows>
       )}
+      <FittedDifferences machine={machine} className="mt-3" />
     </>
   );
 }

@@ -77,7 +77,7 @@ export const FAULTY_STORIES: SampleStory[] = [
     story:
       'The guest house with its crushed duct: the limit on the heater housing cuts again and again, far below the thermostat.',
     startedAt: '2026-04-17T13:20:00Z',
-    machine: { roomC: 21, boxLimit: { opensC: 107, closesC: 72, lagS: 8 } },
+    machine: { roomC: 21, boxLimit: { opensC: 125, closesC: 84, lagS: 8 } },
     faults: { airflow: [{ fromS: 0, share: 0.25 }] },
     watch: { forS: 780 },
     layout: { clock: 'month-first', header: ['Logged', 'Outlet'], unitInCells: ' °F' },

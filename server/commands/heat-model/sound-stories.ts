@@ -49,6 +49,19 @@ export const SOUND_STORIES: SampleStory[] = [
     outcome: 'proven',
   }),
   story({
+    file: 'in-band-duct-off.csv',
+    seed: 109,
+    story:
+      'The guest house on the day its crushed duct was found, with the duct off: the same machine, and nothing wrong.',
+    startedAt: '2026-04-17T13:50:00Z',
+    machine: { roomC: 21, boxLimit: { opensC: 125, closesC: 84, lagS: 8 } },
+    watch: { forS: 780 },
+    duct: 'off',
+    layout: { clock: 'month-first', header: ['Logged', 'Outlet'], unitInCells: ' °F' },
+    headline: 'in-band',
+    outcome: 'proven',
+  }),
+  story({
     file: 'in-band-relay-replaced.csv',
     seed: 104,
     story: 'Proof run of an earlier visit: a new heater relay, five clean rounds.',

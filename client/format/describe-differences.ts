@@ -1,7 +1,7 @@
 import type { FittedPart, MachinePage } from '#shared/schemas/homes.ts';
 import type { StoredRating } from '#shared/schemas/ratings.ts';
 import { fromCelsius, toCelsius } from '#shared/units.ts';
-import { ratedWords, unitWords } from '../../format/rating-words.ts';
+import { ratedWords, unitWords } from './rating-words.ts';
 
 const CYCLING = ['cycling-thermostat', 'thermistor'];
 /** A tenth of a degree: as near as a figure rounded in the other unit comes to itself. */

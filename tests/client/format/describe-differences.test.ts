@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { describeDifferences } from '#client/pages/machine/describe-differences.ts';
+import { describeDifferences } from '#client/format/describe-differences.ts';
 import type { FittedPart } from '#shared/schemas/homes.ts';
 import type { StoredRating } from '#shared/schemas/ratings.ts';
 
