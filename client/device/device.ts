@@ -90,6 +90,7 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
         tx.done,
       ]);
       await answers.sweep(next.id);
+      await things.sweep();
       await recount();
     },
 

@@ -1,6 +1,6 @@
 import { isRunEvent, type RunEvent } from '#shared/recorder/run-event.ts';
 import { replayRun } from '#shared/recorder/replay-run.ts';
-import { keepThing, thisDevice } from './this-device.ts';
+import { keepThing, letGoOfChain, thisDevice } from './this-device.ts';
 
 const CHAIN = 'run:';
 /** The character after the colon: where the chains of runs end. */
@@ -9,6 +9,11 @@ const PAST_CHAIN = 'run;';
 /** Resolves once the event would survive a power cut. @throws {KeepError} it was not kept */
 export async function keepRunEvent(event: RunEvent): Promise<void> {
   await keepThing('run-event', event, { chain: CHAIN + event.runId });
+}
+
+/** Lets go of a run that the server has whole; one with something unsent stays. */
+export function letGoOfRun(runId: string): Promise<boolean> {
+  return letGoOfChain(CHAIN + runId);
 }
 
 /** The runs of this person that lie on the device, sent or not, each as its events in order. */

@@ -14,6 +14,8 @@ export type NewThing<Kind extends SendingKind = SendingKind> = {
 export type Counts = { unsent: number; conflict: number; refused: number };
 
 const NO_THINGS: Counts = { unsent: 0, conflict: 0, refused: 0 };
+/** A run that was recorded by hand is looked at again within this time, 30 days. */
+const APPLIED_MS = 30 * 86_400_000;
 /** Sorts after every string, number and date (Indexed Database API 3.0, section 2.4). */
 const LAST: IDBValidKey[] = [];
 
@@ -123,13 +125,25 @@ export function createKeptThings(db: () => Promise<DeviceDb>, nowMs: () => numbe
       return { unsent, conflict, refused };
     },
 
+    /** Lets go of what the server has had for so long that no page asks for it any more. */
+    async sweep(): Promise<void> {
+      const tx = (await db()).transaction('things', 'readwrite');
+      for await (const cursor of tx.store) {
+        const { state, answeredAtMs } = cursor.value;
+        const isOld = (answeredAtMs ?? Infinity) < nowMs() - APPLIED_MS;
+        if (state === 'applied' && isOld) await cursor.delete();
+      }
+      await tx.done;
+    },
+
     /** How many unsent things each person has here. */
     async countByPerson(): Promise<Map<string, number>> {
       const counts = new Map<string, number>();
       const tx = (await db()).transaction('things');
-      for await (const { value } of tx.store) {
-        if (value.state === 'unsent')
-          counts.set(value.personId, (counts.get(value.personId) ?? 0) + 1);
+      let cursor = await tx.store.index('state').openKeyCursor();
+      for (; cursor; cursor = await cursor.continue()) {
+        const [personId, state] = cursor.key;
+        if (state === 'unsent') counts.set(personId, (counts.get(personId) ?? 0) + 1);
       }
       return counts;
     },

@@ -49,6 +49,8 @@ export function createShelf(device: Device, asOf: AsOf, onLate: (url: string) =>
       if (isLate) onLate(url);
       return data;
     });
+    // Told of further down; it may fail before what lies here was found.
+    asked.catch(() => {});
     const kept = await find(url, check);
     if (!kept) return asked;
     const served = () => {
@@ -60,7 +62,10 @@ export function createShelf(device: Device, asOf: AsOf, onLate: (url: string) =>
         isLate = true;
         resolve(served());
       }, PATIENCE_MS);
-      void asked.catch(() => {}).finally(() => clearTimeout(timer));
+      asked.then(
+        () => clearTimeout(timer),
+        () => clearTimeout(timer),
+      );
     });
     return Promise.race([late, asked]).catch((error: unknown) => {
       if (isAway(error)) return served();

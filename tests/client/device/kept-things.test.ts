@@ -5,8 +5,8 @@ import { createDevice, type Device } from '#client/device/device.ts';
 
 const opened: Device[] = [];
 
-async function open(name: string, person = TOM): Promise<Device> {
-  const device = createDevice({ name });
+async function open(name: string, person = TOM, nowMs = Date.now): Promise<Device> {
+  const device = createDevice({ name, nowMs });
   opened.push(device);
   await device.open(person, { person });
   return device;
@@ -153,4 +153,34 @@ test('a tab hears of what another keeps', async () => {
   await heard;
 
   await expect.poll(() => tabs[1]!.unsent().unsent).toBe(1);
+});
+
+test('what was sent a month ago is let go of; what was not sent never is', async () => {
+  const name = randomUUID();
+  const device = await open(name, TOM, () => 0);
+  const sent = await device.keep(edit('Sent'));
+  const unsent = await device.keep(edit('Not sent'));
+  await device.things.answer([{ id: sent.id, status: 'applied', answer: {} }]);
+
+  await open(name, TOM, () => 29 * 86_400_000);
+  const soon = await device.things.list(TOM.id, 'applied');
+  await open(name, TOM, () => 31 * 86_400_000);
+
+  expect(soon.map(({ id }) => id)).toEqual([sent.id]);
+  expect(await device.things.list(TOM.id, 'applied')).toEqual([]);
+  expect(await device.things.list(TOM.id, 'unsent')).toEqual([unsent]);
+});
+
+test('a final answer stays as it came first', async () => {
+  const device = await open(randomUUID());
+  const { id } = await device.keep(edit('Lint'));
+  const conflict = { id, status: 'conflict' as const, server: 'theirs', device: 'mine' };
+
+  await device.things.answer([{ id, status: 'waiting', message: '' }]);
+  const waiting = await device.things.list(TOM.id, 'unsent');
+  await device.things.answer([conflict]);
+  await device.things.answer([{ id, status: 'applied', answer: {} }]);
+
+  expect(waiting).toHaveLength(1);
+  expect(await device.things.list(TOM.id, 'conflict')).toMatchObject([{ id, answer: conflict }]);
 });
