@@ -75,7 +75,8 @@ function hasOneOtherTime(whole: LogReading, reading: LogReading): boolean {
   if (reading.temps.some((temp, i) => !Object.is(temp, whole.temps[i]))) return false;
   const { timesS } = whole.series;
   if (timesS.length !== reading.temps.length || isEven(timesS)) return false;
-  const shiftS = reading.series.timesS.at(-2)! - timesS.at(-2)!;
+  const shifts = Array.from(timesS, (timeS, i) => reading.series.timesS[i]! - timeS);
+  const shiftS = [...shifts].sort((a, b) => a - b)[shifts.length >> 1]!;
   const differs = (timeS: number, i: number) => Math.abs(timeS - timesS[i]! - shiftS) > 1e-6;
   return reading.series.timesS.filter(differs).length <= 1;
 }

@@ -179,10 +179,17 @@ function splitHeader(line: string, { delimiter, width }: DelimiterChoice): strin
   return delimiter === ' ' && cells.length !== width ? line.trim().split(/\s{2,}|\t+/) : cells;
 }
 
+/** "M69.8" and "04/24/2026 2:05 P" are what damage makes of a reading and a stamp, and head no column. */
+function isBrokenReading(cell: string): boolean {
+  const digits = cell.replace(/\D/g, '').length;
+  const hasWord = /[A-Za-zÀ-ÿ]{3}/.test(cell);
+  return !hasWord && /\d[.:/-]\d/.test(cell) && digits * 2 >= cell.length;
+}
+
 /** The share of filled cells that are words; 0 where that, or their number, makes the line no header. */
 function wordShare(cells: string[], width: number, line: string): number {
   if (/^sep=.\s*$/i.test(line)) return 0;
-  const kinds = cells.map(cellKind);
+  const kinds = cells.map((cell) => (isBrokenReading(cell) ? 'number' : cellKind(cell)));
   // "No" over a column of numbers is a word, and no sensor that is open
   const isWord = (kind: CellKind) => kind === 'text' || kind === 'open';
   const words = kinds.includes('text') ? kinds.filter(isWord).length : 0;

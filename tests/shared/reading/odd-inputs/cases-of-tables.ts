@@ -179,6 +179,14 @@ export const TABLE_CASES: Odd[] = [
     aside: [3],
   },
   {
+    row: 64,
+    what: 'a first row whose delimiter moved is set aside, and heads nothing',
+    file: `Date and time,Outlet (°F)\n04/24/2026 2:05:00 P,M69.8\n${[2, 4, 6, 8].map((s) => `04/24/2026 2:05:0${s} PM,7${s}.5`).join('\n')}\n`,
+    temp: [72.5, 74.5, 76.5, 78.5],
+    aside: [2],
+    warns: ['rows-set-aside'],
+  },
+  {
     row: 72,
     what: 'columns that change places',
     file: 'Elapsed (s),Exhaust °F,Room °F\n0,70,68\n10,75,68\n20,81,68\nElapsed (s),Room °F,Exhaust °F\n30,68,86\n',
