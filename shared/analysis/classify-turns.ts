@@ -37,6 +37,9 @@ export function classifyTurns(
   return turned.map((extreme, i) => {
     let turnedBy: TurnedBy = extreme.turnedBy;
     if (i === lost) turnedBy = 'one-shot';
+    // Where a person made the fall, what ended it brought back no heat that a thermostat had cut.
+    const afterPerson = extreme.kind === 'valley' && turned[i - 1]?.turnedBy === 'person';
+    if (turnedBy === 'machine' && afterPerson) turnedBy = 'person';
     if (turnedBy === 'machine' && extreme.kind === 'peak') cutOutSeen = true;
     if (turnedBy === 'machine' && extreme.kind === 'valley' && !cutOutSeen) {
       turnedBy = 'before-cut-out';

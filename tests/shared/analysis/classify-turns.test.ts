@@ -136,3 +136,21 @@ describe('a one-shot part that opens for good', () => {
     ).toBe('machine');
   });
 });
+
+test('a door opened in a rise makes its dip a person’s at both ends: no thermostat cut that heat', () => {
+  const dip: [number, number][] = [
+    [0, 70],
+    [300, 156],
+    [370, 129],
+    [420, 147],
+    [450, 139],
+    [500, 155],
+    [570, 129],
+    [600, 140],
+  ];
+
+  const machine = 'machine';
+  expect(turnedBy(dip, [{ timeS: 412, kind: 'door' }])).toEqual([
+    ...['start', machine, machine, 'person', 'person', machine, machine, 'end'],
+  ]);
+});
