@@ -3,7 +3,7 @@ import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import type { MarkKind } from '#shared/analysis/series.ts';
 import type { EndSetup } from '#shared/recorder/run-event.ts';
 import { toCelsius } from '#shared/units.ts';
-import { useUnsent } from '../../device/this-device.ts';
+import { useSending, useUnsent } from '../../device/this-device.ts';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { Announcer } from './announcer.tsx';
 import { ClockFace } from './clock-face.tsx';
@@ -187,6 +187,7 @@ type RunningRun = ReturnType<Recorder['recording']>['run'];
 
 function Top({ run, machine, visitId, onRun, onFinish }: TopProps) {
   const { unsent } = useUnsent();
+  const { outcome } = useSending();
   const count = run.readings.length;
   const readings = count === 1 ? '1 reading' : `${count} readings`;
   return (
@@ -199,7 +200,7 @@ function Top({ run, machine, visitId, onRun, onFinish }: TopProps) {
           {machine}, {run.start.label.toLowerCase()}
         </b>
         <span>
-          {readings}, {unsent === 0 ? 'all sent' : `${unsent} to send`}
+          {readings}, {unsentWords(unsent, outcome === 'signed-out')}
         </span>
       </button>
       <ThemeWord />
@@ -208,6 +209,11 @@ function Top({ run, machine, visitId, onRun, onFinish }: TopProps) {
       </button>
     </header>
   );
+}
+
+function unsentWords(unsent: number, isSignedOut: boolean): string {
+  if (unsent === 0) return 'all sent';
+  return isSignedOut ? `${unsent} to send after signing in` : `${unsent} to send`;
 }
 
 function guardFacts(recorder: Recorder, { machine }: Sources, nowS: number): GuardFacts {

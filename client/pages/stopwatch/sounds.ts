@@ -4,6 +4,7 @@ export function createSounds() {
 
   function context(): AudioContext | null {
     if (typeof AudioContext === 'undefined') return null;
+    if (!navigator.userActivation?.hasBeenActive) return audio;
     audio ??= new AudioContext();
     if (audio.state === 'suspended') void audio.resume();
     return audio;
@@ -54,7 +55,8 @@ export const VIBRATIONS = {
   cutHeat: [600, 150],
 } as const;
 
-/** Where the device can; elsewhere nothing. */
+/** Where the device can, and once the page was touched; elsewhere nothing. */
 export function vibrate(pattern: readonly number[]): void {
-  if ('vibrate' in navigator) navigator.vibrate([...pattern]);
+  if (!('vibrate' in navigator) || !navigator.userActivation?.hasBeenActive) return;
+  navigator.vibrate([...pattern]);
 }

@@ -1,12 +1,14 @@
 import { lazy, Suspense, useEffect, useState, useSyncExternalStore } from 'react';
+import { replayRun } from '#shared/recorder/replay-run.ts';
 import type { RunEvent } from '#shared/recorder/run-event.ts';
+import { ApiError } from '../../api/http.ts';
 import { Key } from '../../components/key.tsx';
 import { holdUpdates } from '../../device/recording-hold.ts';
 import { newId } from '../../device/new-id.ts';
 import { startDevice } from '../../device/start-device.ts';
 import { keepThing, onAnswers, serverClock, thisDevice } from '../../device/this-device.ts';
 import { guardSetupOf } from './judge-run.ts';
-import { findRunning, keepRunEvent, listKeptRuns } from '../../device/kept-runs.ts';
+import { findRunning, keepRunEvent, letGoOfRun, listKeptRuns } from '../../device/kept-runs.ts';
 import { loadPreferences, keepPreferences } from './preferences.ts';
 import { beginRun, openRecorder, type Recorder } from './recorder.ts';
 import { RunningPage } from './running-page.tsx';
@@ -75,8 +77,10 @@ let opening: Promise<Opened> | null = null;
 
 async function open(): Promise<Opened> {
   const visitId = window.location.pathname.split('/')[2] ?? '';
-  const session = await findSession();
-  const running = findRunning(await listKeptRuns());
+  const session = await findSession().catch(signInFirst);
+  const runs = await listKeptRuns();
+  const running = findRunning(runs);
+  letGoOfOver(runs);
   const [start] = running ?? [];
   // A run that goes on is opened wherever it was begun.
   const sources = await findSources(session, start?.kind === 'start' ? start.visitId : visitId);
@@ -84,6 +88,22 @@ async function open(): Promise<Opened> {
   recorder?.noteReopened();
   const { safetyTickedAtMs } = sources.visit;
   return { sources, recorder, isTicked: safetyTickedAtMs !== null || (await wasTicked(visitId)) };
+}
+
+/** The server knows this session no longer: the sign-in leads back here. */
+function signInFirst(error: unknown): never {
+  if (error instanceof ApiError && error.status === 401) {
+    window.location.replace(`/sign-in?to=${encodeURIComponent(window.location.pathname)}`);
+  }
+  throw error;
+}
+
+/** Runs that are over and sent whole need no room here any more. */
+function letGoOfOver(runs: RunEvent[][]): void {
+  for (const events of runs) {
+    const run = replayRun(events);
+    if (run && (run.end ?? run.isThrownAway)) void letGoOfRun(run.start.runId);
+  }
 }
 
 /** Ticked on this device and not sent yet. */
