@@ -192,10 +192,14 @@ function gather({ timesS, tempsC }: BinnedView, fromS: number, toS: number) {
   for (let k = 0; k < x.length; k++) {
     const first = from + k * each;
     const last = Math.min(to, first + each);
+    let sumS = 0;
+    let sumC = 0;
     for (let i = first; i < last; i++) {
-      x[k]! += (timesS[i]! - fromS) / (toS - fromS) / (last - first);
-      y[k]! += tempsC[i]! / (last - first);
+      sumS += timesS[i]! - fromS;
+      sumC += tempsC[i]!;
     }
+    x[k] = sumS / (last - first) / (toS - fromS);
+    y[k] = sumC / (last - first);
   }
   return { x, y, each };
 }

@@ -44,9 +44,9 @@ function meansOf(values: Float64Array, from: number, to: number, each: number): 
   for (let k = 0; k < means.length; k++) {
     const first = from + k * each;
     const last = Math.min(to, first + each);
-    let mean = 0;
-    for (let i = first; i < last; i++) mean += values[i]! / (last - first);
-    means[k] = mean;
+    let sum = 0;
+    for (let i = first; i < last; i++) sum += values[i]!;
+    means[k] = sum / (last - first);
   }
   return means;
 }

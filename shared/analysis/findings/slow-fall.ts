@@ -35,10 +35,9 @@ export function undisturbedFalls(facts: RunFacts): RunLeg[] {
  * of the machine's clean run; null where it is not, or where none compares.
  */
 export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidence | null {
-  if (quickensAgain(leg, facts)) return null;
-  const others = nearestLegs(falls, leg).filter(
-    (other) => isAlike(leg, other) && !isAsFast(leg, other),
-  );
+  const near = nearestLegs(falls, leg);
+  const others = near.filter((other) => isAlike(leg, other) && !isAsFast(leg, other));
+  if (others.length === 0 && !facts.input.reference) return null;
   const compared = others.flatMap((other) => [
     ...comparedFalls(leg, other, facts),
     ...comparedWholes(leg, other),
@@ -49,8 +48,8 @@ export function slowFall(leg: RunLeg, falls: RunLeg[], facts: RunFacts): Evidenc
     return times >= SLOW_TIMES && extraS >= leastExtraS;
   });
   const [slowest] = slow.sort((a, b) => b.times - a.times);
-  const found = slowest ?? slowFromHere(leg, falls);
-  return found && toEvidence(found);
+  const found = slowest ?? slowFromHere(leg, near);
+  return found && !quickensAgain(leg, facts) ? toEvidence(found) : null;
 }
 
 /** Where the parts of a fall that are compared begin and end, as shares of its time: clear of both rounded corners. */
@@ -94,9 +93,8 @@ const HIDDEN_CYCLE_FALLS = 1.5;
  * A fall between like turns in a coarse record: slow where every such fall near it is from it on, and none before. What
  * takes so much longer that a whole cycle may hide between its readings is left alone.
  */
-function slowFromHere(leg: RunLeg, falls: RunLeg[]): Compared | null {
-  const near = [leg, ...nearestLegs(falls, leg)];
-  const like = near.filter((other) => areWholeAlike(leg, other) && isAlike(leg, other));
+function slowFromHere(leg: RunLeg, near: RunLeg[]): Compared | null {
+  const like = [leg, ...near].filter((other) => areWholeAlike(leg, other) && isAlike(leg, other));
   const beforeS = like.filter(({ from }) => from.timeS < leg.from.timeS).map(lengthOf);
   const sinceS = like.filter(({ from }) => from.timeS >= leg.from.timeS).map(lengthOf);
   if (beforeS.length < LEAST_EACH || sinceS.length < LEAST_EACH) return null;
