@@ -17,6 +17,8 @@ const LAST_SHARE = 0.6;
 const LEAST_LAST_S = 240;
 /** Time constant of the slowest part, the drum's metal, s (common practice: a machine is warm through in half an hour). */
 const SLOWEST_TAU_S = 600;
+/** A rise shorter than this does not show the slowest part, so that its curve alone says too little, s. */
+const YOUNG_S = 900;
 /** On-times, and s, for which a machine that cut out before may heat again before it is another thing. */
 const LONG_TIMES = 3;
 const LONG_S = 120;
@@ -39,8 +41,7 @@ export function findBelowCutOut(facts: RunFacts): Finding | null {
   if (!rating || load === 'damp' || !leg || !rise || !isLong(rise, facts)) return null;
   const { fromS, toS } = spanWithTail(rise, facts);
   const { lowC } = bandOf('cut-out', rating);
-  // A rise younger than the drum's metal does not show the slowest part, so that its curve alone says too little.
-  const curve = toS - fromS < SLOWEST_TAU_S ? null : asymptoteOf(rise, facts);
+  const curve = toS - fromS < YOUNG_S ? null : asymptoteOf(rise, facts);
   const heading = [curve, levelOf(rise, facts)].find(
     (seen) => seen !== null && seen.asymptoteC + seen.uK < lowC,
   );
