@@ -62,8 +62,10 @@ describe('a fall that is the only one', () => {
   const once = withFalls([90]);
   // The clean run's fall from 155 heads for 60 °F: through 145 to 137 as fast as τ = 90 s lets it.
   const clean = (tauS: number): ReferenceRun => ({
+    cycles: 5,
     onS: 90,
     offS: 45,
+    swingK: 25 / 1.8,
     fall: {
       fromC: toCelsius(155, 'F'),
       toC: toCelsius(130, 'F'),

@@ -5,7 +5,13 @@ import { toCelsius } from '#shared/units.ts';
 import { buildFacts, turnsAt } from './build-facts.ts';
 
 const FIVE = (tempF: number) => Array.from({ length: 5 }, () => tempF);
-const clean = (onS: number): ReferenceRun => ({ onS, offS: 45, fall: null });
+const clean = (onS: number): ReferenceRun => ({
+  cycles: 5,
+  onS,
+  offS: 45,
+  swingK: 25 / 1.8,
+  fall: null,
+});
 
 describe('cut-outs at 125 °F, far under a band from 150', () => {
   // The rated differential is 25 °F; 0.7 of it is 17.5 °F.
