@@ -1,3 +1,5 @@
+import { appendFile } from 'node:fs/promises';
+import { join } from 'node:path';
 import type { Page } from '@playwright/test';
 import { DEMO_PASSWORD } from '#server/demo/demo-people.ts';
 import { ownServer } from './support/own-server.ts';
@@ -13,10 +15,24 @@ async function signIn(page: Page, url: string): Promise<void> {
   await expect(page.getByRole('link', { name: 'Rosalind Peake', exact: true })).toBeVisible();
 }
 
-/** What a day needs lies on the phone once the last of it was fetched. */
+/** Addresses whose answers lie on the phone. */
+function laidBy(page: Page): Promise<string[]> {
+  return page.evaluate(async () => {
+    const open = indexedDB.open('fusekeeper');
+    await new Promise((resolve) => (open.onsuccess = resolve));
+    const keys = open.result.transaction('answers').objectStore('answers').getAllKeys();
+    await new Promise((resolve) => (keys.onsuccess = resolve));
+    open.result.close();
+    return keys.result.map((key) => String(key).split(',')[1] ?? '');
+  });
+}
+
+/** The application and every visit of the day lie on the phone. */
 async function untilLaidBy(page: Page): Promise<void> {
   await page.waitForFunction(() => navigator.serviceWorker.controller !== null);
-  await page.waitForLoadState('networkidle');
+  const rounds = await (await page.request.get(new URL('/api/rounds', page.url()).href)).json();
+  const visits = rounds.visits.map(({ id }: { id: string }) => `/api/visits/${id}`);
+  await expect.poll(() => laidBy(page)).toEqual(expect.arrayContaining(visits));
 }
 
 test('a visit is worked on with the server dead, and all of it is sent once when it is back', async ({
@@ -91,14 +107,39 @@ test('signing out is stopped while something is on the phone only', async ({ pag
     await expect(page.getByRole('button', { name: 'Sign in' })).toBeVisible();
 
     // Nothing that was read stays behind on the phone.
-    const left = await page.evaluate(async () => {
-      const open = indexedDB.open('fusekeeper');
-      await new Promise((resolve) => (open.onsuccess = resolve));
-      const count = open.result.transaction('answers').objectStore('answers').count();
-      await new Promise((resolve) => (count.onsuccess = resolve));
-      return count.result;
+    expect(await laidBy(page)).toEqual([]);
+  } finally {
+    await server.remove();
+  }
+});
+
+test('a new version waits for a run that is being recorded, and then takes over', async ({
+  page,
+}) => {
+  const server = await ownServer();
+  await server.start();
+  try {
+    await signIn(page, server.url);
+    await untilLaidBy(page);
+    // Another version: its worker is another file, octet by octet.
+    await appendFile(join(server.clientFolder, 'sw.js'), '\n// the next version\n');
+    await page.reload();
+    await expect(page.getByText('A new version is ready.')).toBeVisible();
+    await page.evaluate(() => {
+      const held = new Promise<void>((resolve) => addEventListener('run-ended', () => resolve()));
+      // As client/device/recording-hold.ts holds it while a run is recorded.
+      void navigator.locks.request('fusekeeper-recording', { mode: 'shared' }, () => held);
     });
-    expect(left).toBe(0);
+
+    await page.getByRole('button', { name: 'Use it now' }).click();
+    await expect(page.getByText('A run is being recorded; end it first.')).toBeVisible();
+
+    await page.evaluate(() => dispatchEvent(new Event('run-ended')));
+    const reopened = page.waitForEvent('load');
+    await page.getByRole('button', { name: 'Use it now' }).click();
+    await reopened;
+    await expect(page.getByRole('link', { name: 'Rosalind Peake', exact: true })).toBeVisible();
+    await expect(page.getByText('A new version is ready.')).toBeHidden();
   } finally {
     await server.remove();
   }

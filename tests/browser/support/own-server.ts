@@ -1,20 +1,30 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
-import { mkdtemp, rm } from 'node:fs/promises';
+import { cp, mkdtemp, rm, symlink } from 'node:fs/promises';
 import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
-import { join } from 'node:path';
+import { join, resolve } from 'node:path';
 
 /** A built server of the test's own, with the demo shop, that may be killed and started again at the same address. */
 export async function ownServer() {
   const folder = await mkdtemp(join(tmpdir(), 'fusekeeper-own-'));
+  // A copy of the program, since a test may lay another version over it.
+  await cp('dist', join(folder, 'dist'), { recursive: true });
+  for (const name of ['node_modules', 'sample-logs', 'package.json']) {
+    await symlink(resolve(name), join(folder, name));
+  }
   const port = await freePort();
   const url = `http://127.0.0.1:${port}`;
   let child: ChildProcess | undefined;
 
   async function start(): Promise<void> {
-    const started = spawn(process.execPath, ['dist/server/index.js'], {
-      env: { PATH: process.env['PATH'], DATA_DIR: folder, PORT: String(port), LOG_LEVEL: 'warn' },
+    const started = spawn(process.execPath, [join(folder, 'dist/server/index.js')], {
+      env: {
+        PATH: process.env['PATH'],
+        DATA_DIR: join(folder, 'data'),
+        PORT: String(port),
+        LOG_LEVEL: 'warn',
+      },
       stdio: ['ignore', 'pipe', 'inherit'],
     });
     child = started;
@@ -31,6 +41,8 @@ export async function ownServer() {
 
   return {
     url,
+    /** The built application that this server hands out. */
+    clientFolder: join(folder, 'dist/client'),
     start,
     /** As a power cut would: nothing is ended in good order. */
     kill,
