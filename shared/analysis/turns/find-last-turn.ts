@@ -10,6 +10,9 @@ const NEAR_SHARE = 0.35;
 const LIKE_SHARE = 0.15;
 /** … and where it is known to this share of it. */
 const SURE_SHARE = 0.12;
+/** The fitted leg passes the record's last reading within this share of the threshold, and its noise. */
+const END_SHARE = 0.5;
+const END_DEVIATIONS = 4;
 /** Like turns to go by. */
 const LEAST_LIKE = 1;
 
@@ -55,6 +58,8 @@ export function withLastTurn(
   const aheadC = located.aheadC(endS + 0.5 * view.widthS);
   const nowC = located.aheadC(endS);
   if (!found || aheadC === null || nowC === null) return extremes;
+  const missesK = Math.abs(nowC - view.tempsC[view.tempsC.length - 1]!);
+  if (missesK > END_SHARE * swingK + END_DEVIATIONS * noise.noiseK) return extremes;
   const sign = last.kind === 'valley' ? 1 : -1;
   const isWhole = sign * (aheadC - found.tempC) >= swingK;
   if (!isWhole || !isLike(found, likeC, greatK)) return extremes;

@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { prepareRecord } from '#shared/analysis/gather-facts.ts';
 import type { Series } from '#shared/analysis/series.ts';
-import { buildThermostatRun } from '#tests/support/build-series.ts';
+import { buildSeries, buildThermostatRun } from '#tests/support/build-series.ts';
 
 const SWING_K = 4 / 1.8;
 
@@ -43,5 +43,29 @@ describe('a record that ends just after a turn', () => {
     tempsC[tempsC.length - 1]! += 6;
 
     expect(turnsOf({ ...series, tempsC })).toHaveLength(3);
+  });
+
+  test.each([1, 2, 3, 4])('shows none in the level minutes after a last fall (seed %i)', (seed) => {
+    // Heat that stays on: 146 to 155 °F and no way down, as a coil on its box holds the exhaust.
+    const legs = [
+      { asymptoteC: 90, tauS: 120, untilC: 68 },
+      { asymptoteC: 60, tauS: 15, untilC: 63 },
+      { asymptoteC: 68.3, tauS: 160, untilC: 68.299 },
+    ];
+    const { series } = buildSeries({
+      startC: 21,
+      legs,
+      lagS: 2,
+      spacingS: 0.5,
+      noiseK: 0.1,
+      seed,
+    });
+
+    expect(turnsOf(series)).toHaveLength(2);
+    const highestC = series.tempsC.reduce((most, tempC) => Math.max(most, tempC));
+    for (const { tempC } of prepareRecord(series, SWING_K).extremes) {
+      expect(tempC).toBeGreaterThan(20);
+      expect(tempC).toBeLessThan(highestC + 1);
+    }
   });
 });
