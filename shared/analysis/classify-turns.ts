@@ -9,6 +9,8 @@ const OFF_MARKS: MarkKind[] = ['heat-off', 'stopped', 'door'];
 const TAPPED_LATE_S = 3;
 /** A cut-out shows at the probe within this of its click; heat turned off later than that made the turn itself, s. */
 const CLICK_TURNS_S = 20;
+/** A machine that starts again after its door was shut heats on; a peak later than this is its own, s. */
+const DOOR_TURNS_S = 45;
 /** A last peak this far off the only other cut-out is no cut-out of the same thermostat, K (4 °F). */
 const OUT_OF_LINE_K = 4 / 1.8;
 /** … and with more to go by so many of their standard deviations, but no less than this, K (1.5 °F). */
@@ -57,7 +59,9 @@ function byPerson(extremes: Extreme[], i: number, marks: Mark[], lateS: number):
   const fromS = extremes[i - 1]!.timeS + lateS;
   const toS = extreme.timeS + lateS;
   const during = marks.filter(({ timeS }) => timeS > fromS && timeS <= toS);
-  const isOff = ({ kind }: Mark) => OFF_MARKS.includes(kind);
+  const isOff = ({ kind, timeS }: Mark) =>
+    OFF_MARKS.includes(kind) &&
+    (kind !== 'door' || extreme.kind === 'valley' || extreme.timeS - timeS <= DOOR_TURNS_S);
   if (extreme.kind === 'valley')
     return during.some((mark) => isOff(mark) || mark.kind === 'heat-on');
   const lastOff = during.findLast(isOff);

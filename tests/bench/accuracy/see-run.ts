@@ -53,7 +53,11 @@ export function seeRun(
     responseS: told.responseS,
     marks: marksOf(plan, run, told.span.fromS),
     turns: trueTurningPoints(run, SWING_K),
-    needed: clear.filter((turn, i) => isResolved(turn, clear[i - 1], clear[i + 1], method)),
+    needed: clear.filter(
+      (turn, i) =>
+        isResolved(turn, clear[i - 1], clear[i + 1], method) &&
+        !isDoorIn(plan, told.span.fromS, clear[i - 1], turn),
+    ),
     accepted: accepted.sort((a, b) => a.timeS - b.timeS),
   };
 }
@@ -113,6 +117,15 @@ function isResolved(
 ): boolean {
   const sinceS = turn.timeS - (before?.timeS ?? -Infinity);
   return sinceS >= leastLegS && (after?.timeS ?? Infinity) - turn.timeS >= leastLegS;
+}
+
+/** After a door that stood open in a fall nobody can tell who brought the heat back. */
+function isDoorIn(plan: Plan, recordFromS: number, before: TrueTurn | undefined, turn: TrueTurn) {
+  if (turn.kind !== 'reset') return false;
+  return plan.faults.doorOpen.some(({ fromS }) => {
+    const doorS = fromS - recordFromS;
+    return doorS > (before?.timeS ?? -Infinity) && doorS < turn.timeS;
+  });
 }
 
 /** A one-shot part that opens where the machine's own cut-outs lie leaves no trace of what it was. */

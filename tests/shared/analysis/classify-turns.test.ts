@@ -86,6 +86,12 @@ describe('a turn made by a person', () => {
     expect(turned[1]).toBe('person');
   });
 
+  test('a door that was shut again long before the peak made no turn', () => {
+    const turned = turnedBy(CYCLING, [{ timeS: 410, kind: 'door' }]);
+
+    expect(turned).toEqual(turnedBy(CYCLING));
+  });
+
   test('heat off in the fall makes the next valley a person’s, not the cut-out before it', () => {
     const turned = turnedBy(CYCLING, [heatOff(330), { timeS: 368, kind: 'heat-on' }]);
 

@@ -1,5 +1,5 @@
 import type { Random } from '#server/commands/heat-model/random.ts';
-import { hotMachine, randomMachine } from '../machines.ts';
+import { hotMachine, randomMachine, unattended } from '../machines.ts';
 import { inBandTurns, USUAL, type Maker, type Told } from '../plan.ts';
 
 const sound: Maker = { name: 'sound', meant: 'in-band', make: () => ({}) };
@@ -112,11 +112,21 @@ function edge(of: string, turns: (random: Random) => NonNullable<Told['turns']>)
   };
 }
 
-/** The door stands open for half a minute or so, mid-run. */
+/** The door stands open for half a minute or so, in the middle of a rise or a fall. */
 function doorOpened(random: Random): Told {
-  const fromS = random.between(330, 600);
-  const doorOpen = [{ fromS, toS: fromS + random.between(15, 50) }];
-  return { faults: { doorOpen }, watch: { forS: random.between(1000, 1400) } };
+  const nth = 3 + Math.floor(random.between(0, 4));
+  const share = random.between(0.3, 0.7);
+  const forS = random.between(15, 50);
+  return {
+    faults: { scatterK: 0 },
+    watch: { forS: random.between(1000, 1400) },
+    finish: (plan) => {
+      const { switches } = unattended(plan.machine, plan.faults, plan.watch.forS);
+      const [from, to] = [switches[nth]?.timeS ?? 400, switches[nth + 1]?.timeS ?? 440];
+      const fromS = from + share * (to - from);
+      return { ...plan, faults: { ...plan.faults, doorOpen: [{ fromS, toS: fromS + forS }] } };
+    },
+  };
 }
 
 /** More air from one moment on: falls are quicker after it. */

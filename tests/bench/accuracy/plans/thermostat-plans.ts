@@ -151,6 +151,8 @@ function drifts(random: Random, cutOutF: Span, totalF: Span, resetF: Span = [127
 
 function scatters(random: Random, scatterK: Span): Told {
   return {
+    // So hot that it gets past its highest opening.
+    machine: hotMachine(random),
     faults: { scatterK: random.between(...scatterK) },
     watch: { forS: random.between(1600, 2100) },
   };
