@@ -2,8 +2,16 @@ import type { Finding } from '../analysis/analysis.ts';
 import type { Rating } from '../analysis/rating.ts';
 import type { DisplayUnit } from '../units.ts';
 
-/** What the words depend on beside the finding. `fuel` other than gas counts as electric. */
-export type About = { unit: DisplayUnit; judgedBy: Rating | null; fuel: string };
+/**
+ * What the words depend on beside the finding. `fuel` other than gas counts as electric; `control` is `thermistor`
+ * where a board switches the heat, `thermostat` where a disc does; not told, the words leave room for both.
+ */
+export type About = {
+  unit: DisplayUnit;
+  judgedBy: Rating | null;
+  fuel: string;
+  control?: string;
+};
 
 /** A cause that the readings would be consistent with, why, and the check that settles it. */
 export type Cause = { cause: string; why: string; settles: string };
@@ -36,6 +44,11 @@ export function numberOf({ evidence }: Finding, key: string): number | null {
 /** Whether the finding was made on a gas machine. */
 export function isGas({ fuel }: Pick<About, 'fuel'>): boolean {
   return fuel === 'gas';
+}
+
+/** Whether a board with a thermistor switches the heat. */
+export function hasBoard({ control }: Pick<About, 'control'>): boolean {
+  return control === 'thermistor';
 }
 
 /** `one cycle`, `4 cycles`: a count with its noun. */

@@ -1,7 +1,9 @@
 import type { Finding } from '../analysis/analysis.ts';
+import { boardNeverCutCauses } from './board-causes.ts';
 import { formatMoment, formatRated, formatSpan, formatTemp } from './format.ts';
 import {
   counted,
+  hasBoard,
   isGas,
   numberOf,
   type About,
@@ -12,9 +14,9 @@ import {
 /** Words for heat that does not go off when it should. Causes in trade order, common practice. */
 export const HEAT_THAT_STAYS: Record<'runaway' | 'heat-stays-on', FindingWords> = {
   runaway: {
-    title: ({ evidence }) =>
+    title: ({ evidence }, about) =>
       evidence.afterTrip === true
-        ? 'Heat kept coming after the thermostat opened'
+        ? `Heat kept coming after the ${hasBoard(about) ? 'control cut it' : 'thermostat opened'}`
         : 'Heat ran on with no cut-out',
     sentences: runawaySentences,
     causes: (finding, about) =>
@@ -29,7 +31,8 @@ export const HEAT_THAT_STAYS: Record<'runaway' | 'heat-stays-on', FindingWords> 
   },
 };
 
-function runawaySentences(finding: Finding, { unit, judgedBy }: About): string[] {
+function runawaySentences(finding: Finding, about: About): string[] {
+  const { unit, judgedBy } = about;
   const { evidence } = finding;
   const said: string[] = [];
   const peakC = numberOf(finding, 'peakC');
@@ -50,14 +53,17 @@ function runawaySentences(finding: Finding, { unit, judgedBy }: About): string[]
   said.push(...clickSentence(finding, unit));
   const before = numberOf(finding, 'cutOutsBefore') ?? 0;
   if (before > 0) said.push(`Before it the heat cut out by itself in ${counted(before, 'cycle')}.`);
-  said.push(
-    evidence.afterTrip === true
-      ? 'That is consistent with a thermostat that opened while something else went on feeding the heat.'
-      : evidence.afterTrip === false
-        ? 'That is consistent with a thermostat that did not open, or a feed that does not pass through it.'
-        : 'Whether the thermostat opened cannot be told from this record: mark each click in the next run.',
-  );
+  said.push(meaningOf(evidence.afterTrip, about));
   return said;
+}
+
+function meaningOf(afterTrip: unknown, about: About): string {
+  const part = hasBoard(about) ? 'control' : 'thermostat';
+  if (afterTrip === true)
+    return `That is consistent with a ${part} that opened while something else went on feeding the heat.`;
+  if (afterTrip === false)
+    return `That is consistent with a ${part} that did not open, or a feed that does not pass through it.`;
+  return `Whether the ${part} opened cannot be told from this record: mark each click in the next run.`;
 }
 
 function clickSentence(finding: Finding, unit: About['unit']): string[] {
@@ -82,7 +88,7 @@ function afterTripCauses(about: About): Cause[] {
       },
     ];
   }
-  return [
+  const relayAndCoil: Cause[] = [
     {
       cause: 'Heater relay or timer contact that sticks once warm',
       why: 'Heat obeyed the first cycles and then did not; a cold machine behaves.',
@@ -93,6 +99,10 @@ function afterTripCauses(about: About): Cause[] {
       why: 'A path to the frame can be open cold and closed hot, and feeds heat that no thermostat stops.',
       settles: 'Element terminal to frame, plug out, at once after a hot run: open or closed.',
     },
+  ];
+  if (hasBoard(about)) return relayAndCoil;
+  return [
+    ...relayAndCoil,
     {
       cause: 'Thermostat contacts that weld after opening',
       why: 'Possible; a clean fall after each earlier cut-out speaks against it.',
@@ -102,7 +112,25 @@ function afterTripCauses(about: About): Cause[] {
 }
 
 function neverOpenedCauses(about: About): Cause[] {
-  const shared: Cause[] = [
+  const shared = hasBoard(about) ? boardNeverCutCauses(about) : thermostatNeverCutCauses(about);
+  if (isGas(about)) return shared;
+  return [
+    ...shared,
+    {
+      cause: 'Heater coil grounded on the leg that nothing switches',
+      why: 'It feeds heat that no thermostat stops; often some heat on the no-heat setting too.',
+      settles: 'Element terminal to frame, cold and hot, plug out.',
+    },
+  ];
+}
+
+function thermostatNeverCutCauses(about: About): Cause[] {
+  const thermistor: Cause = {
+    cause: 'Thermistor open, unplugged or reading cold',
+    why: 'On a machine with a board the control would wait for a temperature that never shows.',
+    settles: 'Thermistor resistance at a known temperature against the service sheet.',
+  };
+  return [
     {
       cause: 'Cycling thermostat stuck closed, or not in the air stream',
       why: 'The exhaust went past its band with no break in the rise.',
@@ -115,36 +143,26 @@ function neverOpenedCauses(about: About): Cause[] {
       why: 'Heat that is fed past the thermostat ignores it from the first cycle.',
       settles: 'Heat on the no-heat setting, or relay output live when the control calls for none.',
     },
-    {
-      cause: 'Thermistor open, unplugged or reading cold',
-      why: 'On a machine with a board the control would wait for a temperature that never shows.',
-      settles: 'Thermistor resistance at a known temperature against the service sheet.',
-    },
+    // A machine known to have a disc has no thermistor to blame.
+    ...(about.control === undefined ? [thermistor] : []),
     {
       cause: 'Part of another rating fitted',
       why: 'It may open, but above what this record reached.',
       settles: 'Read the mark on the part against the service sheet.',
     },
   ];
-  if (isGas(about)) return shared;
-  return [
-    ...shared,
-    {
-      cause: 'Heater coil grounded on the leg that the thermostat does not switch',
-      why: 'It feeds heat that no thermostat stops; often some heat on the no-heat setting too.',
-      settles: 'Element terminal to frame, cold and hot, plug out.',
-    },
-  ];
 }
 
 function runawayChecks(afterTrip: boolean, about: About): string[] {
   const checks = isGas(about)
-    ? ['Gas shut off, then the burner circuit: volts at the valve coils at cut-out, hot']
+    ? ['Volts at the valve coils at cut-out, hot, by a qualified person; then shut the gas off']
     : [
         'Volts across the element at cut-out, hot, by a qualified person',
         'Element to frame, cold and hot, plug out',
       ];
-  const thermostat = 'Thermostat: its mark, its seat, and whether it opens when heated';
+  const thermostat = hasBoard(about)
+    ? 'Thermistor: its plug, its seat, and its ohms at a known temperature'
+    : 'Thermostat: its mark, its seat, and whether it opens when heated';
   return [
     ...(afterTrip ? [...checks, thermostat] : [thermostat, ...checks]),
     'One-shot fuse and thermal cut-off: continuity after this run',

@@ -1,5 +1,6 @@
 import type { Finding, FindingCode } from '../analysis/analysis.ts';
-import type { About, FindingWords, WordedFinding } from './finding-words.ts';
+import { boardCauses, boardChecks } from './board-causes.ts';
+import { hasBoard, type About, type FindingWords, type WordedFinding } from './finding-words.ts';
 import { HEAT_THAT_STAYS } from './heat-that-stays.ts';
 import { HEAT_THAT_STOPS } from './heat-that-stops.ts';
 import { MISSING_HEAT } from './missing-heat.ts';
@@ -23,11 +24,12 @@ const WORDS: Record<FindingCode, FindingWords> = {
  */
 export function wordFinding(finding: Finding, about: About): WordedFinding {
   const words = WORDS[finding.code];
+  const byBoard = hasBoard(about);
   return {
     title: words.title(finding, about),
     sentences: words.sentences(finding, about),
     evidence: wordEvidence(finding.evidence, about.unit),
-    causes: words.causes(finding, about),
-    nextChecks: words.nextChecks(finding, about),
+    causes: (byBoard && boardCauses(finding.code, about)) || words.causes(finding, about),
+    nextChecks: (byBoard && boardChecks(finding.code, about)) || words.nextChecks(finding, about),
   };
 }

@@ -6,7 +6,8 @@ import { formatRated } from '#shared/wording/format.ts';
 
 /** What the words for a run depend on. */
 export function aboutOf(run: RunPage, unit: DisplayUnit): About {
-  return { unit, judgedBy: run.analysis.judgedBy, fuel: run.machine.fuel };
+  const { fuel, control } = run.machine;
+  return { unit, judgedBy: run.analysis.judgedBy, fuel, control };
 }
 
 /** "opens 155 ± 5, closes 130 ± 5", in the reader’s unit. */

@@ -141,3 +141,44 @@ test('the evidence is told in the unit of the reader', () => {
   expect(inF[1]).toEqual({ label: 'Standard deviation', value: '9.0\u00a0°F' });
   expect(inC[1]).toEqual({ label: 'Standard deviation', value: '5.0\u00a0°C' });
 });
+
+describe('a machine whose heat a board switches by a thermistor', () => {
+  const about = { unit: 'F' as const, judgedBy: DEFAULT_RATING, fuel: 'electric' };
+  const causesOf = (finding: Finding, control: string) =>
+    wordFinding(finding, { ...about, control })
+      .causes.map(({ cause }) => cause)
+      .join('; ');
+  const never = { ...bare('runaway'), evidence: { afterTrip: false } };
+
+  test('that never cut out leads to the thermistor first, and to no cycling thermostat', () => {
+    expect(causesOf(never, 'thermistor')).toMatch(/^Thermistor open/);
+    expect(causesOf(never, 'thermistor')).not.toMatch(/thermostat/i);
+    expect(causesOf(never, 'thermostat')).toMatch(/^Cycling thermostat stuck closed/);
+    expect(causesOf(never, 'thermostat')).not.toMatch(/thermistor/i);
+  });
+
+  test.each(FINDING_CODES.filter((code) => /^(opens|closes)-|drifting|scattered/.test(code)))(
+    '%s names no disc, no bias heater and no mark on a thermostat',
+    (code) => {
+      const worded = wordFinding(bare(code), { ...about, control: 'thermistor' });
+
+      expect(everyWord(worded)).not.toMatch(
+        /\bdisc\b|bias|mark on the thermostat|pitted thermostat/i,
+      );
+      expect(worded.causes.length).toBeGreaterThan(1);
+    },
+  );
+
+  test('opens-high and opens-low blame the thermistor in opposite directions', () => {
+    expect(causesOf(bare('opens-high'), 'thermistor')).toMatch(/^Thermistor .*reading cold/);
+    expect(causesOf(bare('opens-low'), 'thermistor')).toMatch(/^Thermistor that reads hot/);
+  });
+
+  test('gas or electric, no cause of a gas machine names an element', () => {
+    for (const code of FINDING_CODES) {
+      const worded = wordFinding(bare(code), { ...about, fuel: 'gas', control: 'thermistor' });
+
+      expect(everyWord(worded), code).not.toMatch(/element|coil that touches|grounded/i);
+    }
+  });
+});
