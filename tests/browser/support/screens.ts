@@ -192,5 +192,6 @@ export const SCREENS: Screen[] = [
   },
   { name: 'account', person: 'tom', open: at('/account'), standing: /assword/ },
   { name: 'more', person: 'tom', open: at('/more'), standing: /Ratings/ },
+  { name: 'on this phone', person: 'tom', open: at('/unsent'), standing: /Everything is with/ },
   { name: 'nothing here', person: 'tom', open: at('/nowhere'), standing: /nothing|no page/i },
 ];

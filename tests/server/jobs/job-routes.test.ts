@@ -107,6 +107,8 @@ test('a visit is booked for somebody who can go, and ends after it starts', asyn
     endsAtMs: NOW.getTime() + 25 * HOUR_MS,
     safetyTickedAtMs: null,
     notes: 'Ring the side bell',
+    notesVersion: '',
+    notesEdited: null,
   });
   expect(deskVisit.body.fields).toEqual({ technicianId: 'Choose a technician' });
   expect(backwards.body.fields).toEqual({ endsAtMs: 'End the visit after it starts' });
