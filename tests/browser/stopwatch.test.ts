@@ -54,6 +54,7 @@ test('a runaway is taken by hand without signal, the guard calls it, and the out
   page,
   context,
 }) => {
+  test.setTimeout(240_000);
   const visitId = await openStopwatch(page);
   await expectNoAxe(page);
   await context.setOffline(true);
@@ -123,7 +124,7 @@ test('a reload in mid-run loses nothing, and a second tab takes no readings', as
   await page.reload();
 
   await expect(page.getByRole('button', { name: /7 readings/ })).toBeVisible();
-  await expect(page.getByRole('timer')).toHaveText(/^01:0\d$/);
+  await expect(page.getByRole('timer')).toHaveText(/^01:\d\d$/);
   await page.keyboard.type('16');
   await expect(page.getByRole('button', { name: /8 readings/ })).toBeVisible();
 
@@ -131,7 +132,7 @@ test('a reload in mid-run loses nothing, and a second tab takes no readings', as
   await second.goto(`/visits/${visitId}/stopwatch`);
   await expect(second.getByText('A run is being taken in another tab.')).toBeVisible();
   await second.goto('/rounds');
-  await expect(second.getByRole('link', { name: /Run going on: 1:/ })).toBeVisible();
+  await expect(second.getByRole('link', { name: /Run going on: [12]:/ })).toBeVisible();
   await second.close();
 
   await page.getByRole('button', { name: /8 readings/ }).click();

@@ -7,8 +7,9 @@ import { Key } from '../../components/key.tsx';
 import { Choice } from './choice.tsx';
 import { formatAt } from './format-elapsed.ts';
 import { Panel } from './panel.tsx';
+import { HEATS, ProbeOptions } from './probe-options.tsx';
 
-type EndPanelProps = {
+export type EndPanelProps = {
   run: HandRun;
   probes: StoredProbe[];
   onEnd: (label: string, setup: EndSetup) => void;
@@ -27,11 +28,6 @@ const ON_OFF = [
 const LOADS = [
   { value: 'empty', words: 'Empty' },
   { value: 'damp', words: 'Damp load' },
-] as const;
-export const SETTINGS = [
-  { value: 'high', words: 'High' },
-  { value: 'medium', words: 'Medium' },
-  { value: 'low', words: 'Low' },
 ] as const;
 
 /** What was taken, and what is still to be said of it. The clock runs on until the run is ended. */
@@ -76,7 +72,7 @@ export function EndPanel({ run, probes, onEnd, onClose }: EndPanelProps) {
           label="Heat setting"
           name="setting"
           value={setup.setting}
-          options={SETTINGS}
+          options={HEATS}
           onChoose={(value) => change({ setting: value })}
         />
         <Choice
@@ -122,19 +118,6 @@ export function EndPanel({ run, probes, onEnd, onClose }: EndPanelProps) {
 
 function placementOf(placement: string) {
   return PLACEMENTS.find(({ value }) => value === placement)?.value ?? null;
-}
-
-export function ProbeOptions({ probes }: { probes: StoredProbe[] }) {
-  return (
-    <>
-      <option value="">Not one of the list</option>
-      {probes.map(({ id, name, accuracy, unit }) => (
-        <option key={id} value={id}>
-          {name}, ±{accuracy} °{unit}
-        </option>
-      ))}
-    </>
-  );
 }
 
 function takenSentence({ readings, marks, corrections, last }: HandRun): string {

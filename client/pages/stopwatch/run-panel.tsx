@@ -9,7 +9,7 @@ import type { Preferences } from './preferences.ts';
 import { SettingsForm } from './settings-form.tsx';
 import { otherValueOf } from '#shared/recorder/other-value.ts';
 
-type RunPanelProps = {
+export type RunPanelProps = {
   run: HandRun;
   preferences: Preferences;
   onPrefer: (preferences: Preferences) => void;

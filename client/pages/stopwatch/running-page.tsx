@@ -1,4 +1,4 @@
-import { useMemo, useState, useSyncExternalStore } from 'react';
+import { Suspense, useMemo, useState, useSyncExternalStore } from 'react';
 import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import type { MarkKind } from '#shared/analysis/series.ts';
 import type { EndSetup } from '#shared/recorder/run-event.ts';
@@ -9,17 +9,16 @@ import { Announcer } from './announcer.tsx';
 import { ClockFace } from './clock-face.tsx';
 import { Counter } from './counter.tsx';
 import { counterWords } from './counter-words.ts';
-import { EndPanel } from './end-panel.tsx';
 import { formatAt, formatTyped } from './format-elapsed.ts';
 import { GuardPanel, type GuardFacts } from './guard-panel.tsx';
 import { HaltPanel } from './halt-panel.tsx';
 import { Keypad } from './keypad.tsx';
+import { EndPanel, RunPanel } from './lazy-panels.tsx';
 import { LiveStrip } from './live-strip.tsx';
 import { liveStripOf } from './live-strip-of.ts';
 import { MarksPanel } from './marks-panel.tsx';
 import type { Preferences } from './preferences.ts';
 import type { Recorder } from './recorder.ts';
-import { RunPanel } from './run-panel.tsx';
 import type { Sources } from './sources.ts';
 import { vibrate, VIBRATIONS, type Sounds } from './sounds.ts';
 import { useAlarm, useBeat } from './use-alarm.ts';
@@ -154,24 +153,26 @@ export function RunningPage({
           }}
         />
       )}
-      {shown?.kind === 'run' && (
-        <RunPanel
-          run={run}
-          preferences={preferences}
-          onPrefer={onPrefer}
-          onCorrect={(id, temp) => void recorder.correct(id, temp)}
-          onThrowAway={() => void recorder.record({ kind: 'thrown-away' })}
-          onClose={() => setSlip(null)}
-        />
-      )}
-      {shown?.kind === 'end' && (
-        <EndPanel
-          run={run}
-          probes={sources.probes}
-          onClose={() => setSlip(null)}
-          onEnd={(label: string, setup: EndSetup) => void recorder.end(label, setup)}
-        />
-      )}
+      <Suspense>
+        {shown?.kind === 'run' && (
+          <RunPanel
+            run={run}
+            preferences={preferences}
+            onPrefer={onPrefer}
+            onCorrect={(id, temp) => void recorder.correct(id, temp)}
+            onThrowAway={() => void recorder.record({ kind: 'thrown-away' })}
+            onClose={() => setSlip(null)}
+          />
+        )}
+        {shown?.kind === 'end' && (
+          <EndPanel
+            run={run}
+            probes={sources.probes}
+            onClose={() => setSlip(null)}
+            onEnd={(label: string, setup: EndSetup) => void recorder.end(label, setup)}
+          />
+        )}
+      </Suspense>
     </main>
   );
 }

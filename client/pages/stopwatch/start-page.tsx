@@ -7,7 +7,7 @@ import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { Choice } from './choice.tsx';
-import { ProbeOptions, SETTINGS } from './end-panel.tsx';
+import { HEATS, ProbeOptions } from './probe-options.tsx';
 import { keyClass } from '../../components/key-face.ts';
 import type { Preferences } from './preferences.ts';
 import { usePress } from './press.ts';
@@ -86,7 +86,7 @@ export function StartPage(props: StartPageProps) {
             label="Heat setting"
             name="setting"
             value={setting}
-            options={SETTINGS}
+            options={HEATS}
             onChoose={setSetting}
           />
           <SelectField

@@ -10,6 +10,7 @@ import { keepThing, onAnswers, serverClock, thisDevice } from '../../device/this
 import { guardSetupOf } from './judge-run.ts';
 import { findRunning, keepRunEvent, letGoOfRun, listKeptRuns } from '../../device/kept-runs.ts';
 import { loadPreferences, keepPreferences } from './preferences.ts';
+import { fetchPanels } from './lazy-panels.tsx';
 import { beginRun, openRecorder, type Recorder } from './recorder.ts';
 import { RunningPage } from './running-page.tsx';
 import { createSounds } from './sounds.ts';
@@ -219,6 +220,7 @@ function OfRun({ recorder, sources, preferences, onPrefer, onAnother }: OfRunPro
 /** While the run goes on, so that its end needs no network. */
 function fetchWhatComesLater(): void {
   const quietly = () => {};
+  fetchPanels();
   import('./outcome-page.tsx').catch(quietly);
   import('#shared/analysis/analyse-run.ts').catch(quietly);
 }
