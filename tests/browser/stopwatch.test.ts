@@ -57,6 +57,7 @@ test('a runaway is taken by hand without signal, the guard calls it, and the out
   test.setTimeout(240_000);
   const visitId = await openStopwatch(page);
   await expectNoAxe(page);
+  await page.waitForLoadState('networkidle');
   await context.setOffline(true);
   await page.getByRole('button', { name: 'Start the clock' }).click();
   await expect(page.getByText('Type all three figures')).toBeVisible();

@@ -127,6 +127,7 @@ function Stopwatch({ opened }: { opened: Opened }) {
   const [problem, setProblem] = useState<string | null>(null);
   const [preferences, setPreferences] = useState(loadPreferences);
   const [recorder, setRecorder] = useState(opened.recorder);
+  useEffect(fetchWhatComesLater, []);
 
   function handlePrefer(next: typeof preferences): void {
     keepPreferences(next);
@@ -188,7 +189,6 @@ function OfRun({ recorder, sources, preferences, onPrefer, onAnother }: OfRunPro
   const isOver = run.end !== null || run.isThrownAway;
   useEffect(() => (isOver ? undefined : holdUpdates()), [isOver]);
   useEffect(() => (isOver ? undefined : checkClock(recorder)), [isOver, recorder]);
-  useEffect(fetchWhatComesLater, []);
 
   if (run.isThrownAway) {
     return (
@@ -217,7 +217,7 @@ function OfRun({ recorder, sources, preferences, onPrefer, onAnother }: OfRunPro
   );
 }
 
-/** While the run goes on, so that its end needs no network. */
+/** As soon as the page stands, so that neither the run nor its end needs a network. */
 function fetchWhatComesLater(): void {
   const quietly = () => {};
   fetchPanels();
