@@ -123,7 +123,8 @@ function swingsBeside(turns: { tempC: number }[], i: number): [number, number] {
 
 /**
  * A fit that ends far from the readings of a swing that is no noise, or says that it knows nothing of it, is no better
- * than the reading. A swing that noise could make is left to the fit, which shows how little of it is real.
+ * than the reading; nor is one further off than the greater swing beside it, however sure of itself. Else a swing that
+ * noise could make is left to the fit, which shows how little of it is real.
  */
 function isCredible(
   { tempC, uK }: LocatedTurn,
@@ -132,6 +133,7 @@ function isCredible(
   greaterK: number,
   noiseK: number,
 ) {
+  if (Math.abs(tempC - readC) > greaterK + NOISE_SWING * noiseK) return false;
   if (uK < SURE_SHARE * greaterK || swing < NOISE_SWING * noiseK) return true;
   return Math.abs(tempC - readC) < CREDIBLE_SHARE * swing && uK < swing;
 }

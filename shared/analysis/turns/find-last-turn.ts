@@ -10,6 +10,8 @@ const NEAR_SHARE = 0.35;
 const LIKE_SHARE = 0.15;
 /** … and where it is known to this share of it. */
 const SURE_SHARE = 0.12;
+/** The last reading itself lies this share of the threshold on the way back: else nothing but the fit tells of a turn. */
+const BACK_SHARE = 0.4;
 /** The fitted leg passes the record's last reading within this share of the threshold, and its noise. */
 const END_SHARE = 0.5;
 const END_DEVIATIONS = 4;
@@ -17,7 +19,7 @@ const END_DEVIATIONS = 4;
 const LEAST_LIKE = 1;
 
 /**
- * A record may end so soon after its last turn that no reading, or only one, shows the way back. Where the last leg
+ * A record may end so soon after its last turn that only a reading or two show the way back. Where the last leg
  * ends near the temperature at which the earlier ones turned, it is fitted with one switch more; the turn counts where
  * that fit knows it well, it is like the earlier ones, and its leg, carried on for half the usual spacing after the last
  * reading (which is when the record ends on average), reaches the threshold.
@@ -58,9 +60,11 @@ export function withLastTurn(
   const aheadC = located.aheadC(endS + 0.5 * view.widthS);
   const nowC = located.aheadC(endS);
   if (!found || aheadC === null || nowC === null) return extremes;
-  const missesK = Math.abs(nowC - view.tempsC[view.tempsC.length - 1]!);
+  const lastC = view.tempsC[view.tempsC.length - 1]!;
+  const missesK = Math.abs(nowC - lastC);
   if (missesK > END_SHARE * swingK + END_DEVIATIONS * noise.noiseK) return extremes;
   const sign = last.kind === 'valley' ? 1 : -1;
+  if (sign * (lastC - found.tempC) < BACK_SHARE * swingK) return extremes;
   const isWhole = sign * (aheadC - found.tempC) >= swingK;
   if (!isWhole || !isLike(found, likeC, greatK)) return extremes;
   return [...extremes.slice(0, -1), ...endedBy(last, found, view, nowC)];
