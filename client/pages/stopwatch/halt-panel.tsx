@@ -30,9 +30,9 @@ export function haltWords(facts: GuardFacts): { head: string; todo: string } {
   const { view, isGas, isHeatOff } = facts;
   if (view.says === 'unplug') {
     return {
-      head: isGas ? 'Shut the gas' : 'Pull the plug',
+      head: 'Pull the plug',
       todo: isGas
-        ? 'It climbs on with the heat off. Close the gas first, then pull the plug. Stay with it until it falls.'
+        ? 'It climbs on with the heat off. Pull the plug, then shut the gas. On a smell of gas touch no switch or plug: get people out and call the gas emergency line.'
         : 'It climbs on with the heat off. Pull the plug or open the breaker. Stay with it until it falls.',
     };
   }
