@@ -1,5 +1,5 @@
 import type { Random } from '#server/commands/heat-model/random.ts';
-import { hotMachine, unattended } from '../machines.ts';
+import { hotMachine } from '../machines.ts';
 import type { Maker, Told } from '../plan.ts';
 import { endAfterTurn } from './end-record.ts';
 
@@ -135,17 +135,14 @@ function hot(random: Random, cutOutF: Span, resetF: Span): Told {
   return { machine, ...turning(random, cutOutF, resetF, 1500) };
 }
 
-/** By so many °F over the record; the drift a cycle follows from how many cycles there are. */
+/** By so many °F over the record, which ends with the last of its rounds. */
 function drifts(random: Random, cutOutF: Span, totalF: Span, resetF: Span = [127, 131]): Told {
-  const driftTotalK = random.between(...totalF) / 1.8;
+  const cutOuts = Math.floor(random.between(6, 15));
+  const driftK = random.between(...totalF) / 1.8 / (cutOuts - 1);
   return {
-    ...turning(random, cutOutF, resetF, 1300),
-    faults: { scatterK: random.between(0.05, 0.3) },
-    finish: (plan) => {
-      const openings = unattended(plan.machine, plan.faults, plan.watch.forS).clicksS.length;
-      const driftK = driftTotalK / Math.max(3, openings - 2);
-      return { ...plan, faults: { ...plan.faults, driftK } };
-    },
+    ...turning(random, cutOutF, resetF),
+    faults: { scatterK: random.between(0.02, 0.15), driftK },
+    finish: (plan) => endAfterTurn(plan, 2 * cutOuts - 1, 25),
   };
 }
 
