@@ -76,7 +76,7 @@ function codesWith(seen: SeenRun, turns: TrueTurn[]) {
   const possible = codesOf(signs, 'possible');
   if (certain.length > 0) return { expected: certain, allowed: possible };
   const outside = limit !== 'no' && codesOf(thermostat, 'certain').length > 0;
-  const unnamed = outside ? [] : unnamedFor(slow, points, seen);
+  const unnamed = unnamedFor(slow, points, seen).filter((code) => !outside || code === 'too-short');
   if (possible.length === 0 && unnamed.length === 1) return { expected: unnamed, allowed: [] };
   return { expected: [], allowed: [...possible, ...unnamed] };
 }
