@@ -75,8 +75,10 @@ test('a log becomes a judged run that can be looked at', async () => {
     outcome: 'proven',
     findings: [{ code: 'in-band' }],
   });
-  for (const { tempC } of run.analysis.analysis.cutOuts) {
-    expect(Math.abs(tempC - 68.33)).toBeLessThan(1);
+  // It turns at the first reading at or over 155 °F (68.33 °C): at 50 °F to go and τ = 150 s at most 1.7 °F over it.
+  for (const { tempC, uK } of run.analysis.analysis.cutOuts) {
+    expect(tempC).toBeGreaterThan(68.33 - uK);
+    expect(tempC).toBeLessThan(68.33 + 1.7 / 1.8 + uK);
   }
   expect(await readdir(join(app.dataDir, 'staged'))).toEqual([]);
 });
