@@ -9,6 +9,8 @@ const OFF_MARKS: MarkKind[] = ['heat-off', 'stopped', 'door'];
 const TAPPED_LATE_S = 3;
 /** A cut-out shows at the probe within this of its click; heat turned off later than that made the turn itself, s. */
 const CLICK_TURNS_S = 20;
+/** Up past the band's allowance the exhaust is level, and its highest moment may lie so long before the mark, s. */
+const LEVEL_EARLY_S = 20;
 /** A machine that starts again after its door was shut heats on; a peak later than this is its own, s. */
 const DOOR_TURNS_S = 45;
 /** A last peak this far off the only other cut-out is no cut-out of the same thermostat, K (4 °F). */
@@ -32,7 +34,9 @@ export function classifyTurns(
   const lateS = Math.max(TAPPED_LATE_S, 0.5 * spacingS);
   const turned = extremes.map((extreme, i): Extreme => {
     if (extreme.turnedBy !== 'machine') return extreme;
-    return { ...extreme, turnedBy: byPerson(extremes, i, marks, lateS) ? 'person' : 'machine' };
+    const isUpThere = rating !== null && extreme.tempC > bandOf('cut-out', rating).highEndC;
+    const lateHereS = isUpThere ? Math.max(lateS, LEVEL_EARLY_S) : lateS;
+    return { ...extreme, turnedBy: byPerson(extremes, i, marks, lateHereS) ? 'person' : 'machine' };
   });
   const lost = lostForGood(turned, rating);
   let cutOutSeen = false;

@@ -37,10 +37,20 @@ function runsAway(leg: RunLeg, upThere: Extreme[], facts: RunFacts, rating: Rati
   if (to.tempC >= rating.highLimitC) return true;
   const uK = Math.min(totalU(facts, to), totalU(facts, { ...to, uK: 2 * facts.noiseK }));
   const reachedC = Math.min(to.tempC, highestShown(leg, facts));
-  if (reachedC - uK <= highEndC && !staysAbove(leg, facts, highEndC)) return false;
+  const isAbove = reachedC - uK > highEndC || staysAbove(leg, facts, highEndC);
+  if (!isAbove) return reachedC > highEndC && keptComing(leg, reachedC - uK, facts, rating);
   if (to.turnedBy === 'machine') return upThere.every((own) => own === to) && !comesBack(facts, to);
   const highestC = upThere.reduce((high, { tempC }) => Math.max(high, tempC), -Infinity);
   return to.tempC > highestC + BEYOND_OWN_K + uK;
+}
+
+/**
+ * The thermostat was seen to open in its band, and the heat went on for certain beyond it until a person or the record
+ * ended it: two signs, so that the best estimate up there need not be known beyond its uncertainty.
+ */
+function keptComing(leg: RunLeg, lowestC: number, facts: RunFacts, rating: Rating): boolean {
+  if (leg.to.turnedBy === 'machine' || lowestC <= bandOf('cut-out', rating).highC) return false;
+  return clickInBand(leg, facts, rating) !== undefined || kneeInBand(leg, facts, rating) !== null;
 }
 
 /** The highest that the smoothed record shows in a leg, with its noise, °C: where a fit alone goes higher, it errs. */

@@ -86,6 +86,21 @@ describe('a turn made by a person', () => {
     expect(turned[1]).toBe('person');
   });
 
+  test('up past the allowance the highest moment of a level stretch may lie well before the mark', () => {
+    const levelAt = (tempF: number) =>
+      turnedBy(
+        [
+          [0, 70],
+          [400, tempF],
+          [700, 90],
+        ],
+        [heatOff(412)],
+      )[1];
+
+    expect(levelAt(173)).toBe('person');
+    expect(levelAt(157)).toBe('machine');
+  });
+
   test('a door that was shut again long before the peak made no turn', () => {
     const turned = turnedBy(CYCLING, [{ timeS: 410, kind: 'door' }]);
 

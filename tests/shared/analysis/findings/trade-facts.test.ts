@@ -59,6 +59,20 @@ describe('a hand-timed record, every 12 s in whole degrees', () => {
     });
   });
 
+  test('a click at 155 and heat that holds 172 until it is turned off: a runaway though the probe is good to 3 only', () => {
+    const probe = { accuracyK: 3 / 1.8, calibrationUK: 0, correction: null, responseS: null };
+    const click: Mark = { timeS: 330, kind: 'click' };
+    const series = readRun([heat(155, 330, 220), heat(172, 240, 172.4), cool(110, 150)]);
+
+    const heard = judge(series, { probe, marks: [click, offAt(570)] });
+    const unheard = judge(series, { probe, marks: [offAt(570)] });
+
+    expect(heard.findings[0]).toMatchObject({ code: 'runaway', evidence: { afterTrip: true } });
+    expect(heard.outcome).toBe('stop');
+    // Without either sign 172 ± 3.5 °F may still be overshoot within the allowance of 170.
+    expect(codesOf(unheard)).not.toContain('runaway');
+  });
+
   test('still on its way at 176 when the record ends is a runaway too', () => {
     const analysis = judge(readRun([heat(176, 480, 215)]));
 
