@@ -65,7 +65,7 @@ function falling(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Ev
   return (
     hangs(leg, falls, facts, rating) ??
     slowFall(leg, falls.undisturbed, facts) ??
-    levelsOff(leg, facts, rating) ??
+    levelsOff(leg, falls, facts, rating) ??
     keepsOffRoom(leg, falls, facts, rating)
   );
 }
@@ -142,9 +142,12 @@ function wholeFalls({ legs, spacingS }: RunFacts, rating: Rating): RunLeg[] {
   return sure.length > 0 ? sure : whole;
 }
 
-function levelsOff(leg: RunLeg, facts: RunFacts, rating: Rating): Evidence | null {
+/** An end of a fall that is shorter than the machine's own falls says nothing: air first, drum later, it only looks level. */
+function levelsOff(leg: RunLeg, falls: Falls, facts: RunFacts, rating: Rating): Evidence | null {
   const { fit, to } = leg;
   if (!fit || to.turnedBy !== 'end') return null;
+  const usualS = usualOff(leg, falls, facts, rating);
+  if (usualS !== null && lasted(leg, facts) < LONG_FALL_TIMES * usualS) return null;
   if (lasted(leg, facts) < Math.max(SETTLED_S, fit.tauS)) return null;
   const lowestC = fit.asymptoteC - 2 * fit.asymptoteErrorK - totalU(facts, to);
   if (lowestC <= bandOf('reset', rating).lowC) return null;

@@ -3,7 +3,6 @@ import { fitResponse } from '../fit-response.ts';
 import { bandOf } from '../judge-point.ts';
 import type { Rating } from '../rating.ts';
 import type { Extreme, RunFacts, RunLeg } from '../run-facts.ts';
-import { median } from '../statistics/quantile.ts';
 import { ALIKE_PEAKS_K } from './slow-fall.ts';
 import { firstCrossing, hidesTurn, isDisturbed, lasted, spanWithTail, totalU } from './trace.ts';
 
@@ -75,8 +74,9 @@ function risesAgain(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   const highestC = own.reduce((high, { tempC }) => Math.max(high, tempC), highC);
   if (from.tempC - totalU(facts, from) > highestC + ALIKE_PEAKS_K) return true;
   // Over its own resets by less, but for much longer than it ever heated.
-  const isLong = facts.cycles.length > 0 && lastedS > LONG_TIMES * longestOn(facts);
-  return isLong && from.tempC > highC && own.every((reset) => standsOver(from, reset));
+  const isLong = lastedS > LONG_TIMES * longestOn(facts);
+  const leastC = facts.cycles.length > 0 ? from.tempC : from.tempC - totalU(facts, from);
+  return isLong && leastC > highC && own.every((reset) => standsOver(from, reset));
 }
 
 /** Whether a valley lies over a reset of the same probe by more than both are uncertain, and a little. */
@@ -84,8 +84,11 @@ function standsOver(valley: Extreme, reset: Point): boolean {
   return valley.tempC - reset.tempC > Math.hypot(valley.uK, reset.uK) + OVER_OWN_K;
 }
 
-function longestOn({ cycles }: RunFacts): number {
-  return cycles.reduce((longestS, { onS }) => Math.max(longestS, onS), 0);
+/** With no cycle to go by, the first rise from cold, which is longer than any, s. */
+function longestOn({ cycles, legs }: RunFacts): number {
+  if (cycles.length > 0) return cycles.reduce((longestS, { onS }) => Math.max(longestS, onS), 0);
+  const first = legs.find(({ fromCold }) => fromCold);
+  return first ? first.to.timeS - first.from.timeS : Infinity;
 }
 
 /** The last rise reached the machine's own cut-outs and stayed there, under the allowance, with none. */
@@ -94,9 +97,10 @@ function staysAtTop(leg: RunLeg, facts: RunFacts, rating: Rating): boolean {
   if (to.turnedBy !== 'end' || hidesTurn(leg, facts)) return false;
   const own = facts.cutOuts.filter(({ timeS }) => timeS < leg.to.timeS);
   if (own.length === 0) return false;
-  const ownC = median(own.map(({ tempC }) => tempC));
+  // The lower bound of the least of them: what stays there has opened the thermostat once before.
+  const leastC = own.reduce((least, { tempC, uK }) => Math.min(least, tempC - uK), Infinity);
   const span = spanWithTail(leg, facts);
-  const reachedS = firstCrossing(facts, span, ownC, 'up');
+  const reachedS = firstCrossing(facts, span, leastC, 'up');
   if (reachedS === null || span.toS - reachedS < SETTLED_S) return false;
   if (to.tempC > bandOf('cut-out', rating).highEndC) return false;
   return true;

@@ -122,3 +122,25 @@ describe('a hand-timed record, every 12 s in whole degrees', () => {
     expect(analysis.outcome).toBe('stop');
   });
 });
+
+test('opened once at 152, and then at 146 for 15 minutes: heat that stays on', () => {
+  const series = readRun([heat(152, 145, 230), cool(139, 55, 137), heat(146, 900, 146.5)]);
+
+  const analysis = judge(series);
+
+  expect(codesOf(analysis)).toContain('heat-stays-on');
+  expect(analysis.outcome).toBe('stop');
+});
+
+test('a record that ends half-way down a wide fall is not one that levels off', () => {
+  const wide = { ...DEFAULT_RATING, closesC: toCelsius(104, 'F') };
+  const slow = (inS: number, toF: number) => cool(toF, inS, 90);
+  const rounds = [155, 156, 155].flatMap((cutOutF, i) => [
+    heat(cutOutF, i === 0 ? 280 : 200),
+    slow(220, 104),
+  ]);
+
+  const analysis = judge(readRun([...rounds, heat(155, 200), slow(125, 118)]), { rating: wide });
+
+  expect(codesOf(analysis)).toEqual(['in-band']);
+});
