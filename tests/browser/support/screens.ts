@@ -182,7 +182,12 @@ export const SCREENS: Screen[] = [
     open: at(({ rating }) => `/ratings/${rating}`),
     standing: /where the heat should stop/,
   },
-  { name: 'new probe', person: 'nora', open: at('/probes/new'), standing: /Response time in moving air/ },
+  {
+    name: 'new probe',
+    person: 'nora',
+    open: at('/probes/new'),
+    standing: /Response time in moving air/,
+  },
   { name: 'shop', person: 'nora', open: at('/shop'), standing: /may sign in/ },
   {
     name: 'add a person',

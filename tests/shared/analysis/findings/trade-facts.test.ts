@@ -140,7 +140,9 @@ test('a record that ends half-way down a wide fall is not one that levels off', 
     slow(220, 104),
   ]);
 
-  const analysis = judge(readRun([...rounds, heat(155, 200), slow(125, 118)]), { rating: wide });
+  const analysis = judge(readRun([...rounds, heat(155, 200), cool(110, 125, 104.5)]), {
+    rating: wide,
+  });
 
   expect(codesOf(analysis)).toEqual(['in-band']);
 });
