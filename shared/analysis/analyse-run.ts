@@ -7,7 +7,7 @@ import type { RunFacts, RunLeg } from './run-facts.ts';
 import type { Series } from './series.ts';
 
 /** Of the engine; a stored analysis carries the one that made it. */
-export const ANALYSIS_VERSION = '1';
+export const ANALYSIS_VERSION = '2';
 
 /**
  * A run judged: readings in, points, legs, findings and outcome out.
