@@ -3,6 +3,7 @@ import type { Noise } from './estimate-noise.ts';
 import type { Series } from './series.ts';
 import { quantile } from './statistics/quantile.ts';
 import { boundByReadings } from './turns/bound-by-readings.ts';
+import { isCredible, NOISE_SWING } from './turns/is-credible.ts';
 import { findExtremes } from './turns/find-extremes.ts';
 import { firstAtOrAfter } from './first-at-or-after.ts';
 import { withLastTurn } from './turns/find-last-turn.ts';
@@ -17,14 +18,8 @@ const CLEAR_SHARE = 0.1;
 const FEW_READINGS = 12;
 const LEVEL_STEP = 1.25;
 const MOST_ROUNDS = 4;
-/** A located turn lies within this share of its smaller swing from the reading. */
-const CREDIBLE_SHARE = 0.5;
 /** Nor is it less certain than this share of the greater swing beside it: it may have missed some of the smaller. */
 const MOST_U_SHARE = 0.5;
-/** A fit this sure of a turn, as a share of the greater swing beside it, is believed wherever the readings lie. */
-const SURE_SHARE = 0.1;
-/** Noise makes swings of this many deviations. */
-const NOISE_SWING = 8;
 
 /**
  * All extremes of a record whose swings reach the threshold, located by a fit of lagged first-order legs.
@@ -119,23 +114,6 @@ function swingsBeside(turns: { tempC: number }[], i: number): [number, number] {
   const beforeK = Math.abs(tempC - turns[i - 1]!.tempC);
   const afterK = Math.abs(tempC - turns[i + 1]!.tempC);
   return [Math.min(beforeK, afterK), Math.max(beforeK, afterK)];
-}
-
-/**
- * A fit that ends far from the readings of a swing that is no noise, or says that it knows nothing of it, is no better
- * than the reading; nor is one further off than the greater swing beside it, however sure of itself. Else a swing that
- * noise could make is left to the fit, which shows how little of it is real.
- */
-function isCredible(
-  { tempC, uK }: LocatedTurn,
-  readC: number,
-  swing: number,
-  greaterK: number,
-  noiseK: number,
-) {
-  if (Math.abs(tempC - readC) > greaterK + NOISE_SWING * noiseK) return false;
-  if (uK < SURE_SHARE * greaterK || swing < NOISE_SWING * noiseK) return true;
-  return Math.abs(tempC - readC) < CREDIBLE_SHARE * swing && uK < swing;
 }
 
 /**
