@@ -2,15 +2,10 @@ import type { BinnedView } from '../run-facts.ts';
 import { median } from '../statistics/quantile.ts';
 import type { FittedLegs } from './fit-legs.ts';
 import { LN_TAU_COOL, LN_TAU_HEAT, lagsOf, placeOfRamp } from './lagged-legs.ts';
-import {
-  createQuickBench,
-  locateQuickly,
-  type QuickBench,
-  type QuickTask,
-  type QuickTurn,
-} from './locate-quickly.ts';
+import { locateQuickly, type QuickTask, type QuickTurn } from './locate-quickly.ts';
 import type { LocatedTurn, RoughTurn } from './locate-turns.ts';
 import type { FitWindow } from './plan-windows.ts';
+import { createQuickBench, type QuickBench } from './quick-bench.ts';
 import { tabulateTurn, type TurnShape } from './turn-shape.ts';
 
 /** What a joint fit of one window taught. */
