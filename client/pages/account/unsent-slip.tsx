@@ -1,6 +1,6 @@
-import { useEffect, useRef, useState } from 'react';
+import { useState } from 'react';
 import { Key } from '../../components/key.tsx';
-import { WatchSign } from '../../components/signs.tsx';
+import { SlipFrame } from '../../components/slip-frame.tsx';
 import { sendNow, thisDevice, useSending, useUnsent } from '../../device/this-device.ts';
 import { useSession } from '../frame/session-context.ts';
 import { saveThings } from '../unsent/save-things.ts';
@@ -14,12 +14,6 @@ export function UnsentSlip({ onLeave, onBack }: UnsentSlipProps) {
   const { unsent, conflict, refused } = useUnsent();
   const { isSending, outcome } = useSending();
   const [isSaved, setIsSaved] = useState(false);
-  const slip = useRef<HTMLDialogElement>(null);
-  useEffect(() => {
-    const dialog = slip.current;
-    dialog?.showModal();
-    return () => dialog?.close();
-  }, []);
   const count = unsent + conflict + refused;
   const save = async () => {
     const states = ['unsent', 'conflict', 'refused'] as const;
@@ -28,21 +22,10 @@ export function UnsentSlip({ onLeave, onBack }: UnsentSlipProps) {
     setIsSaved(true);
   };
   return (
-    <dialog
-      ref={slip}
-      aria-labelledby="unsent-question"
-      onCancel={(event) => {
-        event.preventDefault();
-        onBack();
-      }}
-      className="mx-auto mt-auto mb-0 w-full max-w-site border-t-slip border-ink bg-deck px-4 py-5 text-ink backdrop:bg-ink/40 desk:my-auto"
+    <SlipFrame
+      head={count === 0 ? 'Everything is with the shop now.' : countWords(count)}
+      onBack={onBack}
     >
-      <div className="grid grid-cols-[44px_minmax(0,1fr)] items-center gap-3">
-        <WatchSign className="size-[42px] text-watch" />
-        <h2 id="unsent-question" className="font-serif text-finding leading-[1.12]">
-          {count === 0 ? 'Everything is with the shop now.' : countWords(count)}
-        </h2>
-      </div>
       <div role="status" className="pt-2.5 pb-3.5 text-say">
         {count > 0 && sentence(isSaved, isSending ? null : outcome)}
       </div>
@@ -66,7 +49,7 @@ export function UnsentSlip({ onLeave, onBack }: UnsentSlipProps) {
           Go back
         </Key>
       </div>
-    </dialog>
+    </SlipFrame>
   );
 }
 

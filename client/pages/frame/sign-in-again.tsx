@@ -1,9 +1,10 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useEffect, useRef, useState, type SubmitEvent } from 'react';
+import { useEffect, useState, type SubmitEvent } from 'react';
 import { SIGNED_OUT_EVENT } from '../../api/query-client.ts';
 import { useSignIn } from '../../api/sign-in.ts';
 import { Cells, TextField } from '../../components/field.tsx';
 import { Key } from '../../components/key.tsx';
+import { useModal } from '../../components/use-modal.ts';
 
 /**
  * Where the server no longer knows who this is (signed out elsewhere, idle too long), a slip asks for the password
@@ -22,13 +23,7 @@ export function SignInAgain({ email }: { email: string }) {
 function SignInSlip({ email, onSignedIn }: { email: string; onSignedIn: () => void }) {
   const queryClient = useQueryClient();
   const signIn = useSignIn();
-  const slip = useRef<HTMLDialogElement>(null);
-  useEffect(() => {
-    const dialog = slip.current;
-    dialog?.showModal();
-    dialog?.querySelector<HTMLInputElement>('input[type=password]')?.focus();
-    return () => dialog?.close();
-  }, []);
+  const modal = useModal('input[type=password]');
 
   function handleSubmit(event: SubmitEvent<HTMLFormElement>) {
     event.preventDefault();
@@ -46,7 +41,7 @@ function SignInSlip({ email, onSignedIn }: { email: string; onSignedIn: () => vo
 
   return (
     <dialog
-      ref={slip}
+      ref={modal}
       aria-labelledby="sign-in-again"
       onCancel={(event) => event.preventDefault()}
       className="mx-auto mt-auto mb-0 w-full max-w-site border-t-slip border-ink bg-deck px-4 py-5 text-ink backdrop:bg-ink/40 desk:my-auto"

@@ -1,19 +1,15 @@
-import { useEffect, useRef, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import { Key } from '../../components/key.tsx';
+import { useModal } from '../../components/use-modal.ts';
 
 type PanelProps = { heading: string; onClose: () => void; children: ReactNode; close?: string };
 
 /** A slip of keys that rises from the deck; what goes on behind it goes on. */
 export function Panel({ heading, onClose, children, close = 'Go back' }: PanelProps) {
-  const dialog = useRef<HTMLDialogElement>(null);
-  useEffect(() => {
-    const slip = dialog.current;
-    slip?.showModal();
-    return () => slip?.close();
-  }, []);
+  const modal = useModal();
   return (
     <dialog
-      ref={dialog}
+      ref={modal}
       aria-labelledby="panel-heading"
       onCancel={(event) => {
         event.preventDefault();

@@ -2,6 +2,7 @@ import { useState, type ReactNode } from 'react';
 import type { RunEventOf } from '#shared/recorder/run-event.ts';
 import { specifiedFor } from '#shared/judging/judging-for.ts';
 import { RUN_CAUTIONS, SAFETY_LINE } from '#shared/wording/safety-lines.ts';
+import { CautionTicks } from '../../components/caution-ticks.tsx';
 import { SelectField } from '../../components/field.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
@@ -148,34 +149,13 @@ export function StartPage(props: StartPageProps) {
 }
 
 function Cautions({ onTick }: { onTick: () => void }) {
-  const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set());
-  function handleTick(caution: string, isTicked: boolean): void {
-    const next = new Set(ticked);
-    if (isTicked) next.add(caution);
-    else next.delete(caution);
-    setTicked(next);
-    if (next.size === RUN_CAUTIONS.length) onTick();
-  }
+  const [ticked, setTicked] = useState(0);
   return (
     <section aria-labelledby="cautions" className="pb-5">
-      <SectionHead site id="cautions" state={`${ticked.size} of ${RUN_CAUTIONS.length}`}>
+      <SectionHead site id="cautions" state={`${ticked} of ${RUN_CAUTIONS.length}`}>
         Safety first
       </SectionHead>
-      <ul>
-        {RUN_CAUTIONS.map((caution) => (
-          <li key={caution} className="border-b border-hair">
-            <label className="words flex min-h-main cursor-pointer items-center gap-4 py-2 text-[17px] leading-[1.25] font-medium">
-              <input
-                type="checkbox"
-                className="!size-7"
-                checked={ticked.has(caution)}
-                onChange={(event) => handleTick(caution, event.target.checked)}
-              />
-              {caution}
-            </label>
-          </li>
-        ))}
-      </ul>
+      <CautionTicks onCount={setTicked} onAll={onTick} />
     </section>
   );
 }

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { CHECK_CAUTIONS, RUN_CAUTIONS, SAFETY_LINE } from '#shared/wording/safety-lines.ts';
+import { CautionTicks } from '../../components/caution-ticks.tsx';
 import { Key } from '../../components/key.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
@@ -36,7 +37,6 @@ function tickNow(visitId: string) {
 }
 
 function CautionsToTick({ visitId }: { visitId: string }) {
-  const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set());
   const [isKeeping, setIsKeeping] = useState(false);
   const [error, setError] = useState<Error | null>(null);
 
@@ -49,32 +49,9 @@ function CautionsToTick({ visitId }: { visitId: string }) {
       .finally(() => setIsKeeping(false));
   }
 
-  function handleTick(caution: string, isTicked: boolean) {
-    const next = new Set(ticked);
-    if (isTicked) next.add(caution);
-    else next.delete(caution);
-    setTicked(next);
-    if (next.size === RUN_CAUTIONS.length) keep();
-  }
-
   return (
     <>
-      <ul>
-        {RUN_CAUTIONS.map((caution) => (
-          <li key={caution} className="border-b border-hair">
-            <label className="words flex min-h-main cursor-pointer items-center gap-4 py-2 text-[17px] leading-[1.25] font-medium">
-              <input
-                type="checkbox"
-                className="!size-7"
-                checked={ticked.has(caution)}
-                disabled={isKeeping}
-                onChange={(event) => handleTick(caution, event.target.checked)}
-              />
-              <span>{caution}</span>
-            </label>
-          </li>
-        ))}
-      </ul>
+      <CautionTicks isDisabled={isKeeping} onAll={keep} />
       {error && (
         <Notice kind="stop" role="alert" head={error.message} className="mt-3">
           <div className="pt-3">
