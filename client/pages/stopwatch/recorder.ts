@@ -88,6 +88,12 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
     return elapsedS(clock, parts.now().monoMs);
   }
 
+  /** What the phone's clock said at that second: a run that is opened again goes on from both. */
+  function wallAt(atS: number): number {
+    const { monoMs, wallMs } = parts.now();
+    return wallMs - (elapsedS(clock, monoMs) - atS) * 1000;
+  }
+
   /** @returns whether it was kept */
   function record(happening: Happening, atS = atNow()): Promise<boolean> {
     const kept = queue.then(() => keepNext(happening, atS));
@@ -103,7 +109,7 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
       runId: run.start.runId,
       n: run.last.n + 1,
       atS,
-      wallMs: parts.now().wallMs,
+      wallMs: wallAt(atS),
     };
     try {
       await parts.keep(event);

@@ -98,6 +98,20 @@ test('an hour with the page gone is an hour, marked as the phone’s clock', asy
   expect(again.recording().run.readings).toHaveLength(1);
 });
 
+test('time goes on right where the last thing was kept long after its first key was touched', async () => {
+  const phone = aPhone();
+  const first = await begun(phone);
+  phone.pass(60_000);
+  const downAtS = first.at();
+  phone.pass(20_000);
+  await first.mark('note', downAtS, 'Lint on the hood');
+  phone.reopen(40_000);
+
+  const again = openRecorder(phone.parts, phone.kept, false);
+
+  expect(again.at()).toBeCloseTo(120, 6);
+});
+
 test('the phone’s clock set by an hour is flagged and not added', async () => {
   const phone = aPhone();
   const recorder = await begun(phone);
