@@ -5,6 +5,7 @@
 const BENCHES: Record<string, () => Promise<{ bench: (args: string[]) => void | Promise<void> }>> =
   {
     accuracy: () => import('./accuracy/accuracy.ts'),
+    guard: () => import('./guard/guard.ts'),
     damage: () => import('./damage/damage.ts'),
     reading: () => import('./reading/reading.ts'),
     chart: () => import('./chart/chart.ts'),

@@ -26,10 +26,10 @@ export type ReadRun = {
 };
 
 /** Every run of the seeds, plans and methods asked for; a plan is simulated once and read by all. */
-export function* makeRuns(asked: AccuracyArguments): Generator<ReadRun> {
+export function* makeRuns(asked: AccuracyArguments, ways = METHODS): Generator<ReadRun> {
   for (let seed = asked.from; seed < asked.from + asked.seeds; seed++) {
     for (const [p, plan] of plansOf(seed, asked.plan).entries()) {
-      const methods = METHODS.filter(
+      const methods = ways.filter(
         ({ name, spacingS }, m) =>
           name.includes(asked.method) &&
           spacingS <= plan.mostSpacingS &&
@@ -43,10 +43,16 @@ export function* makeRuns(asked: AccuracyArguments): Generator<ReadRun> {
 function* readPlan(plan: Plan, seed: number, methods: Method[]): Generator<ReadRun> {
   const whole = simulateRun(plan.machine, plan.faults, plan.watch, createRandom(seed));
   for (const method of methods) {
-    const random = createRandom(seed * 7919 + 31 * METHODS.indexOf(method) + plan.name.length);
+    const random = createRandom(seed * 7919 + 31 * numberOf(method) + plan.name.length);
     const run = readRun(plan, whole, method, random);
     if (!isTooCoarse(run.seen)) yield { seed, ...run };
   }
+}
+
+/** Its place in the table, the first one after it for a way that stands in none: the same readings each time. */
+function numberOf(method: Method): number {
+  const at = METHODS.indexOf(method);
+  return at < 0 ? METHODS.length : at;
 }
 
 function readRun(plan: Plan, whole: ModelRun, method: Method, random: Random) {

@@ -49,6 +49,9 @@ export const METHODS: Method[] = [
   hand('hand 20 s', { spacingS: 20, hurryS: 3, step: 1 }, 1.5),
 ];
 
+/** Slower than a person is asked to read; played along the guard alone. */
+export const HAND_30_S: Method = hand('hand 30 s', { spacingS: 30, hurryS: 4, step: 1 }, 2);
+
 function probe(name: string, { noiseF = 0.2, pointUF = 0.2, ...told }: ProbeTold): Method {
   const method: ProbeMethod = { ...PROBE, ...told, noiseK: noiseF / 1.8 };
   return {
