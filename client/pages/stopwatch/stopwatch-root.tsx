@@ -1,37 +1,35 @@
-import { lazy, Suspense, useEffect, useState, useSyncExternalStore } from 'react';
+import { useEffect, useState, type ComponentType } from 'react';
 import { replayRun } from '#shared/recorder/replay-run.ts';
 import type { RunEvent } from '#shared/recorder/run-event.ts';
 import { ApiError } from '../../api/http.ts';
 import { Key } from '../../components/key.tsx';
-import { holdUpdates } from '../../device/recording-hold.ts';
-import { newId } from '../../device/new-id.ts';
+import { findRunning, letGoOfRun, listKeptRuns } from '../../device/kept-runs.ts';
 import { startDevice } from '../../device/start-device.ts';
-import { keepThing, onAnswers, serverClock, thisDevice } from '../../device/this-device.ts';
-import { guardSetupOf } from './judge-run.ts';
-import { findRunning, keepRunEvent, letGoOfRun, listKeptRuns } from '../../device/kept-runs.ts';
+import { keepThing, thisDevice } from '../../device/this-device.ts';
+import { PlainPage } from './plain-page.tsx';
 import { loadPreferences, keepPreferences } from './preferences.ts';
-import { fetchPanels } from './lazy-panels.tsx';
-import { beginRun, openRecorder, type Recorder } from './recorder.ts';
-import { RunningPage } from './running-page.tsx';
+import type { Recorder } from './recorder.ts';
 import { createSounds } from './sounds.ts';
 import { findSession, findSources, type Sources } from './sources.ts';
 import { StartPage, type NewRun } from './start-page.tsx';
+import type { TakeRunProps } from './take-run.tsx';
 import { useOnlyTab } from './use-only-tab.ts';
 import './stopwatch.css';
 
-const OutcomePage = lazy(async () => ({
-  default: (await import('./outcome-page.tsx')).OutcomePage,
-}));
+/** What a run needs comes behind the page that begins one: the cautions can be read meanwhile. */
+const fetchTaking = () => import('./take-run.tsx');
 
 startDevice();
 const sounds = createSounds();
-const now = () => ({ monoMs: performance.now(), wallMs: Date.now() });
+
+/** A run, and the page that takes it. */
+type Taking = { recorder: Recorder; TakeRun: ComponentType<TakeRunProps> };
 
 /** What is known once the page is open. */
 type Opened = {
   sources: Sources;
   /** The run that goes on, if there is one. */
-  recorder: Recorder | null;
+  taking: Taking | null;
   isTicked: boolean;
 };
 type Opening =
@@ -51,25 +49,25 @@ export function StopwatchRoot() {
 
   if (tab === 'taken') {
     return (
-      <Plain head="A run is being taken in another tab.">
+      <PlainPage head="A run is being taken in another tab.">
         <p className="pb-4 text-say">
           Readings are taken in one place only, so that nothing is doubled. Close the other tab, and
           this one goes on.
         </p>
-      </Plain>
+      </PlainPage>
     );
   }
   if (page.state === 'failed') {
     return (
-      <Plain head="The stopwatch did not open." isAlert>
+      <PlainPage head="The stopwatch did not open." isAlert>
         <p className="pb-4 text-say">{page.words}</p>
         <Key size="site" onClick={() => window.location.reload()}>
           Try again
         </Key>
-      </Plain>
+      </PlainPage>
     );
   }
-  if (page.state === 'opening') return <Plain head="Opening the stopwatch…" />;
+  if (page.state === 'opening') return <PlainPage head="Opening the stopwatch…" />;
   return <Stopwatch opened={page.opened} />;
 }
 
@@ -85,10 +83,23 @@ async function open(): Promise<Opened> {
   const [start] = running ?? [];
   // A run that goes on is opened wherever it was begun.
   const sources = await findSources(session, start?.kind === 'start' ? start.visitId : visitId);
-  const recorder = running && recorderOf(running, false, sources);
-  recorder?.noteReopened();
+  const taking = running && (await goOn(sources, running));
   const { safetyTickedAtMs } = sources.visit;
-  return { sources, recorder, isTicked: safetyTickedAtMs !== null || (await wasTicked(visitId)) };
+  return { sources, taking, isTicked: safetyTickedAtMs !== null || (await wasTicked(visitId)) };
+}
+
+async function goOn(sources: Sources, events: RunEvent[]): Promise<Taking> {
+  const { TakeRun, goOnWithRun } = await fetchTaking();
+  return { TakeRun, recorder: goOnWithRun(sources, events) };
+}
+
+/** @throws {Error} in words for the page: nothing was begun */
+async function begin(sources: Sources, run: NewRun, downMonoMs: number): Promise<Taking> {
+  const { TakeRun, startRun } = await fetchTaking().catch((error: unknown) => {
+    const words = 'The stopwatch was not fetched whole. Reload the page where there is a network.';
+    throw new Error(words, { cause: error });
+  });
+  return { TakeRun, recorder: await startRun(sources, run, downMonoMs) };
 }
 
 /** The server knows this session no longer: the sign-in leads back here. */
@@ -126,8 +137,8 @@ function Stopwatch({ opened }: { opened: Opened }) {
   const [isTicked, setIsTicked] = useState(opened.isTicked);
   const [problem, setProblem] = useState<string | null>(null);
   const [preferences, setPreferences] = useState(loadPreferences);
-  const [recorder, setRecorder] = useState(opened.recorder);
-  useEffect(fetchWhatComesLater, []);
+  const [taking, setTaking] = useState(opened.taking);
+  useEffect(fetchTheRest, []);
 
   function handlePrefer(next: typeof preferences): void {
     keepPreferences(next);
@@ -141,119 +152,35 @@ function Stopwatch({ opened }: { opened: Opened }) {
   }
   function handleStart(run: NewRun, downMonoMs: number): void {
     sounds.wake();
-    beginRun({ keep: keepRunEvent, newId, now }, run, downMonoMs)
-      .then((start) => setRecorder(recorderOf([start], true, sources)))
+    begin(sources, run, downMonoMs)
+      .then(setTaking)
       .catch((error: unknown) => setProblem(wordsOf(error)));
   }
 
-  if (recorder) {
-    return (
-      <OfRun
-        recorder={recorder}
-        sources={sources}
-        preferences={preferences}
-        onPrefer={handlePrefer}
-        onAnother={() => setRecorder(null)}
-      />
-    );
+  const preferring = { preferences, onPrefer: handlePrefer };
+  if (taking) {
+    const { TakeRun, recorder } = taking;
+    const onAnother = () => setTaking(null);
+    return <TakeRun {...preferring} {...{ recorder, sources, sounds, onAnother }} />;
   }
   return (
     <StartPage
+      {...preferring}
       sources={sources}
       isTicked={isTicked}
       runs={sources.visit.runs.length}
       problem={problem}
-      preferences={preferences}
-      onPrefer={handlePrefer}
       onTick={handleTick}
       onStart={handleStart}
     />
   );
 }
 
-function recorderOf(events: RunEvent[], isNew: boolean, sources: Sources): Recorder {
-  const guardSetup = (run: Parameters<typeof guardSetupOf>[1]) => guardSetupOf(sources, run);
-  return openRecorder({ keep: keepRunEvent, newId, now, guardSetup }, events, isNew);
-}
-
-type OfRunProps = {
-  recorder: Recorder;
-  sources: Sources;
-  preferences: ReturnType<typeof loadPreferences>;
-  onPrefer: (next: ReturnType<typeof loadPreferences>) => void;
-  onAnother: () => void;
-};
-
-function OfRun({ recorder, sources, preferences, onPrefer, onAnother }: OfRunProps) {
-  const { run } = useSyncExternalStore(recorder.subscribe, recorder.recording);
-  const isOver = run.end !== null || run.isThrownAway;
-  useEffect(() => (isOver ? undefined : holdUpdates()), [isOver]);
-  useEffect(() => (isOver ? undefined : checkClock(recorder)), [isOver, recorder]);
-
-  if (run.isThrownAway) {
-    return (
-      <Plain head="The run was thrown away.">
-        <Key size="site" onClick={onAnother}>
-          Take another
-        </Key>
-      </Plain>
-    );
-  }
-  if (run.end) {
-    return (
-      <Suspense fallback={<Plain head="Looking at the run…" />}>
-        <OutcomePage run={run} sources={sources} onAnother={onAnother} />
-      </Suspense>
-    );
-  }
-  return (
-    <RunningPage
-      recorder={recorder}
-      sources={sources}
-      sounds={sounds}
-      preferences={preferences}
-      onPrefer={onPrefer}
-    />
-  );
-}
-
-/** As soon as the page stands, so that neither the run nor its end needs a network. */
-function fetchWhatComesLater(): void {
-  const quietly = () => {};
-  fetchPanels();
-  import('./outcome-page.tsx').catch(quietly);
-  import('#shared/analysis/analyse-run.ts').catch(quietly);
-}
-
-const CHECK_EVERY_MS = 60_000;
-
-/** What the server's clock says is put beside the run's own, a minute apart at least. */
-function checkClock(recorder: Recorder): () => void {
-  let lastMs = -Infinity;
-  return onAnswers(() => {
-    const server = serverClock.last();
-    if (!server || server.monotonicMs - lastMs < CHECK_EVERY_MS) return;
-    lastMs = server.monotonicMs;
-    const atS = recorder.at(server.monotonicMs);
-    void recorder.record({ kind: 'clock-check', serverMs: Math.round(server.serverMs) }, atS);
-  });
-}
-
-type PlainProps = { head: string; isAlert?: boolean; children?: React.ReactNode };
-
-function Plain({ head, isAlert = false, children }: PlainProps) {
-  const visit = window.location.pathname.split('/').slice(0, 3).join('/');
-  return (
-    <main id="main" className="mx-auto min-h-dvh max-w-site px-4 pt-6">
-      <h1 role={isAlert ? 'alert' : 'status'} className="pb-3 font-serif text-page">
-        {head}
-      </h1>
-      {children}
-      <a className="word" href={visit}>
-        Back to the visit
-      </a>
-    </main>
-  );
+/** As soon as the page stands, so that a run can be taken without a network. A failure is told at the start. */
+function fetchTheRest(): void {
+  fetchTaking()
+    .then(({ fetchWhatComesLater }) => fetchWhatComesLater())
+    .catch(() => {});
 }
 
 function wordsOf(error: unknown): string {
