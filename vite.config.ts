@@ -26,6 +26,7 @@ const worker = VitePWA({
 export default defineConfig({
   plugins: [react(), tailwindcss(), worker],
   publicDir: 'client/public',
+  worker: { format: 'es' },
   build: { outDir: 'dist/client', target: 'es2022', manifest: true, assetsInlineLimit: 0 },
   test: {
     include: ['tests/{shared,server,client}/**/*.test.ts'],

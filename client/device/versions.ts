@@ -1,7 +1,7 @@
 import { useSyncExternalStore } from 'react';
 import { isRecording } from './recording-hold.ts';
+import { SERVICE_WORKER_URL, trustedWorkerUrl } from './trusted-worker.ts';
 
-const WORKER_URL = '/sw.js';
 const HOUR_MS = 3_600_000;
 
 /** A version that waits for its turn; null: this is the newest. */
@@ -11,28 +11,6 @@ const listeners = new Set<() => void>();
 function show(next: ServiceWorker | null): void {
   waiting = next;
   for (const tell of listeners) tell();
-}
-
-type UrlRule = { createScriptURL(url: string): string };
-
-declare global {
-  interface Window {
-    /** Not in TypeScript's library yet. A trusted address stands for its string, which is how `register` is typed. */
-    trustedTypes?: { createPolicy(name: string, rule: UrlRule): UrlRule };
-  }
-}
-
-/** The one string that the content policy lets become a script: the service worker's own address. */
-function workerUrl(): string {
-  const types = window.trustedTypes;
-  if (!types) return WORKER_URL;
-  const policy = types.createPolicy('fusekeeper-worker', {
-    createScriptURL(url) {
-      if (url === WORKER_URL) return url;
-      throw new TypeError('only the service worker');
-    },
-  });
-  return policy.createScriptURL(WORKER_URL);
 }
 
 /** Registers what opens the application without a server, and looks for newer versions of it. */
@@ -45,7 +23,7 @@ export function watchVersions(): void {
     if (hadVersion) window.location.reload();
     hadVersion = true;
   });
-  void serviceWorker.register(workerUrl()).then((registration) => {
+  void serviceWorker.register(trustedWorkerUrl(SERVICE_WORKER_URL)).then((registration) => {
     if (registration.waiting && serviceWorker.controller) show(registration.waiting);
     registration.addEventListener('updatefound', () => follow(registration));
     setInterval(() => void registration.update().catch(() => {}), HOUR_MS);

@@ -1,8 +1,13 @@
-import type { Analysis, AnalysisInput } from '#shared/analysis/analysis.ts';
-import type { Series } from '#shared/analysis/series.ts';
+import { ANALYSIS_WORKER_URL, trustedWorkerUrl } from '../../device/trusted-worker.ts';
+import { createDeviceEngine } from './device-engine.ts';
+import type { AnalyseRun } from './engine-task.ts';
 
-/** The engine, in a chunk of its own: it comes when a run is ended. */
-export async function analyseOnDevice(series: Series, input: AnalysisInput): Promise<Analysis> {
-  const { analyseRun } = await import('#shared/analysis/analyse-run.ts');
-  return analyseRun(series, input);
-}
+/** The engine of this page, in one file: the worker's own, which the page imports where no worker starts. */
+export const deviceEngine = createDeviceEngine({
+  openWorker: () => new Worker(trustedWorkerUrl(ANALYSIS_WORKER_URL), { type: 'module' }),
+  async importHere(): Promise<AnalyseRun> {
+    await import(/* @vite-ignore */ ANALYSIS_WORKER_URL);
+    if (!globalThis.analyseRunHere) throw new Error('the engine did not come');
+    return globalThis.analyseRunHere;
+  },
+});

@@ -14,7 +14,7 @@ import { Key } from '../../components/key.tsx';
 import { StopSign } from '../../components/signs.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { useUnsent } from '../../device/this-device.ts';
-import { analyseOnDevice } from './analyse-on-device.ts';
+import { deviceEngine } from './analyse-on-device.ts';
 import { analysisInputOf } from './judge-run.ts';
 import type { Sources } from './sources.ts';
 
@@ -90,7 +90,8 @@ function Judged({ run, sources, toJudge }: JudgedProps) {
   useEffect(() => {
     if (!run.end) return;
     const input = analysisInputOf(sources, run, run.end.setup, toJudge);
-    analyseOnDevice(toJudge.series, input)
+    deviceEngine
+      .judge(toJudge.series, input, () => {})
       .then((analysis) => setJudgement({ state: 'done', analysis }))
       .catch(() => setJudgement({ state: 'failed' }));
     // A run that has ended does not change.
