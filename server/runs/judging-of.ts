@@ -1,7 +1,7 @@
 import type { Knex } from 'knex';
 import { AppError } from '#server/errors.ts';
 import { judgedWith } from '#shared/judging/judged-with.ts';
-import { specifiedFor } from '#shared/judging/judging-for.ts';
+import { specifiedFor } from '#shared/judging/specified-for.ts';
 import type { JudgingMark } from '#shared/judging/judging.ts';
 import type { RunConditions } from '#shared/schemas/runs.ts';
 import { findReference } from './find-reference.ts';

@@ -1,23 +1,11 @@
 import type { ReferenceRun } from '../analysis/analysis.ts';
-import type { MachinePage } from '../schemas/homes.ts';
 import type { StoredRating } from '../schemas/ratings.ts';
 import type { JudgedBy, JudgedWith, RunConditions } from '../schemas/runs.ts';
 import { toCelsius } from '../units.ts';
 import { judgedBy, ratingOf } from './judged-by.ts';
 import { probeToJudgeWith } from './judged-with.ts';
 import type { Judging, JudgingMark } from './judging.ts';
-
-/** Of a machine: what it is specified to have, by heat setting. */
-type Specifying = Pick<MachinePage, 'specified'>;
-
-/** What a machine is specified to have for a heat setting; null where nothing is. */
-export function specifiedFor(
-  machine: Specifying,
-  setting: RunConditions['setting'],
-): JudgedBy | null {
-  const specified = machine.specified.find((each) => each.setting === setting);
-  return specified ? judgedBy(specified.rating, specified.limit) : null;
-}
+import { specifiedFor, type Specifying } from './specified-for.ts';
 
 /** The same machine judged by another cycling rating: its own safety still stands. */
 export function judgedByAnother(

@@ -1,5 +1,5 @@
 import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
-import { specifiedFor } from '#shared/judging/judging-for.ts';
+import { specifiedFor } from '#shared/judging/specified-for.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
 import { toCelsius } from '#shared/units.ts';
 import type { LiveStrip } from '../../chart/draw-live.ts';

@@ -1,6 +1,6 @@
 import { useEffect, useState } from 'react';
 import type { Analysis } from '#shared/analysis/analysis.ts';
-import { specifiedFor } from '#shared/judging/judging-for.ts';
+import { specifiedFor } from '#shared/judging/specified-for.ts';
 import { ratingOf } from '#shared/judging/judged-by.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
 import { seriesOfRun, type RunToJudge } from '#shared/recorder/series-of-run.ts';

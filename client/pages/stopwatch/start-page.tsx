@@ -1,6 +1,6 @@
 import { useState, type ReactNode } from 'react';
 import type { RunEventOf } from '#shared/recorder/run-event.ts';
-import { specifiedFor } from '#shared/judging/judging-for.ts';
+import { specifiedFor } from '#shared/judging/specified-for.ts';
 import { RUN_CAUTIONS, SAFETY_LINE } from '#shared/wording/safety-lines.ts';
 import { CautionTicks } from '../../components/caution-ticks.tsx';
 import { SelectField } from '../../components/field.tsx';
