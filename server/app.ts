@@ -9,8 +9,10 @@ import { customerRoutes } from './homes/customer-routes.ts';
 import { homeRoutes } from './homes/home-routes.ts';
 import { machineRoutes } from './homes/machine-routes.ts';
 import { guard } from './http/guard.ts';
+import { httpsOnly } from './http/https-only.ts';
 import { jsonOnly, sameOrigin } from './http/same-origin.ts';
 import { noStore, securityHeaders } from './http/security-headers.ts';
+import { clientAddress, trustOneHop, type TrustedProxy } from './http/trusted-proxy.ts';
 import { jobRoutes } from './jobs/job-routes.ts';
 import { createScopeRepository } from './jobs/scope-repository.ts';
 import { visitRoutes } from './jobs/visit-routes.ts';
@@ -40,6 +42,8 @@ export type AppParts = {
   workers: Workers;
   /** What people type to come here; null: whatever address on this machine they used, over http. */
   publicUrl: URL | null;
+  /** Who may say whose request it is; nobody where left out. */
+  trustedProxy?: TrustedProxy;
   secrets: Secrets;
   logger: Logger;
   /** Serves the browser application; none in tests of the API. */
@@ -50,16 +54,18 @@ export type AppParts = {
 
 /** Wires repositories to services to routes by hand. Opens nothing, starts nothing. */
 export function createApp(parts: AppParts): Express {
-  const { publicUrl, logger, pages, development = false } = parts;
+  const { publicUrl, trustedProxy = [], logger, pages, development = false } = parts;
   const app = express();
   app.disable('x-powered-by');
   // Nothing of the API may be kept, so nothing needs to be compared.
   app.disable('etag');
-  // `?a=1&a=2` is a list and nothing nests. Trust proxy stays off: X-Forwarded-… is nobody's word.
+  // `?a=1&a=2` is a list and nothing nests.
   app.set('query parser', 'simple');
+  trustOneHop(app, trustedProxy);
 
   app.use(securityHeaders({ https: publicUrl?.protocol === 'https:', development }));
   app.use(requestLog(logger));
+  app.use(httpsOnly(publicUrl));
   app.use(compression());
   app.use('/api', createApi(parts));
   if (pages) app.use(pages);
@@ -81,7 +87,12 @@ function createApi(parts: AppParts): Router {
   api.use(noStore);
   api.use(
     sameOrigin(publicUrl, (req) =>
-      audit({ userId: null, event: 'malicious_csrf', subject: `${req.method} ${req.path}` }),
+      audit({
+        userId: null,
+        event: 'malicious_csrf',
+        subject: `${req.method} ${req.path}`,
+        details: { address: clientAddress(req) },
+      }),
     ),
   );
   api.use(cookieParser());

@@ -1,10 +1,28 @@
 import { isIP } from 'node:net';
 import { resolve } from 'node:path';
 import { z } from 'zod';
+import { LOOPBACK } from './http/trusted-proxy.ts';
 
-const publicUrl = z.url({ protocol: /^https?$/, error: 'must be an http or https address' });
+const publicUrl = z
+  .url({ protocol: /^https?$/, error: 'must be an http or https address' })
+  .transform((url) => new URL(url))
+  .refine(({ href, origin }) => href === `${origin}/`, 'must end with the host or the port');
 
-const envSchema = z.object({
+/** A range of every address would be no proxy's: /0 is none. */
+const range = z
+  .union([z.ipv4(), z.ipv6(), z.cidrv4(), z.cidrv6()])
+  .refine((text) => !/\/0+$/.test(text));
+
+const trustedProxy = z
+  .string()
+  .transform((text) => text.split(',').map((each) => each.trim()))
+  .transform((names) => names.flatMap((name) => (name === 'loopback' ? LOOPBACK : [name])))
+  .refine(
+    (ranges) => ranges.every((each) => range.safeParse(each).success),
+    'must be loopback, or addresses such as 10.0.0.2 or 10.0.0.0/24 with commas between',
+  );
+
+const namesSchema = z.object({
   PORT: z.coerce
     .number('must be a number')
     .int('must be a whole number')
@@ -16,7 +34,8 @@ const envSchema = z.object({
     .refine((host) => isIP(host) > 0 || host === 'localhost', 'must be an IP address or localhost')
     .default('127.0.0.1'),
   DATA_DIR: z.string().min(1, 'must name a folder').default('./data'),
-  PUBLIC_URL: publicUrl.transform((url) => new URL(url)).optional(),
+  PUBLIC_URL: publicUrl.optional(),
+  TRUSTED_PROXY: trustedProxy.optional(),
   NODE_ENV: z
     .enum(['development', 'production', 'test'], 'must be development, production or test')
     .default('production'),
@@ -29,6 +48,11 @@ const envSchema = z.object({
   OWNER_EMAIL: z.string().optional(),
   OWNER_PASSWORD: z.string().optional(),
 });
+
+const envSchema = namesSchema.refine(
+  ({ TRUSTED_PROXY, PUBLIC_URL }) => TRUSTED_PROXY === undefined || PUBLIC_URL !== undefined,
+  { path: ['TRUSTED_PROXY'], error: 'needs a PUBLIC_URL beside it' },
+);
 
 export type Env = ReturnType<typeof readEnv>;
 
@@ -47,6 +71,8 @@ export function readEnv(from: NodeJS.ProcessEnv = process.env) {
     host: env.HOST,
     dataDir: resolve(env.DATA_DIR),
     publicUrl: env.PUBLIC_URL ?? null,
+    /** Empty: nobody's word on a request's origin is taken. */
+    trustedProxy: env.TRUSTED_PROXY ?? [],
     development: env.NODE_ENV === 'development',
     demo: env.DEMO === 'yes',
     logLevel: env.LOG_LEVEL,

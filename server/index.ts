@@ -5,6 +5,7 @@ import { join } from 'node:path';
 import { createApp } from './app.ts';
 import { seedDemo } from './demo/seed-demo.ts';
 import { builtClient, clientFromSource } from './http/client-files.ts';
+import { plainHttpWarning } from './http/plain-http-warning.ts';
 import { migrate, openDatabase } from './db.ts';
 import { readEnv } from './env.ts';
 import { createLogger } from './log.ts';
@@ -33,8 +34,9 @@ async function start(): Promise<void> {
   const server = createServer({ headersTimeout: HEADERS_MS, requestTimeout: REQUEST_MS });
   const client = env.development ? await clientFromSource(server) : builtClient();
   const { pages } = client;
-  const { dataDir, publicUrl, development } = env;
-  const parts = { db, dataDir, now, workers, publicUrl, secrets, logger, pages, development };
+  const { dataDir, publicUrl, trustedProxy, development } = env;
+  const outside = { publicUrl, trustedProxy, pages, development };
+  const parts = { db, dataDir, now, workers, secrets, logger, ...outside };
   const tokens = env.demo ? await seedDemo(parts) : null;
   server.on('request', createApp(parts));
 
@@ -43,6 +45,7 @@ async function start(): Promise<void> {
   await once(server, 'listening');
   const url = publicUrl?.origin ?? localUrl(server.address());
   process.stdout.write(`Fusekeeper is at ${url}\n`);
+  process.stderr.write(plainHttpWarning(env));
   // Told at the first start and never again: only a hash of it is kept.
   for (const token of tokens ?? []) {
     process.stdout.write(`A customer of the demo shop opens ${url}/shared#${token}\n`);

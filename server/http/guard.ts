@@ -8,6 +8,7 @@ import type { Audit } from '#server/people/audit-repository.ts';
 import type { SessionCookie } from '#server/people/session-cookie.ts';
 import type { SessionService } from '#server/people/session-service.ts';
 import type { Scope } from '#server/jobs/scope-repository.ts';
+import { clientAddress } from './trusted-proxy.ts';
 
 export type GuardParts = {
   sessions: SessionService;
@@ -29,7 +30,8 @@ export function guard({ sessions, cookie, scope, audit }: GuardParts): RequestHa
     if (!signedIn) throw signInNeeded();
     const { person } = signedIn;
     const denied = async (error: Error) => {
-      await audit({ userId: person.id, event: 'authz_fail', subject: named(rule) });
+      const details = { address: clientAddress(req) };
+      await audit({ userId: person.id, event: 'authz_fail', subject: named(rule), details });
       return error;
     };
 

@@ -1,4 +1,5 @@
 import { Router } from 'express';
+import { clientAddress } from '#server/http/trusted-proxy.ts';
 import { validate } from '#server/validate.ts';
 import { passwordChangeSchema, signInSchema } from '#shared/schemas/people.ts';
 import type { Session } from '#shared/schemas/people.ts';
@@ -12,7 +13,8 @@ export function sessionRoutes(sessions: SessionService, shop: ShopService, cooki
 
   router.post('/session', async (req, res) => {
     const asked = validate(signInSchema, req.body);
-    const { person, token, expiresAtMs } = await sessions.signIn(asked, cookie.read(req));
+    const from = { oldToken: cookie.read(req), address: clientAddress(req) };
+    const { person, token, expiresAtMs } = await sessions.signIn(asked, from);
     cookie.write(res, token, expiresAtMs);
     res.json({ person, shop: await shop.get() } satisfies Session);
   });

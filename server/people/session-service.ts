@@ -16,6 +16,11 @@ export const ABSOLUTE_MS = 30 * DAY_MS;
 const SEEN_EVERY_MS = 5 * 60_000;
 
 export type SignedIn = { person: Person; sessionId: string };
+export type SignInFrom = {
+  /** What the browser held until now; it gives way, so that no session is left behind. */
+  oldToken: string | undefined;
+  address: string;
+};
 export type SessionService = ReturnType<typeof createSessionService>;
 
 export type SessionParts = {
@@ -32,7 +37,7 @@ export function createSessionService(parts: SessionParts) {
   const { people, sessions, passwords, backOff, audit, tokenKey, now } = parts;
 
   /** Every refusal is the same and takes as long: unknown, wrong, or disabled. */
-  async function checkPassword({ email, password }: SignIn): Promise<Person> {
+  async function checkPassword({ email, password }: SignIn, address: string): Promise<Person> {
     const { failures } = await backOff.startTry(email);
     const stored = await people.findByEmail(email.trim().toLowerCase());
     const matches = await passwords.matches(password, stored?.passwordHash);
@@ -42,7 +47,8 @@ export function createSessionService(parts: SessionParts) {
       return person;
     }
     const event = backOff.isLocking(failures) ? 'authn_login_lock' : 'authn_login_fail';
-    await audit({ userId: person?.id ?? null, event, subject: 'session', details: { failures } });
+    const details = { failures, address };
+    await audit({ userId: person?.id ?? null, event, subject: 'session', details });
     throw new AppError(401, 'wrong-sign-in', 'That e-mail and password do not go together.');
   }
 
@@ -74,13 +80,13 @@ export function createSessionService(parts: SessionParts) {
   }
 
   return {
-    /** `oldToken`: what the browser held until now; it gives way, so that no session is left behind. */
-    async signIn(asked: SignIn, oldToken: string | undefined) {
-      const person = await checkPassword(asked);
+    async signIn(asked: SignIn, { oldToken, address }: SignInFrom) {
+      const person = await checkPassword(asked, address);
       const old = oldToken === undefined ? undefined : await find(oldToken);
       if (old) await sessions.end(old.sessionId, now().getTime());
       const opened = await open(person);
-      await audit({ userId: person.id, event: 'authn_login_success', subject: 'session' });
+      const details = { address };
+      await audit({ userId: person.id, event: 'authn_login_success', subject: 'session', details });
       return { person, ...opened };
     },
 

@@ -1,5 +1,6 @@
-import { Router, type Request } from 'express';
+import { Router } from 'express';
 import type { z } from 'zod';
+import { clientAddress } from '#server/http/trusted-proxy.ts';
 import { personOf } from '#server/people/signed-in.ts';
 import { validate } from '#server/validate.ts';
 import type { Shop } from '#shared/schemas/people.ts';
@@ -46,10 +47,10 @@ export function shareRoutes(parts: ShareRouteParts): Router {
   // Wrong, expired and revoked links get one and the same answer.
   router.post('/shared/open', async (req, res) => {
     const { token } = validate(openShareSchema, req.body);
-    limit.check(addressOf(req));
+    limit.check(clientAddress(req));
     const share = await shares.open(token);
     if (share) return void res.json(await toSharedRun(share));
-    limit.countFailed(addressOf(req));
+    limit.countFailed(clientAddress(req));
     res.status(404).json(linkProblem(await shop()));
   });
 
@@ -62,8 +63,4 @@ function linkProblem({ name, phone, email }: Shop): LinkProblem {
     message: 'This link does not open. It may be mistyped, out of date, or taken back by the shop.',
     shop: { name, phone, email },
   };
-}
-
-function addressOf(req: Request): string {
-  return req.socket.remoteAddress ?? '';
 }
