@@ -123,9 +123,8 @@ function conditionsOf({ start, end }: Ended): RunConditions {
   return { ...end.setup, roomUnit: start.unit };
 }
 
-function saidOf(run: Ended, { marks, firstAtS }: RunToJudge) {
-  const { runId, visitId, wallMs } = run.start;
-  const startedAtMs = Math.round(wallMs + firstAtS * 1000);
+function saidOf(run: Ended, { marks, startedAtMs }: RunToJudge) {
+  const { runId, visitId } = run.start;
   return { id: runId, visitId, conditions: conditionsOf(run), marks, startedAtMs };
 }
 
@@ -136,7 +135,7 @@ function toRun(run: Ended, toJudge: RunToJudge, acceptedAtMs: number): Run {
   return {
     ...{ id, visitId, uploadId: id, source: 'stopwatch', label: run.end.label },
     ...{ startedAtMs, acceptedAtMs, conditions, marks, samples: timesS.length, durationS },
-    ...{ channel: 'By hand', channelUnit: run.start.unit, channels: [] },
+    ...{ channel: channelOf(run), channelUnit: toJudge.unit, channels: [] },
     reading: {
       ...{ choices: { answers: {}, channel: null }, fromS: 0, toS: durationS },
       ...{
@@ -150,4 +149,11 @@ function toRun(run: Ended, toJudge: RunToJudge, acceptedAtMs: number): Run {
     },
     spark: sparkPoints(timesS, tempsC),
   };
+}
+
+/** Who took the readings, as the run page names their column. */
+function channelOf({ readings }: HandRun): string {
+  const byProbe = readings.filter(({ from }) => from === 'probe').length;
+  if (byProbe === 0) return 'By hand';
+  return byProbe === readings.length ? 'Live probe' : 'Live probe and by hand';
 }

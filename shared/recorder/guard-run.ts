@@ -1,6 +1,6 @@
 import { guardMark, guardReading, startGuard } from '../analysis/guard/guard.ts';
 import type { GuardSetup, GuardState } from '../analysis/guard/guard-state.ts';
-import { toCelsius } from '../units.ts';
+import { celsiusOf } from './celsius-of.ts';
 import type { HandRun } from './replay-run.ts';
 import type { RunEvent } from './run-event.ts';
 
@@ -15,7 +15,7 @@ export function guardOfRun(run: HandRun, setup: GuardSetup): GuardSoFar {
     soFar =
       'kind' in each
         ? tellMark(soFar, each)
-        : tellReading(soFar, each.atS, toCelsius(each.temp, run.start.unit));
+        : tellReading(soFar, each.atS, celsiusOf(each, run.start.unit));
   }
   return soFar;
 }
@@ -29,7 +29,7 @@ export function guardOfRun(run: HandRun, setup: GuardSetup): GuardSoFar {
 export function guardAfter(soFar: GuardSoFar, event: RunEvent, run: HandRun): GuardSoFar {
   const isLast = event.atS >= soFar.toldS;
   if (event.kind === 'reading' && isLast) {
-    return tellReading(soFar, event.atS, toCelsius(event.temp, run.start.unit));
+    return tellReading(soFar, event.atS, celsiusOf(event, run.start.unit));
   }
   if (event.kind === 'mark' && isLast) return tellMark(soFar, { atS: event.atS, kind: event.mark });
   const changesPast = ['reading', 'mark', 'undo', 'correction'].includes(event.kind);

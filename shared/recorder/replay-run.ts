@@ -1,5 +1,5 @@
 import type { MarkKind } from '../analysis/series.ts';
-import type { RunEvent, RunEventOf } from './run-event.ts';
+import type { Measured, RunEvent, RunEventOf } from './run-event.ts';
 import { clockSpans, type ClockSpan } from './clock-spans.ts';
 
 export type HandReading = {
@@ -10,6 +10,8 @@ export type HandReading = {
   /** As first typed. */
   typed: number;
   from: 'hand' | 'probe';
+  /** As a live probe gave it in a unit of its own; null where `temp` says all, also once it was corrected. */
+  measured: Measured | null;
 };
 export type HandMark = { id: string; atS: number; kind: MarkKind; text: string | null };
 export type HandCorrection = {
@@ -75,7 +77,7 @@ export function replayRun(events: readonly RunEvent[]): HandRun | null {
   };
 }
 
-/** What Undo takes back next: the newest reading, mark or correction that still stands. */
+/** What Undo takes back next: the newest thing that a person did and that still stands. A probe's readings are not. */
 export function lastToTakeBack(
   events: readonly RunEvent[],
 ): RunEventOf<'reading' | 'mark' | 'correction'> | null {
@@ -85,7 +87,8 @@ export function lastToTakeBack(
 }
 
 function isTakeable(event: RunEvent): event is RunEventOf<'reading' | 'mark' | 'correction'> {
-  return event.kind === 'reading' || event.kind === 'mark' || event.kind === 'correction';
+  if (event.kind === 'reading') return event.from === 'hand';
+  return event.kind === 'mark' || event.kind === 'correction';
 }
 
 /** An event that came twice counts once. */
@@ -115,12 +118,13 @@ function correctionsOf(events: RunEvent[]): HandCorrection[] {
 function readingsOf(events: RunEvent[], corrections: HandCorrection[]): HandReading[] {
   const corrected = new Map(corrections.map(({ readingId, now }) => [readingId, now]));
   return ofKind(events, 'reading')
-    .map(({ id, atS, temp, from }) => ({
+    .map(({ id, atS, temp, from, measured }) => ({
       id,
       atS,
       temp: corrected.get(id) ?? temp,
       typed: temp,
       from,
+      measured: corrected.has(id) ? null : (measured ?? null),
     }))
     .sort(byTime);
 }

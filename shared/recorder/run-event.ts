@@ -27,6 +27,9 @@ type Stamp = {
   wallMs: number;
 };
 
+/** A temperature in the unit of the probe that it comes from. */
+export type Measured = { temp: number; unit: DisplayUnit };
+
 type Happening =
   | {
       kind: 'start';
@@ -36,8 +39,8 @@ type Happening =
       hasTenths: boolean;
       setup: RunSetup;
     }
-  /** In the run's unit, as typed or as the probe gave it. */
-  | { kind: 'reading'; temp: number; from: 'hand' | 'probe' }
+  /** In the run's unit. `measured`: as a live probe gave it, where that speaks another unit. */
+  | { kind: 'reading'; temp: number; from: 'hand' | 'probe'; measured?: Measured | undefined }
   | { kind: 'mark'; mark: MarkKind; text: string | null }
   /** Takes back a reading, a mark or a correction. */
   | { kind: 'undo'; takes: string }

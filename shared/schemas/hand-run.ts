@@ -47,7 +47,11 @@ export const runEventSchema = z.discriminatedUnion('kind', [
     hasTenths: z.boolean(),
     setup: setupSchema,
   }),
-  event('reading', { temp, from: z.enum(['hand', 'probe']) }),
+  event('reading', {
+    temp,
+    from: z.enum(['hand', 'probe']),
+    measured: z.object({ temp, unit: displayUnitSchema }).optional(),
+  }),
   event('mark', { mark: z.enum(MARK_KINDS), text: words(200).nullable() }),
   event('undo', { takes: idSchema }),
   event('correction', { of: idSchema, temp }),

@@ -1,7 +1,8 @@
 import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
 import { specifiedFor } from '#shared/judging/specified-for.ts';
+import { celsiusOf } from '#shared/recorder/celsius-of.ts';
+import { traceGaps } from '#shared/recorder/probe-gap.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
-import { toCelsius } from '#shared/units.ts';
 import type { LiveStrip } from '../../chart/draw-live.ts';
 import type { HotSpan } from '../../chart/strip.ts';
 import type { StopwatchMachine } from './sources.ts';
@@ -14,9 +15,9 @@ export function liveStripOf(run: HandRun, view: GuardView, machine: StopwatchMac
     bands: specifiedFor(machine, start.setup.setting),
     points: [],
     hotSpans: hotSpans(run),
-    gaps: [],
+    gaps: traceGaps(run),
     timesS: Float64Array.from(readings, ({ atS }) => atS),
-    tempsC: Float64Array.from(readings, ({ temp }) => toCelsius(temp, start.unit)),
+    tempsC: Float64Array.from(readings, (reading) => celsiusOf(reading, start.unit)),
     forecast: isCalm ? null : (view.forecast?.highLimit ?? null),
   };
 }

@@ -10,8 +10,11 @@ import {
   type RunClock,
 } from '#shared/recorder/clock.ts';
 import { guardAfter, guardOfRun, type GuardSoFar } from '#shared/recorder/guard-run.ts';
+import { isWorthKeeping } from '#shared/recorder/keep-rate.ts';
+import { measuredInRun } from '#shared/recorder/measured-in-run.ts';
+import { lastOfProbe, openGap } from '#shared/recorder/probe-gap.ts';
 import { lastToTakeBack, replayRun, type HandRun } from '#shared/recorder/replay-run.ts';
-import type { EndSetup, RunEvent, RunEventOf } from '#shared/recorder/run-event.ts';
+import type { EndSetup, Measured, RunEvent, RunEventOf } from '#shared/recorder/run-event.ts';
 
 type StampName = 'id' | 'runId' | 'n' | 'atS' | 'wallMs';
 type WithoutStamp<Event> = Event extends RunEvent ? Omit<Event, StampName> : never;
@@ -96,9 +99,30 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
 
   /** @returns whether it was kept */
   function record(happening: Happening, atS = atNow()): Promise<boolean> {
-    const kept = queue.then(() => keepNext(happening, atS));
+    return inTurn(() => keepNext(happening, atS));
+  }
+
+  /** Once all that was asked for before is kept or refused. */
+  function inTurn(keep: () => Promise<boolean>): Promise<boolean> {
+    const kept = queue.then(keep);
     queue = kept;
     return kept;
+  }
+
+  /** A silence of the live probe is written down when it is over: when the probe reads again, or the run ends. */
+  async function closeGap(atS: number): Promise<void> {
+    const gap = openGap(recording.run, atS);
+    if (gap) await keepNext({ kind: 'probe-gap', ...gap }, atS);
+  }
+
+  async function keepLive(measured: Measured, atS: number): Promise<boolean> {
+    const { run } = recording;
+    const lastS = lastOfProbe(run)?.atS ?? -Infinity;
+    if (run.end !== null || run.isThrownAway) return false;
+    if (!isWorthKeeping(atS - lastS, run.last.n)) return false;
+    await closeGap(atS);
+    const reading = measuredInRun(measured, run.start.unit);
+    return keepNext({ kind: 'reading', from: 'probe', ...reading }, atS);
   }
 
   async function keepNext(happening: Happening, atS: number): Promise<boolean> {
@@ -159,10 +183,18 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
     },
 
     read: (temp: number, atS: number) => record({ kind: 'reading', temp, from: 'hand' }, atS),
+    /** A live probe's reading, at the moment that it arrived. @returns whether it was kept: of a fast probe not all are */
+    readLive: (measured: Measured, atS: number) => inTurn(() => keepLive(measured, atS)),
     mark: (mark: MarkKind, atS: number, text: string | null = null) =>
       record({ kind: 'mark', mark, text }, atS),
     correct: (of: string, temp: number) => record({ kind: 'correction', of, temp }),
-    end: (label: string, setup: EndSetup) => record({ kind: 'end', label, setup }),
+    end(label: string, setup: EndSetup): Promise<boolean> {
+      const atS = atNow();
+      return inTurn(async () => {
+        await closeGap(atS);
+        return keepNext({ kind: 'end', label, setup }, atS);
+      });
+    },
 
     /** Takes the newest thing back. @returns what it was; null where there is nothing */
     undo(): RunEvent | null {
