@@ -14,6 +14,15 @@ export async function findReference(
   machineId: string,
   judged: { id: string; conditions: RunConditions },
 ): Promise<ReferenceRun | null> {
+  return (await findReferenceRun(machineRuns, machineId, judged))?.reference ?? null;
+}
+
+/** The same with the run that it was made of. */
+async function findReferenceRun(
+  machineRuns: MachineRuns,
+  machineId: string,
+  judged: { id: string; conditions: RunConditions },
+): Promise<Pick<MachineReference, 'reference' | 'from'> | null> {
   const { setting, load, duct } = judged.conditions;
   const alike = (await machineRuns.list(machineId))
     .filter((run) => run.id !== judged.id)
@@ -22,12 +31,16 @@ export async function findReference(
   const chosen = clean.find((run) => run.conditions.duct === duct) ?? clean[0];
   if (!chosen) return null;
   const { analysis } = await machineRuns.judged(chosen);
-  return toReferenceRun(analysis, chosen.conditions.duct === duct);
+  const { startedAtMs, conditions } = chosen;
+  const reference = toReferenceRun(analysis, conditions.duct === duct);
+  return reference && { reference, from: { startedAtMs, duct: conditions.duct } };
 }
 
 /** A clean run to go by, for one way of running the machine. */
 export type MachineReference = Pick<RunConditions, 'setting' | 'load' | 'duct'> & {
   reference: ReferenceRun;
+  /** The run that it was made of: a device sets its own runs beside it, which the shop has not had yet. */
+  from: { startedAtMs: number; duct: RunConditions['duct'] };
 };
 
 /** What findReference gives for every way that a machine is run, where it gives anything: for a device to take along. */
@@ -44,9 +57,9 @@ export async function listReferences(
     }
   }
   for (const conditions of ways.values()) {
-    const reference = await findReference(machineRuns, machineId, { id: '', conditions });
+    const chosen = await findReferenceRun(machineRuns, machineId, { id: '', conditions });
     const { setting, load, duct } = conditions;
-    if (reference) found.push({ setting, load, duct, reference });
+    if (chosen) found.push({ setting, load, duct, ...chosen });
   }
   return found;
 }

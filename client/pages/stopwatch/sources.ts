@@ -32,6 +32,8 @@ export type Sources = {
 /** A clean run to go by, for one way of running the machine; the server made it. */
 export type MachineReference = Pick<EndSetup, 'setting' | 'load' | 'duct'> & {
   reference: ReferenceRun;
+  /** The run that it was made of; an older server does not say. */
+  from?: { startedAtMs: number; duct: EndSetup['duct'] };
 };
 
 const MACHINE = { id: 'string', make: 'string', model: 'string', fuel: 'string' } as const;
