@@ -37,9 +37,20 @@ export function drawLive(frame: Frame, strip: LiveStrip, withHoles: boolean): Sh
     ...drawScale(frame, steps, 'right'),
     ...drawMinutes(frame, steps),
     ...(withHoles ? drawHoles(frame, steps, frame.sheet.height - 8) : []),
+    ...drawHairline(frame, strip),
     ...(bands ? nameBands(frame, bands) : []),
     ...drawMarks(frame, strip.points),
   ];
+}
+
+/** From the pen to the scale; under the bands' names, which it would strike through. */
+function drawHairline(frame: Frame, { timesS, tempsC }: LiveStrip): Shape[] {
+  const lastS = timesS.at(-1);
+  const lastC = tempsC.at(-1);
+  if (lastS === undefined || lastC === undefined) return [];
+  const y = yOf(frame, lastC);
+  const path = [xOf(frame, lastS), y, frame.plot.left + frame.plot.width + 4, y];
+  return [{ kind: 'line', path, ink: 'ink', widthPx: 1 }];
 }
 
 /** Dots to the wall, and a cross where they meet it. */

@@ -61,8 +61,12 @@ export function watchSentence(facts: GuardFacts): string {
   const limit = formatRated(highLimitC, unit);
   if (!crossing || crossing.likelyS === null) return wordsOfGuard(facts).why ?? '';
   const leftS = Math.max(0, crossing.likelyS - nowS);
-  const reachS = ((crossing.latestS ?? crossing.likelyS) - crossing.earliestS) / 2;
-  return `At this rate it reaches ${limit} in ${formatSpan(leftS)}, give or take ${formatSpan(Math.max(1, reachS))}.`;
+  const inTime = `At this rate it reaches ${limit} in ${formatSpan(leftS)}`;
+  if (crossing.latestS === null) {
+    return `${inTime}, at the earliest in ${formatSpan(Math.max(0, crossing.earliestS - nowS))}.`;
+  }
+  const reachS = (crossing.latestS - crossing.earliestS) / 2;
+  return `${inTime}, give or take ${formatSpan(Math.max(1, reachS))}.`;
 }
 
 /** `59 °F`: whole degrees, this is read from the corner of an eye. */

@@ -49,7 +49,6 @@ function PenHead({ frame, strip, figure }: { frame: Frame; strip: Drawn; figure:
   const flagY = Math.min(frame.sheet.height - 18, Math.max(18, y));
   return (
     <g>
-      <path d={`M${x} ${y}H${tip}`} stroke="var(--ink)" fill="none" />
       <path
         d={`M${tip} ${y}L${tip + 13} ${flagY - 18}H${right}v36H${tip + 13}z`}
         fill="var(--ink)"
