@@ -100,13 +100,39 @@ function ensureClient() {
 
 function ensureBrowser() {
   if (existsSync(process.env.CHROMIUM_PATH ?? '/usr/bin/chromium')) return;
-  if (process.getuid?.() !== 0 || !existsSync('/usr/bin/apt-get')) {
+  if (!maySetUp()) {
     giveUp(
       'The browser tests need Chromium: "sudo apt-get install chromium", or set CHROMIUM_PATH.',
     );
   }
   run('apt-get', ['update', '-q']);
   run('apt-get', ['install', '-q', '-y', '--no-install-recommends', 'chromium']);
+}
+
+/** For one test only, which is skipped without it; so nothing ends here. */
+function ensureProxy() {
+  const missing = [];
+  if (!isProgram('caddy')) missing.push('caddy');
+  if (!isProgram('certutil')) missing.push('libnss3-tools');
+  if (missing.length === 0) return;
+  const apt = (...args) => spawnSync('apt-get', args, { stdio: ['ignore', 2, 2] }).status === 0;
+  const install = ['install', '-q', '-y', '--no-install-recommends', ...missing];
+  if (!maySetUp() || !apt('update', '-q') || !apt(...install)) {
+    process.stderr.write(
+      `One browser test is skipped, since it needs a proxy: "sudo apt-get install ${missing.join(' ')}".\n`,
+    );
+  } else if (missing.includes('caddy') && existsSync('/run/systemd/system')) {
+    // The package starts a service on port 80; a test wants none.
+    spawnSync('systemctl', ['disable', '--now', 'caddy'], { stdio: ['ignore', 2, 2] });
+  }
+}
+
+function isProgram(name) {
+  return spawnSync(name, ['--help'], { stdio: 'ignore' }).error === undefined;
+}
+
+function maySetUp() {
+  return process.getuid?.() === 0 && existsSync('/usr/bin/apt-get');
 }
 
 /** Two commands at once take turns; a lock left by a process that is gone is broken. */
@@ -150,5 +176,8 @@ await withLock(() => {
   ensurePackages();
   if (wants.has('--build') || wants.has('--server')) ensureServer();
   if (wants.has('--build')) ensureClient();
-  if (wants.has('--browser')) ensureBrowser();
+  if (wants.has('--browser')) {
+    ensureBrowser();
+    ensureProxy();
+  }
 });

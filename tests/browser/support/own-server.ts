@@ -5,11 +5,15 @@ import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join, resolve } from 'node:path';
 
-/** A built server of the test's own, with the demo shop, that may be killed and started again at the same address. */
-export async function ownServer() {
+/**
+ * A built server of the test's own, with the demo shop, that may be killed and started again at the same address.
+ *
+ * @param built the folder that the build lies in
+ */
+export async function ownServer(built = 'dist') {
   const folder = await mkdtemp(join(tmpdir(), 'fusekeeper-own-'));
   // A copy of the program, since a test may lay another version over it.
-  await cp('dist', join(folder, 'dist'), { recursive: true });
+  await cp(built, join(folder, 'dist'), { recursive: true });
   for (const name of ['node_modules', 'sample-logs', 'package.json']) {
     await symlink(resolve(name), join(folder, name));
   }
@@ -17,13 +21,15 @@ export async function ownServer() {
   const url = `http://127.0.0.1:${port}`;
   let child: ChildProcess | undefined;
 
-  async function start(): Promise<void> {
+  /** `settings`: laid over its own; again at each start. */
+  async function start(settings: Record<string, string> = {}): Promise<void> {
     const started = spawn(process.execPath, [join(folder, 'dist/server/index.js')], {
       env: {
         PATH: process.env['PATH'],
         DATA_DIR: join(folder, 'data'),
         PORT: String(port),
         LOG_LEVEL: 'warn',
+        ...settings,
       },
       stdio: ['ignore', 'pipe', 'inherit'],
     });
@@ -33,8 +39,12 @@ export async function ownServer() {
     while (!said.includes('Fusekeeper is at')) await once(started.stdout, 'data');
   }
 
+  function isUp(): boolean {
+    return child !== undefined && child.exitCode === null && child.signalCode === null;
+  }
+
   async function kill(): Promise<void> {
-    if (!child || child.exitCode !== null || child.signalCode !== null) return;
+    if (!child || !isUp()) return;
     child.kill('SIGKILL');
     await once(child, 'exit');
   }
@@ -43,7 +53,9 @@ export async function ownServer() {
     url,
     /** The built application that this server hands out. */
     clientFolder: join(folder, 'dist/client'),
+    dataFolder: join(folder, 'data'),
     start,
+    isUp,
     /** As a power cut would: nothing is ended in good order. */
     kill,
     async remove(): Promise<void> {
@@ -53,7 +65,7 @@ export async function ownServer() {
   };
 }
 
-async function freePort(): Promise<number> {
+export async function freePort(): Promise<number> {
   const server = createServer().listen(0, '127.0.0.1');
   await once(server, 'listening');
   const address = server.address();
