@@ -13,18 +13,27 @@ async function freePort(): Promise<string> {
   return String(address.port);
 }
 
+async function freePorts(count: number): Promise<string> {
+  return (await Promise.all(Array.from({ length: count }, freePort))).join(' ');
+}
+
 function freshFolder(): string {
   return mkdtempSync(join(tmpdir(), 'fusekeeper-browser-'));
 }
 
+// Each worker has a demo shop of its own, so that files which run side by side do not change each other's day.
+const WORKERS = 2;
+
 // This file is read again in every worker: what the first reading chose is handed down by the environment.
-process.env['FK_DEMO_PORT'] ??= await freePort();
+const demoPorts = (process.env['FK_DEMO_PORTS'] ??= await freePorts(WORKERS)).split(' ');
+const demoFolders = (process.env['FK_DEMO_DATA'] ??= demoPorts.map(freshFolder).join(' ')).split(
+  ' ',
+);
 process.env['FK_EMPTY_PORT'] ??= await freePort();
-process.env['FK_DEMO_DATA'] ??= freshFolder();
 process.env['FK_EMPTY_DATA'] ??= freshFolder();
 
-const demoUrl = `http://127.0.0.1:${process.env['FK_DEMO_PORT']}`;
-const emptyUrl = `http://127.0.0.1:${process.env['FK_EMPTY_PORT']}`;
+const demoUrls = demoPorts.map((port) => `http://127.0.0.1:${port}`);
+const demoUrl = demoUrls[Number(process.env['TEST_PARALLEL_INDEX'] ?? 0)] ?? '';
 
 function server(port: string, dataFolder: string, demo: 'yes' | 'no') {
   return {
@@ -45,7 +54,7 @@ function server(port: string, dataFolder: string, demo: 'yes' | 'no') {
 export default defineConfig({
   testDir: 'tests/browser',
   testMatch: '*.test.ts',
-  workers: 1,
+  workers: WORKERS,
   timeout: 120_000,
   expect: { timeout: 20_000 },
   forbidOnly: true,
@@ -55,7 +64,8 @@ export default defineConfig({
     baseURL: demoUrl,
     locale: 'en-US',
     timezoneId: 'America/New_York',
-    trace: 'retain-on-failure',
+    // Without a film of every page: that costs more than most tests.
+    trace: { mode: 'retain-on-failure', screenshots: false },
     launchOptions: {
       executablePath: process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium',
       args: [
@@ -69,9 +79,8 @@ export default defineConfig({
       ],
     },
   },
-  metadata: { emptyUrl },
   webServer: [
-    server(process.env['FK_DEMO_PORT'], process.env['FK_DEMO_DATA'], 'yes'),
+    ...demoPorts.map((port, i) => server(port, demoFolders[i] ?? '', 'yes')),
     server(process.env['FK_EMPTY_PORT'], process.env['FK_EMPTY_DATA'], 'no'),
   ],
 });

@@ -54,7 +54,15 @@ export default defineConfig({
     rolldownOptions: { output: { codeSplitting: { groups: sharedChunks } } },
   },
   test: {
-    include: ['tests/{shared,server,client}/**/*.test.ts'],
+    projects: [
+      {
+        extends: true,
+        // Pure, by the rules of shared/: files of tests need not be kept apart, and load it once.
+        test: { name: 'shared', include: ['tests/shared/**/*.test.ts'], isolate: false },
+      },
+      { extends: true, test: { name: 'server', include: ['tests/server/**/*.test.ts'] } },
+      { extends: true, test: { name: 'client', include: ['tests/client/**/*.test.ts'] } },
+    ],
     environment: 'node',
     setupFiles: ['tests/support/fail-on-console-error.ts'],
     testTimeout: 20_000,

@@ -38,7 +38,12 @@ function giveUp(why) {
 }
 
 function run(command, args) {
-  const { status, error } = spawnSync(command, args, { cwd: ROOT, stdio: ['ignore', 2, 2] });
+  const { status, error } = spawnSync(command, args, {
+    cwd: ROOT,
+    stdio: ['ignore', 2, 2],
+    // What is compiled while it is installed may take all cores.
+    env: { JOBS: 'max', ...process.env },
+  });
   if (error || status !== 0)
     giveUp(`"${command} ${args.join(' ')}" failed; its own words stand above.`);
 }
