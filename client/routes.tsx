@@ -24,7 +24,7 @@ function throwing(error: unknown): ComponentType {
 /** Drawn before the first page's chunk is there. */
 function Opening() {
   return (
-    <p role="status" className="words px-4 py-6 text-[18px] text-print desk:px-12">
+    <p role="status" className="words px-4 py-6 text-[1.125rem] text-print desk:px-12">
       Opening…
     </p>
   );

@@ -13,7 +13,7 @@ export function ChartLegend({ strip }: { strip: Strip }) {
   const calls = CALLS.filter((call) => strip.points.some((point) => point.call === call));
   const hot = strip.hotSpans[0];
   return (
-    <ul className="words flex flex-wrap gap-x-6 gap-y-1 text-[15px] text-print">
+    <ul className="words flex flex-wrap gap-x-6 gap-y-1 text-[0.9375rem] text-print">
       {calls.map((call) => (
         <li key={call} className="flex items-center gap-2">
           <CallGlyph call={call} />

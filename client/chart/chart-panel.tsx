@@ -136,7 +136,7 @@ function ChartMoves({ state: { view }, durationS, onMove, children }: ChartMoves
           </Word>
         ))}
       </div>
-      <p className="fig text-[17px] font-stretch-[92%]">
+      <p className="fig text-[1.0625rem] font-stretch-[92%]">
         <span className="text-print">shown </span>
         {formatMoment(view.fromS)} to {formatMoment(Math.min(view.toS, durationS))}
         <span className="text-print"> of {formatMoment(durationS)}</span>
@@ -162,7 +162,7 @@ function Readout({ state: { cursorS, view }, pyramid, unit, events, widthPx }: R
   const temp = cursorS === null ? '' : formatTemp(tempOf(pyramid, cursorS), unit);
   const said = useThrottled([time, temp, event?.words].filter(Boolean).join(', '), 500);
   return (
-    <div className="fig flex min-h-touch min-w-[15ch] flex-1 items-center justify-end gap-3 text-[17px]">
+    <div className="fig flex min-h-touch min-w-[15ch] flex-1 items-center justify-end gap-3 text-[1.0625rem]">
       {cursorS === null ? (
         <span className="text-small text-print">Touch the trace, or point at it, to read it.</span>
       ) : (

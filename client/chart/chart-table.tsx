@@ -47,7 +47,7 @@ function EventTable({ events, unit }: { events: ChartEvent[]; unit: DisplayUnit 
   );
   return (
     <div>
-      <h3 className="words py-2 text-[17px] font-semibold">What happened</h3>
+      <h3 className="words py-2 text-[1.0625rem] font-semibold">What happened</h3>
       {events.length === 0 ? (
         <p className="text-body">No cut-out, mark or note in this run.</p>
       ) : (
@@ -86,7 +86,7 @@ function ReadingTable(props: Omit<ChartTableProps, 'id' | 'events'>) {
   );
   return (
     <div>
-      <h3 className="words py-2 text-[17px] font-semibold">
+      <h3 className="words py-2 text-[1.0625rem] font-semibold">
         {hasAllReadings ? 'Readings' : 'Lowest and highest of each stretch'}
         <span className="font-normal text-print">
           {' '}

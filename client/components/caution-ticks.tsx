@@ -25,7 +25,7 @@ export function CautionTicks({ isDisabled = false, onCount, onAll }: CautionTick
     <ul>
       {RUN_CAUTIONS.map((caution) => (
         <li key={caution} className="border-b border-hair">
-          <label className="words flex min-h-main cursor-pointer items-center gap-4 py-2 text-[17px] leading-[1.25] font-medium">
+          <label className="words flex min-h-main cursor-pointer items-center gap-4 py-2 text-[1.0625rem] leading-[1.25] font-medium">
             <input
               type="checkbox"
               className="!size-7"

@@ -62,7 +62,7 @@ export function ErrorSummary({ problems, attempt }: { problems: FormProblem[]; a
               className="border-t border-hair desk:border-t-0"
             >
               {problem.name === null ? (
-                <p className="words py-2 text-[18px] leading-[1.3] font-medium">
+                <p className="words py-2 text-[1.125rem] leading-[1.3] font-medium">
                   {problem.message}
                 </p>
               ) : (
@@ -81,7 +81,7 @@ function ProblemLink({ name, message }: { name: string; message: string }) {
     <a
       href={`#${fieldId(name)}`}
       onClick={(event) => goToField(event, name)}
-      className="words inline-flex min-h-key items-center py-1 text-[18px] leading-[1.3] font-medium font-stretch-[96%] desk:min-h-[40px]"
+      className="words inline-flex min-h-key items-center py-1 text-[1.125rem] leading-[1.3] font-medium font-stretch-[96%] desk:min-h-[40px]"
     >
       <span>{message}</span>
     </a>

@@ -13,7 +13,7 @@ export function Fact({ name, children }: { name: string; children: ReactNode }) 
   return (
     <div className="border-b border-hair py-2 pr-2 desk:border-b-0 desk:border-l desk:border-print desk:py-0.5 desk:pr-6 desk:pl-4">
       <dt className="lab">{name}</dt>
-      <dd className="words pt-[3px] text-[16px] leading-[1.3] font-medium">{children}</dd>
+      <dd className="words pt-[3px] text-[1rem] leading-[1.3] font-medium">{children}</dd>
     </div>
   );
 }

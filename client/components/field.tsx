@@ -33,7 +33,7 @@ export function Cells({ className = '', children }: { className?: string; childr
 }
 
 const INPUT =
-  'block w-full border-0 bg-transparent px-3 pb-2 font-gothic text-[20px] leading-[1.3] font-medium font-stretch-[94%] tabular-nums text-ink outline-none min-h-cell';
+  'block w-full border-0 bg-transparent px-3 pb-2 font-gothic text-[1.25rem] leading-[1.3] font-medium font-stretch-[94%] tabular-nums text-ink outline-none min-h-cell';
 
 /** The control reaches up behind the label's last line, so that the whole cell is the control. */
 const UNDER_LABEL = '-mt-[25px] pt-[29px]';
@@ -64,7 +64,7 @@ function Cell({
       {error && (
         <p
           id={`${id}-fault`}
-          className="-mt-0.5 flex gap-2 px-3 pb-2.5 font-gothic text-[16px] leading-[1.3] font-semibold font-stretch-[96%] text-stop"
+          className="-mt-0.5 flex gap-2 px-3 pb-2.5 font-gothic text-[1rem] leading-[1.3] font-semibold font-stretch-[96%] text-stop"
         >
           <OutsideGlyph className="mt-0.5 size-[17px]" />
           <span>{error}</span>
@@ -177,7 +177,7 @@ export function TickField({
       className={`relative block min-h-cell cursor-pointer bg-strip px-3 pt-[7px] pb-2 focus-within:outline-3 focus-within:-outline-offset-2 focus-within:outline-focus ${className}`}
     >
       <span className="lab block">{label}</span>
-      <span className="words flex items-center gap-[10px] pt-[5px] text-[18px] leading-none font-medium">
+      <span className="words flex items-center gap-[10px] pt-[5px] text-[1.125rem] leading-none font-medium">
         <input type="checkbox" {...input} id={id} name={name} className="outline-none" />
         {tick}
       </span>
@@ -212,14 +212,14 @@ export function PickField({
               value={value}
               className="peer absolute inset-0 size-full cursor-pointer opacity-0"
             />
-            <span className="words grid min-h-[50px] place-items-center rounded-key border-line border-print px-2 text-center text-[17px] leading-none font-medium peer-checked:border-ink peer-checked:bg-ink peer-checked:font-semibold peer-checked:text-paper peer-focus-visible:outline-3 peer-focus-visible:outline-offset-2 peer-focus-visible:outline-focus">
+            <span className="words grid min-h-[50px] place-items-center rounded-key border-line border-print px-2 text-center text-[1.0625rem] leading-none font-medium peer-checked:border-ink peer-checked:bg-ink peer-checked:font-semibold peer-checked:text-paper peer-focus-visible:outline-3 peer-focus-visible:outline-offset-2 peer-focus-visible:outline-focus">
               {words}
             </span>
           </label>
         ))}
       </div>
       {error && (
-        <p className="flex gap-2 pt-2 font-gothic text-[16px] leading-[1.3] font-semibold text-stop">
+        <p className="flex gap-2 pt-2 font-gothic text-[1rem] leading-[1.3] font-semibold text-stop">
           <OutsideGlyph className="mt-0.5 size-[17px]" />
           <span>{error}</span>
         </p>

@@ -38,7 +38,7 @@ function DeskPlace({ place, places }: { place: Place; places: Place[] }) {
     <Link
       to={place.to}
       aria-current={current}
-      className={`relative flex items-center px-4 font-gothic text-[17px] leading-none font-stretch-[98%] no-underline ${current ? 'font-bold text-ink after:absolute after:inset-x-4 after:-bottom-px after:h-[5px] after:bg-ink' : 'font-medium text-print'}`}
+      className={`relative flex items-center px-4 font-gothic text-[1.0625rem] leading-none font-stretch-[98%] no-underline ${current ? 'font-bold text-ink after:absolute after:inset-x-4 after:-bottom-px after:h-[5px] after:bg-ink' : 'font-medium text-print'}`}
     >
       {place.name}
     </Link>
@@ -61,7 +61,7 @@ export function DeskHead({
     >
       <Link
         to="/"
-        className="inline-flex items-center gap-3 font-gothic text-[20px] leading-none font-semibold font-stretch-[112%] tracking-[-0.005em] no-underline desk:mr-11"
+        className="inline-flex items-center gap-3 font-gothic text-[1.25rem] leading-none font-semibold font-stretch-[112%] tracking-[-0.005em] no-underline desk:mr-11"
       >
         <FuseMark />
         Fusekeeper
@@ -74,7 +74,7 @@ export function DeskHead({
       <div className="ml-auto flex items-center gap-5">
         <Link
           to="/account"
-          className="hidden min-h-10 items-center font-gothic text-[16px] leading-none font-medium text-print no-underline hover:underline wide:inline-flex"
+          className="hidden min-h-10 items-center font-gothic text-[1rem] leading-none font-medium text-print no-underline hover:underline wide:inline-flex"
         >
           {who}
         </Link>
@@ -158,7 +158,7 @@ export function SitePage({ back, top, children, deck, isWide = false }: SitePage
         {back && (
           <Link
             to={back.to}
-            className="inline-flex min-h-touch min-w-12 items-center gap-2 px-2 font-gothic text-[17px] leading-none font-semibold no-underline before:ml-1 before:size-[10px] before:rotate-45 before:border-b-[2.5px] before:border-l-[2.5px] before:border-current before:content-['']"
+            className="inline-flex min-h-touch min-w-12 items-center gap-2 px-2 font-gothic text-[1.0625rem] leading-none font-semibold no-underline before:ml-1 before:size-[10px] before:rotate-45 before:border-b-[2.5px] before:border-l-[2.5px] before:border-current before:content-['']"
           >
             {back.name}
           </Link>

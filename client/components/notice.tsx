@@ -53,7 +53,7 @@ export function Notice({ kind = 'note', head, children, role, className = '' }: 
             {head}
           </p>
         )}
-        {children && <div className="text-[16px] leading-[1.42]">{children}</div>}
+        {children && <div className="text-[1rem] leading-[1.42]">{children}</div>}
       </div>
     </div>
   );
@@ -62,7 +62,7 @@ export function Notice({ kind = 'note', head, children, role, className = '' }: 
 /** A callback: the loop arrow between double rules. */
 export function CallbackNotice({ head, children }: { head: ReactNode; children?: ReactNode }) {
   return (
-    <aside className="grid grid-cols-[40px_minmax(0,1fr)] gap-3.5 border-y-twin border-ink [border-block-style:double] py-3.5 text-[16px] leading-[1.35]">
+    <aside className="grid grid-cols-[40px_minmax(0,1fr)] gap-3.5 border-y-twin border-ink [border-block-style:double] py-3.5 text-[1rem] leading-[1.35]">
       <span className="pt-1">
         <LoopArrow />
       </span>

@@ -42,7 +42,7 @@ export function Empty({ head, children, keys }: EmptyProps) {
   return (
     <section>
       <PrintedPaper />
-      <h2 className="pt-6 font-serif text-[28px] leading-[1.12] font-semibold tracking-[-0.012em] desk:pt-[34px] desk:text-[32px]">
+      <h2 className="pt-6 font-serif text-[1.75rem] leading-[1.12] font-semibold tracking-[-0.012em] desk:pt-[34px] desk:text-[2rem]">
         {head}
       </h2>
       <div className="max-w-[58ch] pt-2.5 pb-[22px] text-say">{children}</div>

@@ -7,7 +7,7 @@ import { PageHeading } from './page-heading.tsx';
 /** Waiting is a sentence. */
 export function Waiting({ children }: { children: ReactNode }) {
   return (
-    <p role="status" className="words py-6 text-[18px] text-print">
+    <p role="status" className="words py-6 text-[1.125rem] text-print">
       {children}
     </p>
   );

@@ -12,10 +12,10 @@ export function ChoiceList({ choices }: { choices: Choice[] }) {
             onClick={onPick}
             className="group flex min-h-14 w-full cursor-pointer flex-wrap items-baseline gap-x-4 py-3 text-left"
           >
-            <span className="words text-[18px] leading-[1.2] font-semibold underline decoration-1 underline-offset-[0.25em]">
+            <span className="words text-[1.125rem] leading-[1.2] font-semibold underline decoration-1 underline-offset-[0.25em]">
               {name}
             </span>
-            <span className="words text-[16px] leading-[1.3] text-print">{details}</span>
+            <span className="words text-[1rem] leading-[1.3] text-print">{details}</span>
           </button>
         </li>
       ))}

@@ -20,7 +20,7 @@ export function RunRows({ runs, zone, nowMs }: RunRowsProps) {
           <p className="words text-small leading-[1.25] text-print">
             <Link
               to={`/runs/${run.id}`}
-              className="inline-flex min-h-touch items-center text-[18px] leading-[1.2] font-semibold text-ink desk:min-h-10"
+              className="inline-flex min-h-touch items-center text-[1.125rem] leading-[1.2] font-semibold text-ink desk:min-h-10"
             >
               {run.label}
             </Link>
@@ -31,7 +31,7 @@ export function RunRows({ runs, zone, nowMs }: RunRowsProps) {
           <p className="words text-right text-small leading-[1.3] desk:text-left">
             <CallGlyphs calls={run.calls} />
             <br />
-            <b className={`text-[17px] ${run.outcome === 'stop' ? 'text-stop' : ''}`}>
+            <b className={`text-[1.0625rem] ${run.outcome === 'stop' ? 'text-stop' : ''}`}>
               {OUTCOME_WORDS[run.outcome]}
             </b>
             <span className="text-print">, {HEADLINE_WORDS[run.headline]}</span>

@@ -8,7 +8,7 @@ export function ClosedLink({ shop, message }: { shop: ShopToReach; message: stri
   return (
     <main id="main" className="mx-auto max-w-letter px-5 pt-3 pb-10">
       <div className="flex min-h-14 items-center justify-between border-b-bar border-ink">
-        <p className="font-gothic text-[20px] font-semibold font-stretch-[108%]">{shop.name}</p>
+        <p className="font-gothic text-[1.25rem] font-semibold font-stretch-[108%]">{shop.name}</p>
         <ThemeWord />
       </div>
       <div className="pt-6">

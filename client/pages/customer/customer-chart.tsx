@@ -42,9 +42,9 @@ function Notes({ notes }: Pick<SharedRun, 'notes'>) {
       {letterNotes(notes).map((note) => (
         <li
           key={note.letter}
-          className="grid break-inside-avoid grid-cols-[26px_minmax(0,1fr)] border-b border-hair py-2 text-[17px] leading-[1.35] print:py-0.5 print:text-[13px]"
+          className="grid break-inside-avoid grid-cols-[26px_minmax(0,1fr)] border-b border-hair py-2 text-[1.0625rem] leading-[1.35] print:py-0.5 print:text-[13px]"
         >
-          <b className="font-gothic text-[16px] print:text-[13px]">{note.letter}</b>
+          <b className="font-gothic text-[1rem] print:text-[13px]">{note.letter}</b>
           <span>
             {note.text} <span className="fig text-print">at {formatMoment(note.timeS)}</span>
           </span>

@@ -16,7 +16,7 @@ export function CustomerPage() {
   if (shared.isPending) {
     return (
       <main className="mx-auto max-w-letter px-5">
-        <p role="status" className="words py-6 text-[18px] text-print">
+        <p role="status" className="words py-6 text-[1.125rem] text-print">
           Opening…
         </p>
       </main>

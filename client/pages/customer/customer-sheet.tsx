@@ -47,10 +47,10 @@ function ShopHead({ shared }: { shared: SharedRun }) {
     <header>
       <div className="flex items-center justify-between gap-4 border-b-bar border-ink pt-2 pb-3 print:pt-0 print:pb-2">
         <div className="print:flex print:w-full print:items-baseline print:justify-between">
-          <p className="font-gothic text-[20px] leading-tight font-semibold font-stretch-[108%]">
+          <p className="font-gothic text-[1.25rem] leading-tight font-semibold font-stretch-[108%]">
             {shop.name}
           </p>
-          <p className="words pt-1 text-[16px] font-medium">
+          <p className="words pt-1 text-[1rem] font-medium">
             {[shop.town].filter(Boolean).map((town) => `${town} · `)}
             <Phone number={shop.phone} />
           </p>
@@ -80,7 +80,7 @@ function SafeTonight({ safe }: { safe: WordedForCustomer['safeTonight'] }) {
         <h2 id="tonight" className="lab print:text-[12px]">
           May you use it tonight?
         </h2>
-        <p className="words pt-0.5 text-[19px] leading-[1.3] font-semibold print:text-[15px]">
+        <p className="words pt-0.5 text-[1.1875rem] leading-[1.3] font-semibold print:text-[15px]">
           {safe.sentence}
         </p>
       </div>
@@ -96,7 +96,7 @@ function Lines({ name, lines }: { name: string; lines: string[] }) {
         {lines.map((line) => (
           <li
             key={line}
-            className="border-b border-hair py-2 text-[18px] leading-[1.42] print:py-1 print:text-[13.5px]"
+            className="border-b border-hair py-2 text-[1.125rem] leading-[1.42] print:py-1 print:text-[13.5px]"
           >
             {line}
           </li>
@@ -113,7 +113,7 @@ function FootNotes({ shared }: { shared: SharedRun }) {
   const mostK = Math.max(0, ...points.map((point) => point.uTotalK));
   const within = mostK > 0 ? `, each true to within ${formatStep(mostK, unit)}` : '';
   return (
-    <footer className="mt-8 border-t border-rule pt-3 text-[16px] leading-[1.42] text-print print:mt-3 print:pt-1.5 print:text-[12px]">
+    <footer className="mt-8 border-t border-rule pt-3 text-[1rem] leading-[1.42] text-print print:mt-3 print:pt-1.5 print:text-[12px]">
       <p>
         The figures are readings in the air outlet{within} (19 times in 20). They show how the
         machine behaved on {longDateWords(runAtMs, shop.zone)}, and promise nothing for another day.

@@ -16,7 +16,7 @@ export function DeviceLine({ zone }: { zone: string }) {
   return (
     <aside
       aria-label="On this phone"
-      className="sticky top-0 z-10 bg-paper px-4 font-gothic text-[15px] leading-[1.25] font-medium desk:px-12 print:hidden [&>*]:border-b [&>*]:border-hair [&>*:empty]:hidden"
+      className="sticky top-0 z-10 bg-paper px-4 font-gothic text-[0.9375rem] leading-[1.25] font-medium desk:px-12 print:hidden [&>*]:border-b [&>*]:border-hair [&>*:empty]:hidden"
     >
       <div role="status" className="flex flex-wrap items-center gap-x-5">
         {waiting && (

@@ -78,7 +78,7 @@ function MachineRow({ machine }: { machine: Machine }) {
     <li className="words flex flex-wrap items-baseline gap-x-4 border-b border-hair py-1">
       <Link
         to={`/machines/${machine.id}`}
-        className="inline-flex min-h-touch items-center text-[18px] font-semibold"
+        className="inline-flex min-h-touch items-center text-[1.125rem] font-semibold"
       >
         {machineWords(machine)}
       </Link>
@@ -90,12 +90,12 @@ function MachineRow({ machine }: { machine: Machine }) {
 function CustomerFacts({ home: { customer } }: { home: HomeListItem }) {
   return (
     <div className="pt-2 pb-1">
-      <p className="words text-[20px] font-semibold">{customer.name}</p>
+      <p className="words text-[1.25rem] font-semibold">{customer.name}</p>
       {customer.phone && (
         <p>
           <a
             href={`tel:${customer.phone.replaceAll(/[^+\d]/g, '')}`}
-            className="fig inline-flex min-h-touch items-center text-[18px]"
+            className="fig inline-flex min-h-touch items-center text-[1.125rem]"
           >
             {customer.phone}
           </a>
@@ -105,7 +105,7 @@ function CustomerFacts({ home: { customer } }: { home: HomeListItem }) {
         <p>
           <a
             href={`mailto:${customer.email}`}
-            className="words inline-flex min-h-touch items-center break-all text-[17px]"
+            className="words inline-flex min-h-touch items-center break-all text-[1.0625rem]"
           >
             {customer.email}
           </a>

@@ -20,7 +20,7 @@ export function HomesPage() {
   return (
     <DeskPage>
       <div className="grid grid-cols-[minmax(0,1fr)_auto] items-end gap-3 pb-5 wide:grid-cols-[auto_minmax(0,1fr)_auto] wide:gap-x-8">
-        <PageHeading className="wide:pb-2 wide:text-[44px] wide:leading-none">Homes</PageHeading>
+        <PageHeading className="wide:pb-2 wide:text-[2.75rem] wide:leading-none">Homes</PageHeading>
         <search className="order-last col-span-full wide:order-none wide:col-span-1">
           <Cells>
             <TextField
@@ -105,7 +105,7 @@ function HomeRow({ home }: { home: HomeListItem }) {
       <p>
         <Link
           to={`/homes/${home.id}`}
-          className="inline-flex min-h-touch items-center text-[18px] leading-[1.2] font-semibold desk:min-h-10"
+          className="inline-flex min-h-touch items-center text-[1.125rem] leading-[1.2] font-semibold desk:min-h-10"
         >
           {[home.address, home.town].filter(Boolean).join(', ')}
         </Link>

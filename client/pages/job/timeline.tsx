@@ -22,14 +22,14 @@ function VisitEntry({ visit, zone }: { visit: VisitWithRuns; zone: string }) {
   const isAhead = visit.startsAtMs > nowMs;
   return (
     <li className="grid gap-x-6 border-b border-print py-3 desk:grid-cols-[120px_minmax(0,1fr)]">
-      <p className="fig flex items-baseline gap-3 text-[20px] leading-[1.2] font-semibold desk:block desk:pt-2.5">
+      <p className="fig flex items-baseline gap-3 text-[1.25rem] leading-[1.2] font-semibold desk:block desk:pt-2.5">
         {dayWords(visit.startsAtMs, zone, nowMs)}
-        <span className="block text-[16px] font-normal text-print desk:pt-1">
+        <span className="block text-[1rem] font-normal text-print desk:pt-1">
           {timeWords(visit.startsAtMs, zone)} to {timeWords(visit.endsAtMs, zone)}
         </span>
       </p>
       <div>
-        <h3 className="words text-[18px] font-semibold">
+        <h3 className="words text-[1.125rem] font-semibold">
           <Link
             to={`/visits/${visit.id}`}
             className="inline-flex min-h-touch items-center desk:min-h-10"

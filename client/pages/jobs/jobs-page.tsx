@@ -24,7 +24,7 @@ export function JobsPage() {
   return (
     <DeskPage>
       <div className="grid grid-cols-[minmax(0,1fr)_auto] items-end gap-x-3 gap-y-3 pb-3 wide:grid-cols-[auto_minmax(0,1fr)_auto] wide:gap-x-8 wide:pb-5">
-        <PageHeading className="pb-0 wide:pb-2 wide:text-[44px] wide:leading-none">
+        <PageHeading className="pb-0 wide:pb-2 wide:text-[2.75rem] wide:leading-none">
           Jobs
         </PageHeading>
         <div className="order-last col-span-full wide:order-none wide:col-span-1">

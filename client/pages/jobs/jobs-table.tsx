@@ -81,9 +81,9 @@ function JobRow({ job, zone }: { job: JobListItem; zone: string }) {
   const isCallback = job.callsBack !== null;
   return (
     <tr
-      className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:static wide:text-[16.5px] wide:leading-[1.28] wide:*:py-[11px] wide:*:align-top ${isCallback ? RULE_ON_PHONE : ''}`}
+      className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:static wide:text-[1.03125rem] wide:leading-[1.28] wide:*:py-[11px] wide:*:align-top ${isCallback ? RULE_ON_PHONE : ''}`}
     >
-      <Td className={`fig text-[19px] font-semibold ${CELL} ${isCallback ? RULE_ON_DESK : ''}`}>
+      <Td className={`fig text-[1.1875rem] font-semibold ${CELL} ${isCallback ? RULE_ON_DESK : ''}`}>
         <Link to={`/jobs/${job.id}`} className={IN_LINE}>
           {job.number}
         </Link>
@@ -94,7 +94,7 @@ function JobRow({ job, zone }: { job: JobListItem; zone: string }) {
         {dateWords(job.takenAtMs, zone, nowMs)}
       </Td>
       <Td
-        className={`max-wide:col-start-2 max-wide:row-span-2 max-wide:row-start-1 max-wide:text-[18px] wide:whitespace-nowrap ${CELL}`}
+        className={`max-wide:col-start-2 max-wide:row-span-2 max-wide:row-start-1 max-wide:text-[1.125rem] wide:whitespace-nowrap ${CELL}`}
       >
         <b className="font-bold">{job.customer.name}</b>
         <br />
@@ -116,7 +116,7 @@ function JobRow({ job, zone }: { job: JobListItem; zone: string }) {
 function ComplaintCell({ job: { complaint, callsBack, takenAtMs }, zone }: JobCellProps) {
   return (
     <Td
-      className={`font-serif text-[16px] leading-[1.35] font-stretch-[100%] max-wide:col-span-2 max-wide:col-start-2 max-wide:row-start-3 max-wide:pt-1.5 wide:max-w-[300px] wide:min-w-[180px] ${CELL}`}
+      className={`font-serif text-[1rem] leading-[1.35] font-stretch-[100%] max-wide:col-span-2 max-wide:col-start-2 max-wide:row-start-3 max-wide:pt-1.5 wide:max-w-[300px] wide:min-w-[180px] ${CELL}`}
     >
       {quoted(complaint)}
       {callsBack && (

@@ -67,7 +67,7 @@ function Chosen({ name, children, onChange }: ChosenProps) {
     <section className="-mb-5 grid grid-cols-[minmax(0,1fr)_auto] items-center gap-4 border-b border-hair pb-2">
       <div>
         <h2 className="lab">{name}</h2>
-        <p className="words pt-0.5 text-[20px] leading-[1.3] font-semibold">{children}</p>
+        <p className="words pt-0.5 text-[1.25rem] leading-[1.3] font-semibold">{children}</p>
       </div>
       <Word onClick={onChange} aria-label={`Change the ${name.toLowerCase()}`}>
         Change

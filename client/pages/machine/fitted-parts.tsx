@@ -40,7 +40,7 @@ function PartRow({ part, machineId }: { part: FittedPart; machineId: string }) {
   return (
     <li className="words grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-6 border-b border-hair py-2 desk:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_minmax(0,1fr)_90px]">
       <p>
-        <b className={`text-[18px] font-semibold ${isOut ? 'line-through decoration-2' : ''}`}>
+        <b className={`text-[1.125rem] font-semibold ${isOut ? 'line-through decoration-2' : ''}`}>
           {rating.name}
         </b>
         <br />

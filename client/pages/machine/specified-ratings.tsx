@@ -31,7 +31,7 @@ function SettingRow({ setting, machine }: { setting: HeatSetting; machine: Machi
   const to = `/machines/${machine.id}/specified/${setting}`;
   return (
     <li className="words grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-6 border-b border-hair py-1.5 desk:grid-cols-[150px_minmax(0,1fr)_minmax(0,1fr)_auto]">
-      <h3 className="text-[18px] font-semibold">{SETTING_WORDS[setting]}</h3>
+      <h3 className="text-[1.125rem] font-semibold">{SETTING_WORDS[setting]}</h3>
       {specified ? (
         <>
           <p className="max-desk:col-start-1">

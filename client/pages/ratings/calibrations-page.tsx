@@ -127,8 +127,8 @@ function HistoryRow({ calibration, before }: HistoryRowProps) {
   const addedK = addedByK(calibration);
   const uK = calibrationU(datedCalibration(calibration).result, 0, JUDGED_ABOUT_C);
   return (
-    <li className="words border-b border-hair py-2.5 text-[16px] leading-[1.35]">
-      <p className="text-[18px] font-semibold">{dateWords(madeAtMs, zone, nowMs)}</p>
+    <li className="words border-b border-hair py-2.5 text-[1rem] leading-[1.35]">
+      <p className="text-[1.125rem] font-semibold">{dateWords(madeAtMs, zone, nowMs)}</p>
       <p>
         {CALIBRATION_KIND_WORDS[kind]}
         {referenceName !== '' && `, ${referenceName}`}: near {formatRated(JUDGED_ABOUT_C, unit)} it{' '}

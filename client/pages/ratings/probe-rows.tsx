@@ -45,7 +45,7 @@ function ProbeRow({ probe, calibrations, mayChange }: ProbeRowProps) {
     calibratedAtMs === null ? null : `certificate of ${dateWords(calibratedAtMs, zone, nowMs)}`;
   return (
     <li className="words grid items-center gap-x-6 border-b border-hair py-1 desk:grid-cols-[minmax(0,1.1fr)_minmax(0,1fr)_minmax(0,1.6fr)]">
-      <p className="text-[18px] font-semibold">
+      <p className="text-[1.125rem] font-semibold">
         {mayChange ? (
           <Link
             to={`/probes/${probe.id}`}

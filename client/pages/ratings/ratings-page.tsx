@@ -99,7 +99,7 @@ function RatingRow({ rating, mayChange }: { rating: StoredRating; mayChange: boo
   const closes = rating.closes !== null && band(rating.closes, rating.closesTol ?? 0);
   return (
     <tr className="max-desk:grid max-desk:grid-cols-2 max-desk:gap-x-4 max-desk:border-b max-desk:border-hair max-desk:py-2">
-      <Td className={`text-[18px] font-semibold max-desk:col-span-2 ${CELL}`}>
+      <Td className={`text-[1.125rem] font-semibold max-desk:col-span-2 ${CELL}`}>
         {mayChange ? (
           <Link
             to={`/ratings/${rating.id}`}

@@ -2,7 +2,7 @@ import { Link } from 'react-router-dom';
 import type { RoundsItem } from '#shared/schemas/jobs.ts';
 
 const REACH =
-  'inline-flex min-h-[50px] min-w-12 items-center font-gothic text-[16.5px] leading-[1.1] font-semibold font-stretch-[92%] underline-offset-[.28em]';
+  'inline-flex min-h-[50px] min-w-12 items-center font-gothic text-[1.03125rem] leading-[1.1] font-semibold font-stretch-[92%] underline-offset-[.28em]';
 
 /** One tap to the address in the phone's own map, to the phone, and to the machine. */
 export function Reach({ job }: Pick<RoundsItem, 'job'>) {

@@ -24,9 +24,9 @@ export function RoundStop({ visit, zone, isNext, heading: Heading }: RoundStopPr
     <li
       className={`grid grid-cols-[96px_minmax(0,1fr)] pt-3.5 pr-4 pb-1 ${isNext ? 'border-t-bar border-ink bg-strip' : 'border-t border-print'}`}
     >
-      <p className={`fig pt-2.5 pl-4 text-[25px] leading-none font-semibold ${ink}`}>
+      <p className={`fig pt-2.5 pl-4 text-[1.5625rem] leading-none font-semibold ${ink}`}>
         {timeWords(visit.startsAtMs, zone)}
-        <span className="block pt-[7px] text-[16px] font-normal text-print">
+        <span className="block pt-[7px] text-[1rem] font-normal text-print">
           to {timeWords(visit.endsAtMs, zone)}
         </span>
       </p>
@@ -39,10 +39,10 @@ export function RoundStop({ visit, zone, isNext, heading: Heading }: RoundStopPr
             {job.customer.name}
           </Link>
         </Heading>
-        <p className="words text-[16px] leading-[1.3] font-medium text-print">
+        <p className="words text-[1rem] leading-[1.3] font-medium text-print">
           {machineWords(job.machine)}
         </p>
-        <p className="pt-[5px] text-[17px] leading-[1.35]">{quoted(job.complaint)}</p>
+        <p className="pt-[5px] text-[1.0625rem] leading-[1.35]">{quoted(job.complaint)}</p>
         <StopState visit={visit} />
         <Callback visit={visit} zone={zone} />
         {isNext && (

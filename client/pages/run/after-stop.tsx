@@ -19,8 +19,8 @@ export function AfterStop({ run, about }: { run: RunPage; about: About }) {
       <ol className="gap-x-10 pt-1 desk:grid desk:grid-cols-2 wide:grid-cols-3">
         {steps.map((step, i) => (
           <li key={step} className="grid grid-cols-[26px_minmax(0,1fr)] py-1">
-            <span className="fig text-[18px] font-semibold text-print">{i + 1}</span>
-            <span className="text-[16px] leading-[1.35]">{step}</span>
+            <span className="fig text-[1.125rem] font-semibold text-print">{i + 1}</span>
+            <span className="text-[1rem] leading-[1.35]">{step}</span>
           </li>
         ))}
       </ol>

@@ -42,8 +42,8 @@ function PointCell({ point, unit }: { point: Point | null; unit: CyclesView['uni
   if (!point) return <Td>–</Td>;
   return (
     <Td>
-      <b className="fig block text-[19px] font-semibold">{figure(point, unit)}</b>
-      <span className="text-[16px]">
+      <b className="fig block text-[1.1875rem] font-semibold">{figure(point, unit)}</b>
+      <span className="text-[1rem]">
         <CallWords point={point} />
       </span>
     </Td>

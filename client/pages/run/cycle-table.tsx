@@ -34,7 +34,7 @@ export function CycleTable({ rows, judgedBy, unit }: CyclesView) {
           <RunawayRow key={row.number} row={row} unit={unit} />
         ) : (
           <tr key={row.number} className="*:align-middle">
-            <Td className="fig text-[19px]">{row.number}</Td>
+            <Td className="fig text-[1.1875rem]">{row.number}</Td>
             <SpanCell spanS={row.onS} />
             <PointCells point={row.cutOut} band={opens} unit={unit} />
             <SpanCell spanS={row.offS} />
@@ -48,7 +48,7 @@ export function CycleTable({ rows, judgedBy, unit }: CyclesView) {
 
 function SpanCell({ spanS }: { spanS: number | null }) {
   return (
-    <Td figure className="text-[19px]">
+    <Td figure className="text-[1.1875rem]">
       {spanS === null ? '–' : Math.round(spanS)}
     </Td>
   );
@@ -72,7 +72,7 @@ function PointCells({ point, band, unit }: PointCellsProps) {
   }
   return (
     <>
-      <Td figure className="text-[19px]" title={`± ${formatStep(point.uTotalK, unit)}`}>
+      <Td figure className="text-[1.1875rem]" title={`± ${formatStep(point.uTotalK, unit)}`}>
         {figure(point, unit)}
         <span className="sr-only"> plus or minus {formatStep(point.uTotalK, unit)}</span>
       </Td>
@@ -105,7 +105,7 @@ export function CallWords({ point }: { point: Point }) {
 function RunawayRow({ row, unit }: { row: CycleRow; unit: CyclesView['unit'] }) {
   return (
     <tr className="text-stop *:align-middle">
-      <Td className="fig text-[19px]">{row.number}</Td>
+      <Td className="fig text-[1.1875rem]">{row.number}</Td>
       <SpanCell spanS={row.onS} />
       <Td colSpan={7} className="pl-5">
         <span className="flex items-center gap-3">

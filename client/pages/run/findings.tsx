@@ -26,8 +26,8 @@ function FindingSheet({ number, finding, about }: FindingSheetProps) {
   return (
     <article className="border-b border-print pt-[18px] pb-[30px] last:border-b-0">
       <header className="flex items-baseline gap-4">
-        <span className="fig w-7 text-[26px] font-semibold text-print">{number}</span>
-        <h3 className="font-serif text-[23px] leading-[1.15] font-semibold tracking-[-0.01em] desk:text-finding">
+        <span className="fig w-7 text-[1.625rem] font-semibold text-print">{number}</span>
+        <h3 className="font-serif text-[1.4375rem] leading-[1.15] font-semibold tracking-[-0.01em] desk:text-finding">
           {worded.title}
         </h3>
       </header>
@@ -51,7 +51,7 @@ function Seen({ worded: { sentences, evidence } }: { worded: WordedFinding }) {
             className="words flex items-baseline justify-between gap-4 border-b border-hair py-1.5"
           >
             <dt className="lab">{label}</dt>
-            <dd className="fig text-right text-[17px] font-semibold">{value}</dd>
+            <dd className="fig text-right text-[1.0625rem] font-semibold">{value}</dd>
           </div>
         ))}
       </dl>
@@ -75,8 +75,8 @@ export function Causes({ causes }: { causes: Cause[] }) {
           {causes.map(({ cause, why, settles }) => (
             <tr key={cause}>
               <Td className="font-semibold">{cause}</Td>
-              <Td className="font-serif text-[16px] font-stretch-[100%]">{why}</Td>
-              <Td className="font-serif text-[16px] font-stretch-[100%]">{settles}</Td>
+              <Td className="font-serif text-[1rem] font-stretch-[100%]">{why}</Td>
+              <Td className="font-serif text-[1rem] font-stretch-[100%]">{settles}</Td>
             </tr>
           ))}
         </Table>
@@ -86,9 +86,9 @@ export function Causes({ causes }: { causes: Cause[] }) {
         <ol>
           {causes.map(({ cause, why, settles }) => (
             <li key={cause} className="border-b border-hair py-2.5">
-              <p className="words text-[17px] leading-[1.3] font-semibold">{cause}</p>
-              <p className="text-[16px] leading-[1.4]">{why}</p>
-              <p className="text-[16px] leading-[1.4]">
+              <p className="words text-[1.0625rem] leading-[1.3] font-semibold">{cause}</p>
+              <p className="text-[1rem] leading-[1.4]">{why}</p>
+              <p className="text-[1rem] leading-[1.4]">
                 <span className="lab">Settles it: </span>
                 {settles}
               </p>
@@ -108,7 +108,7 @@ export function NextChecks({ checks }: { checks: string[] }) {
       <ul>
         {checks.map((check) => (
           <li key={check}>
-            <label className="words grid min-h-touch cursor-pointer grid-cols-[24px_minmax(0,1fr)] items-center gap-3 py-1 text-[17px] leading-[1.3] font-medium">
+            <label className="words grid min-h-touch cursor-pointer grid-cols-[24px_minmax(0,1fr)] items-center gap-3 py-1 text-[1.0625rem] leading-[1.3] font-medium">
               <input type="checkbox" />
               {check}
             </label>

@@ -10,7 +10,7 @@ export function HowRead({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
   return (
     <section aria-labelledby="how-read">
       <SectionHead id="how-read">How the file was read</SectionHead>
-      <p className="max-w-read py-3 text-[16px] leading-[1.42]">
+      <p className="max-w-read py-3 text-[1rem] leading-[1.42]">
         {run.samples.toLocaleString('en-US')} readings over {formatSpan(run.durationS)} from the
         column “{run.channel}”, in {run.channelUnit === 'K' ? 'kelvin' : `°${run.channelUnit}`}.{' '}
         {setAsideWords(run)} {spikeWords(analysis.spikes)} A reading scatters by{' '}
@@ -36,7 +36,7 @@ export function HowRead({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
           {run.file.name}, {bytesWords(run.file.bytes)}, as it came
         </a>
       </p>
-      <p className="text-[13px] leading-[1.4] break-all text-print">SHA-256 {run.file.sha256}</p>
+      <p className="text-[0.8125rem] leading-[1.4] break-all text-print">SHA-256 {run.file.sha256}</p>
     </section>
   );
 }
@@ -55,7 +55,7 @@ function ListOf({ name, rows, more = 0 }: { name: string; rows: Row[]; more?: nu
         {rows.slice(0, MOST_ROWS).map(({ at, said }, i) => (
           <li
             key={i}
-            className="grid grid-cols-[80px_minmax(0,1fr)] border-t border-hair py-1.5 text-[16px] leading-[1.35]"
+            className="grid grid-cols-[80px_minmax(0,1fr)] border-t border-hair py-1.5 text-[1rem] leading-[1.35]"
           >
             <span className="fig">{at}</span>
             <span className="break-words">{said}</span>

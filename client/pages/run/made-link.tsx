@@ -38,7 +38,7 @@ export function MadeLink({ share, zone, shopName }: MadeLinkProps) {
           readOnly
           value={share.url}
           onFocus={(event) => event.currentTarget.select()}
-          className="fig mt-1 block min-h-touch w-full border border-print bg-strip px-3 text-[17px]"
+          className="fig mt-1 block min-h-touch w-full border border-print bg-strip px-3 text-[1.0625rem]"
         />
       </label>
       <div className="flex flex-wrap items-center gap-2 pt-3">

@@ -108,7 +108,7 @@ export function NoteForm(props: NoteFormProps) {
   return (
     <form onSubmit={handleSubmit} noValidate className="max-w-form pt-2 pb-6">
       <ErrorSummary problems={problemsOf(errors, refusal?.message ?? null)} attempt={submitCount} />
-      <h3 ref={heading} tabIndex={-1} className="words pb-2 text-[18px] font-semibold outline-none">
+      <h3 ref={heading} tabIndex={-1} className="words pb-2 text-[1.125rem] font-semibold outline-none">
         {writing.noteId === null ? 'Add a note' : 'Change the note'}
       </h3>
       <p className="pb-3 text-small">Tap the trace to pick its place, or type it.</p>

@@ -22,8 +22,8 @@ export function NoteList({ run, notes, unit, onChange }: NoteListProps) {
             key={note.id}
             className="grid min-h-touch grid-cols-[26px_minmax(0,1fr)_auto] items-center gap-x-2 border-b border-hair"
           >
-            <b className="font-gothic text-[16px]">{note.letter}</b>
-            <p className="py-2 text-[16px] leading-[1.35]">
+            <b className="font-gothic text-[1rem]">{note.letter}</b>
+            <p className="py-2 text-[1rem] leading-[1.35]">
               {note.text}{' '}
               <span className="fig whitespace-nowrap text-print">
                 {formatMoment(note.timeS)}, {formatTemp(note.tempC, unit)}

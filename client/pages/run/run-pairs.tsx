@@ -60,10 +60,10 @@ type PairSheetProps = {
 function PairSheet({ worded, first, second, ownId, zone }: PairSheetProps) {
   return (
     <article className="border-b border-print pt-[18px] pb-[30px] last:border-b-0">
-      <h3 className="font-serif text-[23px] leading-[1.15] font-semibold tracking-[-0.01em]">
+      <h3 className="font-serif text-[1.4375rem] leading-[1.15] font-semibold tracking-[-0.01em]">
         {worded.title}
       </h3>
-      <p className="words pt-1.5 text-[16px]">
+      <p className="words pt-1.5 text-[1rem]">
         <SideWords side={first} ownId={ownId} zone={zone} />.{' '}
         <SideWords side={second} ownId={ownId} zone={zone} />.
       </p>
@@ -123,7 +123,7 @@ function Figures({ worded, first, second }: { worded: WordedPair; first: Side; s
         {worded.rows.map((row) => (
           <li
             key={row.label}
-            className="words border-b border-hair py-2 text-[16px] leading-[1.35]"
+            className="words border-b border-hair py-2 text-[1rem] leading-[1.35]"
           >
             <b className="lab block">{row.label}</b>
             <span className="fig">

@@ -21,7 +21,7 @@ export function ShareList({ runId, shares, zone }: ShareListProps) {
         {shares.map((share) => (
           <li
             key={share.id}
-            className="words flex flex-wrap items-center justify-between gap-x-6 border-t border-hair py-1 text-[16px] leading-[1.35]"
+            className="words flex flex-wrap items-center justify-between gap-x-6 border-t border-hair py-1 text-[1rem] leading-[1.35]"
           >
             <p className="py-1.5">
               Made {momentWords(share.madeAtMs, zone, nowMs)} by {share.by}.{' '}

@@ -36,7 +36,7 @@ export function TitleBlock({ run, about, zone }: TitleBlockProps) {
         </PageHeading>
         {worded && <Outcome outcome={analysis.outcome} sentence={worded.sentence} />}
         {analysis.notJudged && (
-          <p className="words pt-1 text-[16px]">{wordNotJudged(analysis.notJudged)}</p>
+          <p className="words pt-1 text-[1rem]">{wordNotJudged(analysis.notJudged)}</p>
         )}
       </div>
       <RunFacts run={run} unit={about.unit} />
@@ -70,7 +70,7 @@ function Outcome({
   const [first, ...rest] = sentence.split(/(?<=\.)\s/);
   return (
     <p
-      className={`words flex items-center gap-3 pt-2 text-[19px] leading-[1.25] font-medium ${outcome === 'stop' ? 'text-stop' : ''}`}
+      className={`words flex items-center gap-3 pt-2 text-[1.1875rem] leading-[1.25] font-medium ${outcome === 'stop' ? 'text-stop' : ''}`}
     >
       <Sign className="size-7" />
       <span>

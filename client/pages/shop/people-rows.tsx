@@ -54,7 +54,7 @@ function PersonRow({ person, isOwn, onDisable, onEnable }: PersonRowProps) {
   const isDisabled = person.disabledAtMs !== null;
   return (
     <li className="words grid min-h-touch grid-cols-[minmax(0,1fr)_auto] items-center gap-x-6 border-b border-hair py-1 desk:grid-cols-[minmax(0,1fr)_minmax(0,1.2fr)_120px_120px]">
-      <p className={`text-[18px] font-semibold ${isDisabled ? 'text-print line-through' : ''}`}>
+      <p className={`text-[1.125rem] font-semibold ${isDisabled ? 'text-print line-through' : ''}`}>
         {person.name}
       </p>
       <p className="break-all max-desk:col-start-1">{person.email}</p>

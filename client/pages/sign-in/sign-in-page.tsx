@@ -67,7 +67,7 @@ export function SignInPage() {
     <main id="main">
       <OpeningStrip />
       <div className="mx-auto flex max-w-[1440px] items-center justify-between pt-2 pr-2 pl-4 desk:px-[84px] desk:pt-10">
-        <p className="inline-flex items-center gap-3 font-gothic text-[21px] leading-none font-semibold font-stretch-[112%] desk:text-[26px]">
+        <p className="inline-flex items-center gap-3 font-gothic text-[1.3125rem] leading-none font-semibold font-stretch-[112%] desk:text-[1.625rem]">
           <FuseMark className="w-[51px]" />
           Fusekeeper
         </p>

@@ -70,7 +70,7 @@ function Unsent({ unsent, zone }: { unsent: KeptThing[]; zone: string }) {
       <ul>
         {groupThings(unsent).map((group) => (
           <li key={group.key} className="border-b border-hair py-2.5">
-            <span className="words block text-[17px] leading-[1.25] font-medium">
+            <span className="words block text-[1.0625rem] leading-[1.25] font-medium">
               {groupWords(group)}
               <span className="pl-3 text-print">
                 {momentWords(group.things[0].madeAtMs, zone, nowMs)}

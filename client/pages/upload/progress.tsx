@@ -13,7 +13,7 @@ export function Progress({ children, share, figure }: ProgressProps) {
   return (
     <div className="py-6">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4 pb-2">
-        <p role="status" className="words text-[18px] font-medium">
+        <p role="status" className="words text-[1.125rem] font-medium">
           {children}
         </p>
         <p className="fig text-table text-print">{figure}</p>

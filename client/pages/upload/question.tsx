@@ -54,7 +54,7 @@ export function Question({ upload, question, onLeave }: QuestionProps) {
         <legend className="sr-only">{HEADINGS[question.about]}</legend>
         {question.options.map((option, index) => (
           <div key={option.answer} className="border-b border-rule p-3 last:border-b-0 desk:p-5">
-            <label className="words flex min-h-touch cursor-pointer items-center gap-3.5 text-[18px] font-semibold">
+            <label className="words flex min-h-touch cursor-pointer items-center gap-3.5 text-[1.125rem] font-semibold">
               <input
                 type="radio"
                 name="answer"

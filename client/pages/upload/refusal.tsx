@@ -69,7 +69,7 @@ function WhereItStands({ problem: { row, column, value } }: { problem: Problem }
       {facts.map(({ name, fact }) => (
         <div key={name} className="min-w-24 border-r border-rule px-4 py-2.5 last:border-r-0">
           <dt className="lab">{name}</dt>
-          <dd className="fig max-w-full text-[20px] leading-[1.3] font-medium wrap-anywhere whitespace-pre-wrap">
+          <dd className="fig max-w-full text-[1.25rem] leading-[1.3] font-medium wrap-anywhere whitespace-pre-wrap">
             {fact}
           </dd>
         </div>

@@ -115,7 +115,7 @@ function Picker({ fault, onPick }: PickerProps) {
             onPick(event.target.files?.[0]);
             event.target.value = '';
           }}
-          className="words w-full min-w-0 cursor-pointer text-[17px] file:mr-4 file:min-h-main file:cursor-pointer file:rounded-key file:border-line file:border-solid file:border-ink file:bg-ink file:px-[22px] file:font-gothic file:text-press file:text-paper"
+          className="words w-full min-w-0 cursor-pointer text-[1.0625rem] file:mr-4 file:min-h-main file:cursor-pointer file:rounded-key file:border-line file:border-solid file:border-ink file:bg-ink file:px-[22px] file:font-gothic file:text-press file:text-paper"
         />
         <p className="hidden text-body desk:block">
           {isOver ? 'Let go to send it.' : 'Or drop it on this field.'}
@@ -123,7 +123,7 @@ function Picker({ fault, onPick }: PickerProps) {
         {fault && (
           <p
             id={`${id}-fault`}
-            className="flex gap-2 font-gothic text-[16px] leading-[1.3] font-semibold text-stop"
+            className="flex gap-2 font-gothic text-[1rem] leading-[1.3] font-semibold text-stop"
           >
             <OutsideGlyph className="mt-0.5 size-[17px]" />
             <span className="min-w-0 wrap-anywhere">{fault}</span>

@@ -44,7 +44,7 @@ function MachineFacts({ machine, zone, nowMs }: MachineFactsProps) {
       <p className="pt-1">
         <WordLink to={`/machines/${machine.id}`}>{machineWords(machine)}</WordLink>
       </p>
-      <p className="words text-[16px] text-print">{rated.filter(Boolean).join(', ')}</p>
+      <p className="words text-[1rem] text-print">{rated.filter(Boolean).join(', ')}</p>
       {machine.specified.length === 0 ? (
         <Notice kind="watch" head="No rating is set for this machine." className="mt-3">
           <p>A run shows its points then, and none is judged.</p>
@@ -77,7 +77,7 @@ function Row({ name, value, note }: { name: string; value: string; note: string 
   return (
     <div className="grid grid-cols-[minmax(0,2fr)_minmax(0,3fr)] gap-3 border-b border-hair py-2.5">
       <dt className="lab pt-px">{name}</dt>
-      <dd className="words text-[17px] leading-[1.25] font-medium">
+      <dd className="words text-[1.0625rem] leading-[1.25] font-medium">
         {value}
         {note && <span className="block text-small text-print">{note}</span>}
       </dd>

@@ -66,17 +66,17 @@ function RunRow({ run, zone }: { run: RunCard; zone: string }) {
     <li className="border-b border-hair">
       <Link
         to={`/runs/${run.id}`}
-        className="words grid min-h-pad grid-cols-[minmax(0,1fr)_132px_minmax(76px,auto)] items-center gap-3 py-2 text-[15px] leading-[1.25] font-medium no-underline max-[370px]:grid-cols-[minmax(0,1fr)_auto]"
+        className="words grid min-h-pad grid-cols-[minmax(0,1fr)_132px_minmax(76px,auto)] items-center gap-3 py-2 text-[0.9375rem] leading-[1.25] font-medium no-underline max-[370px]:grid-cols-[minmax(0,1fr)_auto]"
       >
         <span>
-          <b className="block text-[18px] font-semibold underline decoration-1 underline-offset-[.2em]">
+          <b className="block text-[1.125rem] font-semibold underline decoration-1 underline-offset-[.2em]">
             {run.label}
           </b>
           <span className="text-print">{timeWords(run.startedAtMs, zone)}</span>
         </span>
         <Spark card={run} className="max-[370px]:col-span-2 max-[370px]:row-start-2" />
         <span>
-          <b className={`block text-[18px] font-semibold ${isStop ? 'text-stop' : ''}`}>
+          <b className={`block text-[1.125rem] font-semibold ${isStop ? 'text-stop' : ''}`}>
             {isStop ? 'Stop' : OUTCOME_WORDS[run.outcome]}
           </b>
           <CallGlyphs calls={run.calls} most={5} />

@@ -71,7 +71,7 @@ function PrintedCautions({ cautions }: { cautions: readonly string[] }) {
       {cautions.map((caution) => (
         <li
           key={caution}
-          className="words border-b border-hair py-2.5 text-[17px] leading-[1.25] font-medium"
+          className="words border-b border-hair py-2.5 text-[1.0625rem] leading-[1.25] font-medium"
         >
           {caution}
         </li>

@@ -19,10 +19,10 @@ export function VisitKeys({ visit }: { visit: VisitPage }) {
           href={`#${id}`}
           className="grid min-h-[58px] min-w-0 content-center justify-items-center gap-0.5 rounded-key border-line border-print bg-key px-1 text-center no-underline active:border-ink active:bg-ink active:text-paper"
         >
-          <b className="font-gothic text-[17px] leading-[1.1] font-semibold font-stretch-[94%]">
+          <b className="font-gothic text-[1.0625rem] leading-[1.1] font-semibold font-stretch-[94%]">
             {name}
           </b>
-          <span className="w-full truncate font-gothic text-[14px] leading-[1.2] font-medium">
+          <span className="w-full truncate font-gothic text-[0.875rem] leading-[1.2] font-medium">
             {state}
           </span>
         </a>

@@ -31,7 +31,7 @@ export function FirstRows({ rows, caption, unit }: FirstRowsProps) {
           <Td figure className="text-print">
             {row}
           </Td>
-          <Td className="text-[15px] text-print">
+          <Td className="text-[0.9375rem] text-print">
             <Cells cells={cells} />
           </Td>
           <Td figure className="font-semibold">

@@ -10,7 +10,7 @@ export function MarksForm({ form }: { form: UploadForm }) {
   const { fields, append, remove } = useFieldArray({ control: form.control, name: 'marks' });
   return (
     <>
-      <p className="pb-3 text-[16px]">
+      <p className="pb-3 text-[1rem]">
         A click heard, the heat turned off, the door opened: each with its time of the run. A turn
         made by hand is then not taken for the thermostat’s.
       </p>

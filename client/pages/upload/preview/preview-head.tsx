@@ -21,7 +21,7 @@ export function PreviewHead({ upload, preview, hasErrors }: PreviewHeadProps) {
       <PageHeading className="pt-1" hasErrors={hasErrors} title={`Look over ${upload.fileName}`}>
         {readings}
       </PageHeading>
-      <p className="words flex flex-wrap gap-x-3 pt-1.5 pb-4 text-[17px] font-medium">
+      <p className="words flex flex-wrap gap-x-3 pt-1.5 pb-4 text-[1.0625rem] font-medium">
         <span>{foundWords(analysis)}</span>
         {analysis.notJudged === null && <CallGlyphs calls={callsOf(analysis)} most={12} />}
         {skippedCount > 0 && (

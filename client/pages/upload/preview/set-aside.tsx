@@ -12,14 +12,14 @@ export function SetAside({ preview }: { preview: ReadPreview }) {
       {warnings.length > 0 && (
         <ul>
           {warnings.map(({ code, row, message }, index) => (
-            <li key={`${code}-${row}-${index}`} className="border-b border-hair py-2 text-[16px]">
+            <li key={`${code}-${row}-${index}`} className="border-b border-hair py-2 text-[1rem]">
               {message}
             </li>
           ))}
         </ul>
       )}
       {skippedCount === 0 ? (
-        <p className="py-2 text-[16px]">No row was set aside.</p>
+        <p className="py-2 text-[1rem]">No row was set aside.</p>
       ) : (
         <ul>
           {first.map((skipped) => (
@@ -48,7 +48,7 @@ export function SetAside({ preview }: { preview: ReadPreview }) {
 
 function SkippedRow({ row, why }: { row: number; why: string }) {
   return (
-    <li className="words grid grid-cols-[92px_minmax(0,1fr)] gap-3 border-b border-hair py-2 text-[16px] leading-[1.3]">
+    <li className="words grid grid-cols-[92px_minmax(0,1fr)] gap-3 border-b border-hair py-2 text-[1rem] leading-[1.3]">
       <span className="fig font-semibold">Row {row.toLocaleString('en-US')}</span>
       <span className="wrap-anywhere">{why}</span>
     </li>
