@@ -10,6 +10,9 @@ const BENCHES: Record<string, () => Promise<{ bench: (args: string[]) => void | 
     reading: () => import('./reading/reading.ts'),
     chart: () => import('./chart/chart.ts'),
     server: () => import('./server/server.ts'),
+    stopwatch: () => import('./stopwatch/stopwatch.ts'),
+    clock: () => import('./clock/clock.ts'),
+    schedules: () => import('./schedules/schedules.ts'),
   };
 
 async function run([asked, ...args]: string[]): Promise<void> {
@@ -21,6 +24,8 @@ async function run([asked, ...args]: string[]): Promise<void> {
   }
 }
 
+// Broken off, it still ends the servers and browsers that it began.
+for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, () => process.exit(1));
 await run(process.argv.slice(2));
 
 export {};

@@ -34,9 +34,17 @@ export async function ownServer(built = 'dist') {
       stdio: ['ignore', 'pipe', 'inherit'],
     });
     child = started;
+    // Not left behind, whatever ends the test.
+    const endIt = () => started.kill('SIGKILL');
+    process.once('exit', endIt);
+    started.once('exit', () => process.off('exit', endIt));
     let said = '';
     started.stdout.on('data', (chunk: Buffer) => (said += chunk.toString()));
-    while (!said.includes('Fusekeeper is at')) await once(started.stdout, 'data');
+    while (!said.includes('Fusekeeper is at')) {
+      if (started.exitCode !== null || started.signalCode !== null)
+        throw new Error(`the server did not start: ${said}`);
+      await Promise.race([once(started.stdout, 'data'), once(started, 'exit')]);
+    }
   }
 
   function isUp(): boolean {
