@@ -48,6 +48,8 @@ export type AppParts = {
   logger: Logger;
   /** Serves the browser application; none in tests of the API. */
   pages?: RequestHandler;
+  /** What judging again is done by; the engine's own version where left out. */
+  engineVersion?: string;
   /** Vite serves the pages: no Content-Security-Policy. */
   development?: boolean;
 };

@@ -1,6 +1,7 @@
 import { isRunEvent, type RunEvent } from '#shared/recorder/run-event.ts';
 import { replayRun } from '#shared/recorder/replay-run.ts';
-import { keepThing, letGoOfChain, thisDevice } from './this-device.ts';
+import type { KeptThing } from './device-db.ts';
+import { keepThing, letGoOfChain, thingsOfChain, thisDevice } from './this-device.ts';
 
 const CHAIN = 'run:';
 /** The character after the colon: where the chains of runs end. */
@@ -9,6 +10,11 @@ const PAST_CHAIN = 'run;';
 /** Resolves once the event would survive a power cut. @throws {KeepError} it was not kept */
 export async function keepRunEvent(event: RunEvent): Promise<void> {
   await keepThing('run-event', event, { chain: CHAIN + event.runId });
+}
+
+/** Everything of one run that lies here, sent or not, in order. */
+export function thingsOfRun(runId: string): Promise<KeptThing[]> {
+  return thingsOfChain(CHAIN + runId);
 }
 
 /** Lets go of a run that the server has whole; one with something unsent stays. */

@@ -13,15 +13,25 @@ import type { AnalysisHead, NewAnalysis } from './run.ts';
 type HeadRow = {
   id: string;
   run_id: string;
+  version: string;
   made_at_ms: number | string;
   judged_by: string | null;
   outcome: string;
   headline: string;
   calls: string;
 };
-type AnalysisRow = HeadRow & { version: string; judged_with: string | null; result: string };
+type AnalysisRow = HeadRow & { judged_with: string | null; result: string };
 
-const HEAD = ['id', 'run_id', 'made_at_ms', 'judged_by', 'outcome', 'headline', 'calls'] as const;
+const HEAD = [
+  'id',
+  'run_id',
+  'version',
+  'made_at_ms',
+  'judged_by',
+  'outcome',
+  'headline',
+  'calls',
+] as const;
 const NEWEST_FIRST = [
   { column: 'made_at_ms', order: 'desc' },
   { column: 'id', order: 'desc' },
@@ -84,6 +94,7 @@ function toHead(row: HeadRow): AnalysisHead {
   return {
     id: row.id,
     runId: row.run_id,
+    version: row.version,
     madeAtMs: Number(row.made_at_ms),
     judgedBy: toJudgedBy(row.judged_by),
     ...headWordsSchema.parse({ outcome, headline, calls: JSON.parse(calls) }),

@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { ANALYSIS_VERSION } from '#shared/analysis/analyse-run.ts';
 import { mayRecord } from '#server/access.ts';
 import { notFound } from '#server/errors.ts';
 import type { FittedPart, MachinePage } from '#shared/schemas/homes.ts';
@@ -16,8 +17,8 @@ import type { RunSources, VisitFacts } from './run-sources.ts';
 
 export type RunPages = ReturnType<typeof createRunPages>;
 
-/** All that the run page shows, for one reader. */
-export function createRunPages(db: Knex, sources: RunSources) {
+/** All that the run page shows, for one reader. @param engineVersion what judging again would be done by */
+export function createRunPages(db: Knex, sources: RunSources, engineVersion = ANALYSIS_VERSION) {
   const runs = createRunRepository(db);
   const analyses = createAnalysisRepository(db);
   const notes = createNoteRepository(db);
@@ -30,7 +31,9 @@ export function createRunPages(db: Knex, sources: RunSources) {
     if (!analysis) throw new Error(`run ${runId} has no analysis`);
     return {
       analysis,
-      earlier: earlier.map(({ id, madeAtMs, judgedBy }) => ({ id, madeAtMs, judgedBy })),
+      earlier: earlier.map(({ id, madeAtMs, judgedBy, version }) => ({
+        ...{ id, madeAtMs, judgedBy, version },
+      })),
     };
   }
 
@@ -63,6 +66,7 @@ export function createRunPages(db: Knex, sources: RunSources) {
         ...whatWasRecorded(run),
         ...whereItWas(facts),
         ...(await results(id)),
+        engineVersion,
         probe: probe ? toProbe(probe) : null,
         fitted: fittedAt(facts.machine.fitted, run.startedAtMs),
         otherRatings: ratingsToJudgeBy(facts.machine, setting, await sources.listRatings()),

@@ -68,5 +68,5 @@ export type NewAnalysis = Judged & {
 /** What a list needs of an analysis. */
 export type AnalysisHead = Pick<
   NewAnalysis,
-  'id' | 'runId' | 'madeAtMs' | 'judgedBy' | 'outcome' | 'headline' | 'calls'
+  'id' | 'runId' | 'version' | 'madeAtMs' | 'judgedBy' | 'outcome' | 'headline' | 'calls'
 >;

@@ -38,7 +38,7 @@ export function wireRuns(parts: AppParts, { people, shop, audit }: PeopleWiring,
   const worker = createLogWorker(workers.runs);
   const runs = createRunService({ db, worker, sources, folders, now });
   const judgingOf = createJudgingOf(db, sources);
-  const pages = createRunPages(db, sources);
+  const pages = createRunPages(db, sources, parts.engineVersion);
   const readings = createRunReadings(db);
   const onDefect = (error: unknown) => logger.error({ err: error }, 'unexpected error');
 

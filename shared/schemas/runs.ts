@@ -228,7 +228,13 @@ export const runPageSchema = z.object({
   warnings: z.array(z.object({ code: z.string(), row: z.int().nullable(), message: z.string() })),
   analysis: storedAnalysisSchema,
   /** Earlier analyses of the same run, newest first. */
-  earlier: z.array(storedAnalysisSchema.pick({ id: true, madeAtMs: true, judgedBy: true })),
+  earlier: z.array(
+    storedAnalysisSchema
+      .pick({ id: true, madeAtMs: true, judgedBy: true })
+      .extend({ version: z.string().default('') }),
+  ),
+  /** The engine that the server has now: what judging again would be done by. */
+  engineVersion: z.string().default(''),
   pairs: runPairsSchema,
   notes: z.array(noteSchema),
   /** The signed-in person may write notes, judge again and share. */

@@ -5,6 +5,7 @@ import { formatRated, formatStep } from '#shared/wording/format.ts';
 import { useJudgeAgain } from '../../api/runs.ts';
 import { Cells, SelectField } from '../../components/field.tsx';
 import { Key } from '../../components/key.tsx';
+import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { Failed } from '../../components/waiting.tsx';
 import { dateWords, timeWords } from '../../format/when.ts';
@@ -37,11 +38,24 @@ export function JudgedAgainst({ run, unit, zone }: JudgedAgainstProps) {
         <JudgedWithProbe used={judgedWith} judgedAtMs={madeAtMs} unit={unit} zone={zone} />
       )}
       <p className="py-2 text-small text-print">
-        Judged {whenWords(madeAtMs, zone)} by engine {analysis.version}.
+        Judged {whenWords(madeAtMs, zone)} by engine version {analysis.version}.
       </p>
+      <OtherEngine run={run} />
       {run.mayWrite && <JudgeAgain run={run} />}
       <Earlier run={run} unit={unit} zone={zone} />
     </section>
+  );
+}
+
+/** The shop's server has another engine by now: the answer stays as it is until somebody asks for another. */
+function OtherEngine({ run }: { run: RunPage }) {
+  const { engineVersion, analysis, mayWrite } = run;
+  if (engineVersion === '' || engineVersion === analysis.analysis.version) return null;
+  return (
+    <Notice kind="watch" head={`The shop’s server has engine version ${engineVersion} now.`}>
+      This answer stays as it was given.
+      {mayWrite && ' Judge again, and that of the other version stands beside it.'}
+    </Notice>
   );
 }
 
@@ -49,7 +63,7 @@ function Row({ name, children }: { name: string; children: React.ReactNode }) {
   return (
     <div className="flex flex-wrap items-baseline justify-between gap-x-4 border-b border-hair py-2">
       <dt className="lab">{name}</dt>
-      <dd className="fig text-[17px] font-semibold">{children}</dd>
+      <dd className="fig text-[1.0625rem] font-semibold">{children}</dd>
     </div>
   );
 }
@@ -104,9 +118,10 @@ function Earlier({ run, unit, zone }: JudgedAgainstProps) {
     <>
       <h3 className="lab pt-5 pb-1">Earlier judgements</h3>
       <ul>
-        {run.earlier.map(({ id, madeAtMs, judgedBy }) => (
-          <li key={id} className="words border-t border-hair py-2 text-[16px] leading-[1.3]">
-            {whenWords(madeAtMs, zone)},{' '}
+        {run.earlier.map(({ id, madeAtMs, judgedBy, version }) => (
+          <li key={id} className="words border-t border-hair py-2 text-[1rem] leading-[1.3]">
+            {whenWords(madeAtMs, zone)}
+            {version && `, engine version ${version}`},{' '}
             {judgedBy ? `${judgedBy.name}: ${judgedWords(judgedBy, unit)}` : 'no rating'}
           </li>
         ))}

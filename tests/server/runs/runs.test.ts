@@ -124,6 +124,7 @@ test('a run can be judged again; the earlier result stays as it was', async () =
       id: before.analysis.id,
       madeAtMs: before.analysis.madeAtMs,
       judgedBy: before.analysis.judgedBy,
+      version: before.analysis.analysis.version,
     },
   ]);
   const own = await technician.post(`/api/runs/${id}/analyses`).send({ ratingId: null });
