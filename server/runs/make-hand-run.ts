@@ -35,6 +35,8 @@ type Ended = HandRun & { end: RunEventOf<'end'> };
 export function createHandRuns({ db, worker, folders, judgingOf, now }: HandRunParts) {
   const handRuns = createHandRunRepository(db);
   const underWay = new Map<string, Promise<void>>();
+  /** Ended, and never to be runs: they are looked at once in the life of this process. */
+  const never = new Set<string>();
 
   async function make(runId: string): Promise<void> {
     if (await createRunRepository(db).find(runId)) return;
@@ -43,7 +45,7 @@ export function createHandRuns({ db, worker, folders, judgingOf, now }: HandRunP
     const run = replayRun(events);
     const toJudge = run && seriesOfRun(run);
     // Under three readings there is nothing to judge; the events are kept all the same.
-    if (!owner || !run || !isEnded(run) || !toJudge) return;
+    if (!owner || !run || !isEnded(run) || !toJudge) return void never.add(runId);
 
     const { judged, used, said } = await judgingOf(saidOf(run, toJudge));
     const { timesS, tempsC } = toJudge.series;
@@ -110,7 +112,9 @@ export function createHandRuns({ db, worker, folders, judgingOf, now }: HandRunP
   return {
     /** Every run that has ended and is not made yet, also one that a crash came between. */
     async makeEnded(): Promise<void> {
-      for (const runId of await handRuns.listUnmade()) await makeOnce(runId);
+      for (const runId of await handRuns.listUnmade()) {
+        if (!never.has(runId)) await makeOnce(runId);
+      }
     },
   };
 }

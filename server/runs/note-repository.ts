@@ -42,6 +42,11 @@ export function createNoteRepository(db: Knex) {
       return rows.map(toNote);
     },
 
+    async find(runId: string, id: string): Promise<RunNote | undefined> {
+      const row = await db<NoteRow>('notes_on_runs').where({ id, run_id: runId }).first();
+      return row && toNote(row);
+    },
+
     /** How many were changed: 0 where this run has no such note. */
     update(runId: string, id: string, { timeS, tempC, text }: NewNote): Promise<number> {
       return db<NoteRow>('notes_on_runs')

@@ -5,7 +5,13 @@ import type { SendingKind } from '#shared/schemas/sending-kinds.ts';
 import type { Thing, ThingAnswer } from '#shared/schemas/sendings.ts';
 import { createReceivedRepository } from './received-repository.ts';
 import { thingHash } from './thing-hash.ts';
-import { UnreadableError, type Applied, type ApplyOn, type ThingHandler } from './thing-handler.ts';
+import {
+  NotYetError,
+  UnreadableError,
+  type Applied,
+  type ApplyOn,
+  type ThingHandler,
+} from './thing-handler.ts';
 
 export type Handlers = Partial<Record<SendingKind, ThingHandler>>;
 export type From = { person: Person; deviceId: string };
@@ -87,6 +93,7 @@ async function decide(handlers: Handlers, on: HandedOn): Promise<Decided> {
     return { answer: answerOf(id, applied, payload), isFinal: true, ...afterwardsOf(applied) };
   } catch (error) {
     if (error instanceof UnreadableError) return refusedForNow(id, 'unreadable', UNREADABLE);
+    if (error instanceof NotYetError) return notYet(id, error);
     if (!(error instanceof AppError)) throw error;
     const { code, message } = error;
     return { answer: { id, status: 'refused', code, message }, isFinal: true };
@@ -97,6 +104,10 @@ export const UNREADABLE = 'This server cannot read what was sent.';
 
 function refusedForNow(id: string, code: string, message: string): Decided {
   return { answer: { id, status: 'refused', code, message }, isFinal: false };
+}
+
+function notYet(id: string, { message, meanwhile }: NotYetError): Decided {
+  return { answer: { id, status: 'waiting', message }, isFinal: false, afterwards: meanwhile };
 }
 
 function isKnown(handlers: Handlers, kind: string): kind is SendingKind {

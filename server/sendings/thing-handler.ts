@@ -31,6 +31,17 @@ export class UnreadableError extends Error {
   override name = 'UnreadableError';
 }
 
+/** What it belongs to is on its way here; the device sends it again. `meanwhile`: work that may bring it about. */
+export class NotYetError extends Error {
+  override name = 'NotYetError';
+  readonly meanwhile: () => Promise<void>;
+
+  constructor(message: string, meanwhile: () => Promise<void>) {
+    super(message);
+    this.meanwhile = meanwhile;
+  }
+}
+
 export function thingHandler<Schema extends z.ZodType>(
   schema: Schema,
   apply: (on: ApplyOn, payload: z.output<Schema>) => Promise<Applied>,

@@ -1,7 +1,7 @@
 import type { AppParts } from '#server/app.ts';
 import { safetyTicksHandler, visitEditHandler } from '#server/jobs/visit-things.ts';
 import { runEventHandler } from '#server/runs/hand-run-thing.ts';
-import { runNoteHandler } from '#server/runs/run-note-thing.ts';
+import { runNoteHandlers } from '#server/runs/run-note-things.ts';
 import type { Handlers } from '#server/sendings/apply-once.ts';
 import { createSendingService } from '#server/sendings/sending-service.ts';
 import type { PeopleWiring } from './wire-people.ts';
@@ -16,7 +16,7 @@ export function wireSendings(
   const handlers: Handlers = {
     'visit-edit': visitEditHandler,
     'safety-ticks': safetyTicksHandler,
-    'run-note': runNoteHandler,
+    ...runNoteHandlers(handRuns.makeEnded),
     'run-event': runEventHandler(handRuns.makeEnded),
   };
   const onDefect = (error: unknown) => logger.error({ err: error }, 'unexpected error');

@@ -1,5 +1,12 @@
 /** What a device may send later. A kind is never renamed: phones out in the field may still hold some. */
-export const SENDING_KINDS = ['run-event', 'visit-edit', 'safety-ticks', 'run-note'] as const;
+export const SENDING_KINDS = [
+  'run-event',
+  'visit-edit',
+  'safety-ticks',
+  'run-note',
+  'run-note-edit',
+  'run-note-removal',
+] as const;
 export type SendingKind = (typeof SENDING_KINDS)[number];
 
 /** At most so many things in one request. */

@@ -63,10 +63,24 @@ export type SafetyTicks = z.infer<typeof safetyTicksSchema>;
 export const sentRunNoteSchema = newNoteSchema.extend({ runId: idSchema });
 export type SentRunNote = z.infer<typeof sentRunNoteSchema>;
 
+/** Another text or place for a note. `was`: the note that the writer had before them; a change meanwhile is told by it. */
+export const runNoteEditSchema = z.object({
+  runId: idSchema,
+  noteId: idSchema,
+  was: newNoteSchema,
+  now: newNoteSchema,
+});
+export type RunNoteEdit = z.infer<typeof runNoteEditSchema>;
+
+export const runNoteRemovalSchema = runNoteEditSchema.omit({ now: true });
+export type RunNoteRemoval = z.infer<typeof runNoteRemovalSchema>;
+
 /** What lies in a thing of each kind; run events have their schema in hand-run.ts. */
 export type ThingPayloads = {
   'run-event': unknown;
   'visit-edit': VisitEdit;
   'safety-ticks': SafetyTicks;
   'run-note': SentRunNote;
+  'run-note-edit': RunNoteEdit;
+  'run-note-removal': RunNoteRemoval;
 } & Record<SendingKind, unknown>;
