@@ -30,6 +30,16 @@ export function machineRunsQuery(id: string) {
   });
 }
 
+/** Clean runs to go by. Only laid by here: the stopwatch reads them, and checks them when it does. */
+export function machineReferencesQuery(id: string) {
+  const url = `/api/machines/${id}/references`;
+  return queryOptions({
+    queryKey: ['machines', id, 'references'],
+    queryFn: ({ signal }) => fetchJson(z.array(z.unknown()), url, { signal }),
+    meta: { url },
+  });
+}
+
 export function useAddMachine() {
   const queryClient = useQueryClient();
   return useMutation({

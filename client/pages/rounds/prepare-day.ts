@@ -1,7 +1,7 @@
 import type { QueryClient } from '@tanstack/react-query';
 import type { Rounds } from '#shared/schemas/jobs.ts';
 import { jobQuery } from '../../api/jobs.ts';
-import { machineQuery, machineRunsQuery } from '../../api/machines.ts';
+import { machineQuery, machineReferencesQuery, machineRunsQuery } from '../../api/machines.ts';
 import { calibrationsQuery } from '../../api/calibrations.ts';
 import { probesQuery } from '../../api/probes.ts';
 import { ratingsQuery } from '../../api/ratings.ts';
@@ -34,6 +34,7 @@ async function prepareVisit(queryClient: QueryClient, { id, job }: Rounds['visit
   await queryClient.prefetchQuery({ ...visitQuery(id), ...QUIET });
   await queryClient.prefetchQuery({ ...machineQuery(machineId), ...QUIET });
   await queryClient.prefetchQuery({ ...machineRunsQuery(machineId), ...QUIET });
+  await queryClient.prefetchQuery({ ...machineReferencesQuery(machineId), ...QUIET });
   if (job.callsBack) await queryClient.prefetchQuery({ ...jobQuery(job.callsBack.id), ...QUIET });
   const runs = queryClient.getQueryData(machineRunsQuery(machineId).queryKey) ?? [];
   for (const run of runs.slice(0, WHOLE_RUNS)) {
