@@ -10,11 +10,13 @@ export function createServerClock() {
     last: (): ServerTime | null => last,
     watch(post: PostSendings): PostSendings {
       return async (sendings) => {
-        const askedMs = performance.now();
+        const asked = { monotonicMs: performance.now(), deviceMs: Date.now() };
         const answer = await post(sendings);
-        const monotonicMs = performance.now();
-        const uMs = (monotonicMs - askedMs) / 2;
-        last = { serverMs: answer.serverNowMs + uMs, deviceMs: Date.now(), monotonicMs, uMs };
+        const [monotonicMs, deviceMs] = [performance.now(), Date.now()];
+        // Of a phone that slept over the answer only its own clock tells.
+        const tookMs = Math.max(monotonicMs - asked.monotonicMs, deviceMs - asked.deviceMs);
+        const uMs = tookMs / 2;
+        last = { serverMs: answer.serverNowMs + uMs, deviceMs, monotonicMs, uMs };
         return answer;
       };
     },

@@ -89,15 +89,24 @@ export function fetchWhatComesLater(): void {
 }
 
 const CHECK_EVERY_MS = 60_000;
+/** An answer that took longer says too little of the server's clock. */
+const CHECK_WITHIN_MS = 1_000;
 
-/** What the server's clock says is put beside the run's own, a minute apart at least. */
+/** What the server's clock says is put beside the run's own, a minute apart at least, and after each span asleep. */
 function checkClock(recorder: Recorder): () => void {
   let lastMs = -Infinity;
   return onAnswers(() => {
     const server = serverClock.last();
-    if (!server || server.monotonicMs - lastMs < CHECK_EVERY_MS) return;
+    const { events } = recorder.recording();
+    const isToCheck = events.findLast(isOfClock)?.kind === 'asleep';
+    if (!server || server.uMs > CHECK_WITHIN_MS) return;
+    if (!isToCheck && server.monotonicMs - lastMs < CHECK_EVERY_MS) return;
     lastMs = server.monotonicMs;
     const atS = recorder.at(server.monotonicMs);
     void recorder.record({ kind: 'clock-check', serverMs: Math.round(server.serverMs) }, atS);
   });
+}
+
+function isOfClock({ kind }: RunEvent): boolean {
+  return kind === 'asleep' || kind === 'clock-check';
 }
