@@ -9,13 +9,11 @@ import { words, type Shape } from './shapes.ts';
 import type { Bands, Strip } from './strip.ts';
 import { drawReadingDots, tracePath } from './trace-path.ts';
 
-/** Where the exhaust goes if nothing changes, from the pen to the wall. */
-export type LiveForecast = { earliestS: number; likelyS: number | null; latestS: number | null };
-
 export type LiveStrip = Pick<Strip, 'bands' | 'points' | 'hotSpans' | 'gaps'> & {
   timesS: Float64Array;
   tempsC: Float64Array;
-  forecast: LiveForecast | null;
+  /** When the exhaust reaches the wall if nothing changes; null where that is not drawn. */
+  wallAtS: number | null;
 };
 
 /** The strip while it is being written: paper, wall, trace, marks; the pen itself is the page's. */
@@ -54,13 +52,13 @@ function drawHairline(frame: Frame, { timesS, tempsC }: LiveStrip): Shape[] {
 }
 
 /** Dots to the wall, and a cross where they meet it. */
-function drawForecast(frame: Frame, { bands, forecast, timesS, tempsC }: LiveStrip): Shape[] {
+function drawForecast(frame: Frame, { bands, wallAtS, timesS, tempsC }: LiveStrip): Shape[] {
   const lastS = timesS.at(-1);
   const lastC = tempsC.at(-1);
-  if (!bands || !forecast || forecast.likelyS === null) return [];
-  if (lastS === undefined || lastC === undefined || forecast.likelyS <= lastS) return [];
+  if (!bands || wallAtS === null) return [];
+  if (lastS === undefined || lastC === undefined || wallAtS <= lastS) return [];
   const from = { x: xOf(frame, lastS), y: yOf(frame, lastC) };
-  const to = { x: xOf(frame, forecast.likelyS), y: yOf(frame, bands.highLimitC) };
+  const to = { x: xOf(frame, wallAtS), y: yOf(frame, bands.highLimitC) };
   const lengthPx = Math.hypot(to.x - from.x, to.y - from.y);
   const dots = Math.min(60, Math.floor(lengthPx / 6));
   const right = frame.plot.left + frame.plot.width;

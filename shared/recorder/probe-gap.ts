@@ -39,6 +39,11 @@ export function openGap(run: Readings, atS: number): { fromS: number } | null {
   return last && atS - last.atS > gapAfterS(run) ? { fromS: last.atS } : null;
 }
 
+/** Whether a live probe takes the readings at this moment, so that nobody need be asked for one. */
+export function isProbeReading(run: Readings, atS: number): boolean {
+  return lastOfProbe(run) !== null && openGap(run, atS) === null;
+}
+
 /**
  * Where the trace is not joined: within the probe's gaps, but for readings by hand that follow each other as they do by
  * hand.

@@ -8,7 +8,7 @@ import {
 } from '#shared/recorder/keypad.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
 import { expectedAt, type Entry } from './use-entry.ts';
-import { formatAt, formatElapsed, formatTyped } from './format-elapsed.ts';
+import { formatAt, formatElapsed, formatReading, formatTyped } from './format-elapsed.ts';
 
 /** What stands beside the wheels: a printed line with its figure in ink, and what to do. */
 export type CounterWords = { wheels: Wheel[]; printed: string; figure: string; todo: string };
@@ -18,6 +18,8 @@ type Situation = {
   run: HandRun;
   nowS: number;
   view: Pick<GuardView, 'says' | 'unconfirmed'>;
+  /** A live probe takes the readings. */
+  isLive: boolean;
 };
 
 /** A kept value stands in the wheels for so long. */
@@ -80,21 +82,24 @@ function keptWords({ temp, atS }: { temp: number; atS: number }, { run }: Situat
   return { wheels, printed: `Kept, ${formatAt(atS)}`, figure: '', todo: 'Undo takes it back' };
 }
 
-function waitingWords({ run, nowS, view }: Situation): CounterWords {
+function waitingWords({ run, nowS, view, isLive }: Situation): CounterWords {
   const expected = expectedAt(run, nowS);
   const typing = emptyTyping(expected);
   const wheels = wheelsOf(typing, expected, run.start);
   const last = run.readings.at(-1);
-  const figure = last ? formatTyped(last.temp, run.start.hasTenths) : '';
+  const figure = last ? formatReading(last, run.start.hasTenths) : '';
   const lastAt = last ? `Last, ${formatAt(last.atS)}:` : 'No reading yet';
   const figures = { last: 'the last two figures', all: 'all three figures' };
   const todo = `Type ${typing.asks === 'last' ? figures.last : figures.all}`;
   const { says, unconfirmed } = view;
-  if (unconfirmed && last) {
+  if (unconfirmed && last && !isLive) {
     return { wheels, printed: `${figure} is far off.`, figure: '', todo: 'Read again now' };
   }
   if (says === 'watch')
     return { wheels, printed: lastAt, figure, todo: 'Hand on the heat selector' };
+  if (says === 'quiet' && isLive) {
+    return { wheels, printed: lastAt, figure, todo: 'The probe reads; keys go on' };
+  }
   if (says === 'quiet') return { wheels, printed: lastAt, figure, todo };
   return { wheels, printed: lastAt, figure, todo: `Elapsed ${formatElapsed(nowS)}` };
 }

@@ -1,4 +1,3 @@
-import type { GuardView } from '#shared/analysis/guard/guard-state.ts';
 import { specifiedFor } from '#shared/judging/specified-for.ts';
 import { celsiusOf } from '#shared/recorder/celsius-of.ts';
 import { traceGaps } from '#shared/recorder/probe-gap.ts';
@@ -7,10 +6,17 @@ import type { LiveStrip } from '../../chart/draw-live.ts';
 import type { HotSpan } from '../../chart/strip.ts';
 import type { StopwatchMachine } from './sources.ts';
 
-/** The run as it stands on the paper right now. */
-export function liveStripOf(run: HandRun, view: GuardView, machine: StopwatchMachine): LiveStrip {
+/**
+ * The run as it stands on the paper right now.
+ *
+ * @param wallAtS when it reaches the high limit, where the guard is uneasy; null else
+ */
+export function liveStripOf(
+  run: HandRun,
+  wallAtS: number | null,
+  machine: StopwatchMachine,
+): LiveStrip {
   const { readings, start } = run;
-  const isCalm = view.says === 'quiet';
   return {
     bands: specifiedFor(machine, start.setup.setting),
     points: [],
@@ -18,7 +24,7 @@ export function liveStripOf(run: HandRun, view: GuardView, machine: StopwatchMac
     gaps: traceGaps(run),
     timesS: Float64Array.from(readings, ({ atS }) => atS),
     tempsC: Float64Array.from(readings, (reading) => celsiusOf(reading, start.unit)),
-    forecast: isCalm ? null : (view.forecast?.highLimit ?? null),
+    wallAtS,
   };
 }
 

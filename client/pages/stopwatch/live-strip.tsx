@@ -5,12 +5,12 @@ import { drawLive, type LiveStrip as Drawn } from '../../chart/draw-live.ts';
 import { xOf, yOf, type Frame } from '../../chart/frame.ts';
 import { hasHoles, liveFrame, liveSheet, liveSpanS } from '../../chart/live-frame.ts';
 import { SvgShapes } from '../../chart/svg-shapes.tsx';
-import { formatTyped } from './format-elapsed.ts';
 
-type LiveStripProps = { strip: Drawn; unit: DisplayUnit; lastTyped: number | null };
+/** `figure`: the newest reading as it stands on the pointer. */
+type LiveStripProps = { strip: Drawn; unit: DisplayUnit; figure: string | null };
 
 /** The trace as it is being written, with the pen at its end. Drawn anew when something was kept, not between. */
-export const LiveStrip = memo(function LiveStrip({ strip, unit, lastTyped }: LiveStripProps) {
+export const LiveStrip = memo(function LiveStrip({ strip, unit, figure }: LiveStripProps) {
   const { element, size } = useSize();
   const sheet = liveSheet(size.widthPx, size.heightPx);
   const lastS = strip.timesS.at(-1) ?? 0;
@@ -32,9 +32,7 @@ export const LiveStrip = memo(function LiveStrip({ strip, unit, lastTyped }: Liv
           aria-label={traceSentence(strip, unit)}
         >
           <SvgShapes shapes={drawLive(frame, strip, hasHoles(sheet))} />
-          {lastTyped !== null && (
-            <PenHead frame={frame} strip={strip} figure={formatTyped(lastTyped)} />
-          )}
+          {figure !== null && <PenHead {...{ frame, strip, figure }} />}
         </svg>
       )}
     </section>

@@ -1,24 +1,26 @@
-import { Suspense, useMemo, useState, useSyncExternalStore } from 'react';
+import { Suspense, useEffect, useState, useSyncExternalStore } from 'react';
 import { DEFAULT_RATING } from '#shared/analysis/rating.ts';
 import type { MarkKind } from '#shared/analysis/series.ts';
 import type { EndSetup } from '#shared/recorder/run-event.ts';
-import { toCelsius } from '#shared/units.ts';
-import { useSending, useUnsent } from '../../device/this-device.ts';
-import { ThemeWord } from '../../components/theme-word.tsx';
+import { celsiusOf } from '#shared/recorder/celsius-of.ts';
+import { isProbeReading } from '#shared/recorder/probe-gap.ts';
 import { Announcer } from './announcer.tsx';
 import { ClockFace } from './clock-face.tsx';
 import { Counter } from './counter.tsx';
 import { counterWords } from './counter-words.ts';
-import { formatAt, formatTyped } from './format-elapsed.ts';
+import { asByHand, formatAt, formatReading, formatTyped } from './format-elapsed.ts';
+import { FocusedHeading } from './focused-heading.tsx';
 import { GuardPanel, type GuardFacts } from './guard-panel.tsx';
 import { HaltPanel } from './halt-panel.tsx';
 import { Keypad } from './keypad.tsx';
+import { canReachProbe, followLive, ProbeLine } from './lazy-live.tsx';
 import { EndPanel, RunPanel } from './lazy-panels.tsx';
 import { LiveStrip } from './live-strip.tsx';
-import { liveStripOf } from './live-strip-of.ts';
+import { useLiveStrip } from './use-live-strip.ts';
 import { MarksPanel } from './marks-panel.tsx';
 import type { Preferences } from './preferences.ts';
 import type { Recorder } from './recorder.ts';
+import { RunTop } from './run-top.tsx';
 import type { Sources } from './sources.ts';
 import { vibrate, VIBRATIONS, type Sounds } from './sounds.ts';
 import { useAlarm, useBeat } from './use-alarm.ts';
@@ -50,21 +52,23 @@ export function RunningPage({
   const [said, setSaid] = useState('');
   const view = recorder.guardAt(nowS);
   const isHalt = view.says === 'cut-heat' || view.says === 'unplug';
-  const strip = useMemo(
-    () => liveStripOf(run, view, sources.machine),
-    [run, view, sources.machine],
-  );
+  const isLive = isProbeReading(run, nowS);
+  const wallAtS = view.says === 'quiet' ? null : (view.forecast?.highLimit?.likelyS ?? null);
+  const strip = useLiveStrip(run, wallAtS, sources.machine);
   const facts = guardFacts(recorder, sources, nowS);
   const entry = useEntry({ recorder, run, onKept: handleKept, onTakenBack: setSaid });
   useAlarm(view.says, sounds, preferences);
-  useBeat(nowS, preferences.rhythm, sounds, preferences);
+  // While the probe reads, nobody is asked to.
+  const rhythm = isLive ? null : preferences.rhythm;
+  useBeat(nowS, rhythm, sounds, preferences);
+  useEffect(() => followLive(recorder), [recorder]);
   const shown = isHalt && slip?.kind !== 'end' ? null : slip;
 
   function handleKept(): void {
     if (preferences.hasSound) sounds.kept();
     if (preferences.hasVibration) vibrate(VIBRATIONS.kept);
-    const last = recorder.recording().run.readings.at(-1);
-    if (last) setSaid(`Kept, ${formatTyped(last.temp)} at ${formatAt(last.atS)}`);
+    const last = recorder.recording().run.readings.findLast(({ from }) => from === 'hand');
+    if (last) setSaid(keptWords(last.temp, last.atS, recorder.recording().run.readings.length));
   }
 
   function mark(kind: MarkKind, atS: number, text: string | null = null): void {
@@ -99,7 +103,7 @@ export function RunningPage({
     },
   });
 
-  const words = counterWords({ entry: entry.entry, run, nowS, view });
+  const words = counterWords({ entry: entry.entry, run, nowS, view, isLive });
   const last = run.readings.at(-1);
   const { free } = entry.entry;
   return (
@@ -107,15 +111,22 @@ export function RunningPage({
       id="main"
       className={`sw sw-says-${view.says} ${preferences.hand === 'left' ? 'sw-left' : ''} ${run.start.hasTenths ? 'sw-tenths' : ''}`}
     >
-      <Top
+      <FocusedHeading className="sr-only">
+        {`${sources.machine.make} ${sources.machine.model}: a run is being taken`}
+      </FocusedHeading>
+      <RunTop
         run={run}
         machine={`${sources.machine.make} ${sources.machine.model}`}
         visitId={run.start.visitId}
         onRun={() => setSlip({ kind: 'run' })}
         onFinish={() => setSlip({ kind: 'end' })}
       />
-      {isHalt ? <HaltPanel {...facts} /> : <ClockFace timeS={nowS} rhythm={preferences.rhythm} />}
-      <LiveStrip strip={strip} unit={run.start.unit} lastTyped={last?.temp ?? null} />
+      {isHalt ? <HaltPanel {...facts} /> : <ClockFace timeS={nowS} rhythm={rhythm} />}
+      <LiveStrip
+        strip={strip}
+        unit={run.start.unit}
+        figure={last ? formatReading(last, run.start.hasTenths) : null}
+      />
       {!isHalt && <GuardPanel {...facts} />}
       <section className="sw-deck" aria-label="Keys">
         {problem && (
@@ -123,9 +134,18 @@ export function RunningPage({
             {problem}
           </p>
         )}
+        {canReachProbe && (
+          <Suspense>
+            <ProbeLine
+              {...{ run, nowS }}
+              onAnswer={() => setSlip({ kind: 'run' })}
+              onSay={setSaid}
+            />
+          </Suspense>
+        )}
         <Counter {...words} onMark={keys.marks} />
         <Keypad
-          same={last ? formatTyped(last.temp, run.start.hasTenths) : null}
+          same={last ? formatTyped(asByHand(last, run.start), run.start.hasTenths) : null}
           free={
             free && {
               canMinus: free.text === '',
@@ -177,44 +197,8 @@ export function RunningPage({
   );
 }
 
-type TopProps = {
-  run: RunningRun;
-  machine: string;
-  visitId: string;
-  onRun: () => void;
-  onFinish: () => void;
-};
-type RunningRun = ReturnType<Recorder['recording']>['run'];
-
-function Top({ run, machine, visitId, onRun, onFinish }: TopProps) {
-  const { unsent } = useUnsent();
-  const { outcome } = useSending();
-  const count = run.readings.length;
-  const readings = count === 1 ? '1 reading' : `${count} readings`;
-  return (
-    <header className="sw-top">
-      <a className="sw-back" href={`/visits/${visitId}`}>
-        Visit
-      </a>
-      <button type="button" className="sw-what" onClick={onRun}>
-        <b>
-          {machine}, {run.start.label.toLowerCase()}
-        </b>
-        <span>
-          {readings}, {unsentWords(unsent, outcome === 'signed-out')}
-        </span>
-      </button>
-      <ThemeWord />
-      <button type="button" className="word" onClick={onFinish}>
-        Finish
-      </button>
-    </header>
-  );
-}
-
-function unsentWords(unsent: number, isSignedOut: boolean): string {
-  if (unsent === 0) return 'all sent';
-  return isSignedOut ? `${unsent} to send after signing in` : `${unsent} to send`;
+function keptWords(temp: number, atS: number, count: number): string {
+  return `Kept, ${formatTyped(temp)} at ${formatAt(atS)}, ${count === 1 ? '1 reading' : `${count} readings`}`;
 }
 
 function guardFacts(recorder: Recorder, { machine }: Sources, nowS: number): GuardFacts {
@@ -226,7 +210,7 @@ function guardFacts(recorder: Recorder, { machine }: Sources, nowS: number): Gua
     unit: run.start.unit,
     highLimitC: (guard.state.setup.rating ?? DEFAULT_RATING).highLimitC,
     ceilingC: (guard.state.setup.rating ?? DEFAULT_RATING).ceilingC,
-    lastC: last ? toCelsius(last.temp, run.start.unit) : null,
+    lastC: last ? celsiusOf(last, run.start.unit) : null,
     isGas: machine.fuel === 'gas',
     isHeatOff: guard.state.off !== null,
   };

@@ -1,4 +1,4 @@
-import { useState, type ReactNode } from 'react';
+import { Suspense, useState, type ReactNode } from 'react';
 import type { RunEventOf } from '#shared/recorder/run-event.ts';
 import { specifiedFor } from '#shared/judging/specified-for.ts';
 import { RUN_CAUTIONS, SAFETY_LINE } from '#shared/wording/safety-lines.ts';
@@ -8,6 +8,7 @@ import { Notice } from '../../components/notice.tsx';
 import { SectionHead } from '../../components/section-head.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { Choice } from './choice.tsx';
+import { canReachProbe, ProbePart } from './lazy-live.tsx';
 import { HEATS, ProbeOptions } from './probe-options.tsx';
 import { keyClass } from '../../components/key-face.ts';
 import type { Preferences } from './preferences.ts';
@@ -38,6 +39,9 @@ const FIGURES = [
   { value: 'whole', words: 'Whole degrees' },
   { value: 'tenths', words: 'With tenths' },
 ] as const;
+
+const WHICH_PROBE =
+  'Choose under Probe which of the shop’s it is: its accuracy goes into every call.';
 
 /** Before the clock runs: cautions, which probe, which heat. The rest is asked for at the end. */
 export function StartPage(props: StartPageProps) {
@@ -119,12 +123,17 @@ export function StartPage(props: StartPageProps) {
             The guard goes by the usual high limit of 196 °F, and no point is judged.
           </Notice>
         )}
+        {canReachProbe && (
+          <Suspense>
+            <ProbePart hint={probeId === null ? WHICH_PROBE : undefined} />
+          </Suspense>
+        )}
         <div className="pt-4">
           <SettingsForm preferences={preferences} onPrefer={onPrefer} />
         </div>
         <p className="pt-3 text-small text-print">{SAFETY_LINE}</p>
       </div>
-      <div className="sticky bottom-0 border-t-bar border-ink bg-deck px-3 pt-2.5 pb-[max(14px,env(safe-area-inset-bottom))]">
+      <div className="sw-foot">
         {problem && (
           <p role="alert" className="sw-problem">
             {problem}

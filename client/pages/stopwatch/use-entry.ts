@@ -3,6 +3,7 @@ import { expectReading, plausibleSpan, type Expected } from '#shared/recorder/ex
 import { emptyTyping, typeDigit, type KeypadSetup, type Typing } from '#shared/recorder/keypad.ts';
 import { otherValueOf, typeOther } from '#shared/recorder/other-value.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
+import { asByHand } from './format-elapsed.ts';
 import type { Recorder } from './recorder.ts';
 
 /** What is being typed, and what was kept last. Nothing of it is in the run yet. */
@@ -65,7 +66,7 @@ export function useEntry({ recorder, run, onKept }: EntryParts) {
     same(downMonoMs: number): void {
       const last = run.readings.at(-1);
       if (entry.free) typeFree(entry.free, entry.free.text === '' ? '-' : '.');
-      else if (last) void keep(last.temp, recorder.at(downMonoMs));
+      else if (last) void keep(asByHand(last, setup), recorder.at(downMonoMs));
     },
     other(downMonoMs: number): void {
       if (entry.free) return keepFree(entry.free);
