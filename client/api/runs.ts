@@ -1,6 +1,6 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
-import { runPageSchema, type NewNote, type RunPage } from '#shared/schemas/runs.ts';
-import { deleteJson, fetchBytes, fetchJson, postJson, putJson } from './http.ts';
+import { runPageSchema, type RunPage } from '#shared/schemas/runs.ts';
+import { fetchBytes, fetchJson, postJson } from './http.ts';
 
 export function runQuery(id: string) {
   return queryOptions({
@@ -79,23 +79,5 @@ function useRunChange<Change>(id: string, send: (change: Change) => Promise<RunP
 export function useJudgeAgain(id: string) {
   return useRunChange(id, (ratingId: string | null) =>
     postJson(runPageSchema, `/api/runs/${id}/analyses`, { ratingId }),
-  );
-}
-
-export function useAddNote(id: string) {
-  return useRunChange(id, (note: NewNote) =>
-    postJson(runPageSchema, `/api/runs/${id}/notes`, note),
-  );
-}
-
-export function useChangeNote(id: string) {
-  return useRunChange(id, ({ noteId, ...note }: NewNote & { noteId: string }) =>
-    putJson(runPageSchema, `/api/runs/${id}/notes/${noteId}`, note),
-  );
-}
-
-export function useRemoveNote(id: string) {
-  return useRunChange(id, (noteId: string) =>
-    deleteJson(runPageSchema, `/api/runs/${id}/notes/${noteId}`),
   );
 }

@@ -36,7 +36,9 @@ export function HowRead({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
           {run.file.name}, {bytesWords(run.file.bytes)}, as it came
         </a>
       </p>
-      <p className="text-[0.8125rem] leading-[1.4] break-all text-print">SHA-256 {run.file.sha256}</p>
+      <p className="text-[0.8125rem] leading-[1.4] break-all text-print">
+        SHA-256 {run.file.sha256}
+      </p>
     </section>
   );
 }

@@ -2,10 +2,9 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useEffect, useMemo, useRef, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
-import { newNoteSchema, type NewNote, type RunPage } from '#shared/schemas/runs.ts';
+import { newNoteSchema, type NewNote } from '#shared/schemas/runs.ts';
 import { fromCelsius, toCelsius, type DisplayUnit } from '#shared/units.ts';
 import { formatMoment } from '#shared/wording/format.ts';
-import { useAddNote, useChangeNote, useRemoveNote } from '../../api/runs.ts';
 import type { PickedMoment } from '../../chart/chart-panel.tsx';
 import { nearestReading, type Pyramid } from '../../chart/pyramid.ts';
 import { ErrorSummary } from '../../components/error-summary.tsx';
@@ -13,12 +12,14 @@ import { Cells, TextField } from '../../components/field.tsx';
 import { Key, Word } from '../../components/key.tsx';
 import { Slip } from '../../components/slip.tsx';
 import { Failed } from '../../components/waiting.tsx';
+import { keepRunNote, keepRunNoteEdit, keepRunNoteRemoval } from '../../device/run-notes.ts';
 import { problemsOf } from '../../forms/use-checked-form.ts';
 import { readNumber } from '../../forms/typed-number.ts';
 import { readMoment } from './moment.ts';
+import type { RunHere } from './use-run.ts';
 
 type NoteFormProps = {
-  run: RunPage;
+  run: RunHere;
   unit: DisplayUnit;
   pyramid: Pyramid;
   writing: { noteId: string | null; moment: PickedMoment | null };
@@ -28,7 +29,7 @@ type NoteFormProps = {
 type Typed = { timeS: string; tempC: string; text: string };
 
 /** What was typed, in the reader's unit, as the shared schema of a note. */
-function noteSchemaFor(run: RunPage, unit: DisplayUnit, pyramid: Pyramid) {
+function noteSchemaFor(run: RunHere, unit: DisplayUnit, pyramid: Pyramid) {
   return z
     .object({ timeS: z.string(), tempC: z.string(), text: z.string() })
     .transform(({ timeS, tempC, text }): Record<keyof NewNote, unknown> => {
@@ -62,26 +63,23 @@ function typedFrom(
   };
 }
 
-function momentTyped(timeS: number, run: RunPage): string {
+function momentTyped(timeS: number, run: RunHere): string {
   return formatMoment(Math.min(Math.round(timeS), run.durationS));
 }
 
 /** A note at a time and temperature: picked on the chart, or typed. */
 export function NoteForm(props: NoteFormProps) {
   const { run, unit, pyramid, writing, onDone } = props;
-  const add = useAddNote(run.id);
-  const change = useChangeNote(run.id);
+  // What the writer had before them: a change by somebody else meanwhile is found out by it.
+  const [was] = useState(() => run.notes.find((note) => note.id === writing.noteId));
+  const [refusal, setRefusal] = useState<Error | null>(null);
   const schema = useMemo(() => noteSchemaFor(run, unit, pyramid), [run, unit, pyramid]);
   const form = useForm<Typed, unknown, NewNote>({
     resolver: zodResolver(schema),
-    defaultValues: typedFrom(
-      props,
-      run.notes.find((note) => note.id === writing.noteId),
-    ),
+    defaultValues: typedFrom(props, was),
     shouldFocusError: false,
   });
-  const { errors, submitCount } = form.formState;
-  const refusal = add.error ?? change.error;
+  const { errors, submitCount, isSubmitting } = form.formState;
   const { setValue, setFocus } = form;
   const heading = useRef<HTMLHeadingElement>(null);
 
@@ -98,17 +96,21 @@ export function NoteForm(props: NoteFormProps) {
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [writing.moment]);
 
-  const handleSubmit = form.handleSubmit((note) => {
-    const done = { onSuccess: onDone };
-    if (writing.noteId === null) add.mutate(note, done);
-    else change.mutate({ noteId: writing.noteId, ...note }, done);
+  const handleSubmit = form.handleSubmit(async (note) => {
+    const kept = was
+      ? keepRunNoteEdit({ runId: run.id, noteId: was.id, was: wordsOf(was), now: note })
+      : keepRunNote({ runId: run.id, ...note });
+    await kept.then(onDone, setRefusal);
   });
-  const isSaving = add.isPending || change.isPending;
 
   return (
     <form onSubmit={handleSubmit} noValidate className="max-w-form pt-2 pb-6">
       <ErrorSummary problems={problemsOf(errors, refusal?.message ?? null)} attempt={submitCount} />
-      <h3 ref={heading} tabIndex={-1} className="words pb-2 text-[1.125rem] font-semibold outline-none">
+      <h3
+        ref={heading}
+        tabIndex={-1}
+        className="words pb-2 text-[1.125rem] font-semibold outline-none"
+      >
         {writing.noteId === null ? 'Add a note' : 'Change the note'}
       </h3>
       <p className="pb-3 text-small">Tap the trace to pick its place, or type it.</p>
@@ -137,35 +139,43 @@ export function NoteForm(props: NoteFormProps) {
         />
       </Cells>
       <div className="flex flex-wrap items-center gap-x-5 gap-y-2 pt-3">
-        <Key type="submit" face="main" disabled={isSaving}>
-          {isSaving ? 'Keeping…' : 'Keep the note'}
+        <Key type="submit" face="main" disabled={isSubmitting}>
+          {isSubmitting ? 'Keeping…' : 'Keep the note'}
         </Key>
         <Word onClick={onDone}>
           {writing.noteId === null ? 'Do not keep it' : 'Leave it as it was'}
         </Word>
-        {writing.noteId !== null && <RemoveNote {...props} noteId={writing.noteId} />}
+        {was && <RemoveNote runId={run.id} note={was} onDone={onDone} />}
       </div>
     </form>
   );
 }
 
-function RemoveNote({ run, noteId, onDone }: NoteFormProps & { noteId: string }) {
-  const remove = useRemoveNote(run.id);
+/** As it crosses the wire. */
+function wordsOf({ timeS, tempC, text }: NewNote): NewNote {
+  return { timeS, tempC, text };
+}
+
+type RemoveNoteProps = { runId: string; note: NewNote & { id: string }; onDone: () => void };
+
+function RemoveNote({ runId, note, onDone }: RemoveNoteProps) {
+  const [error, setError] = useState<Error | null>(null);
   const [isAsked, setIsAsked] = useState(false);
+  const remove = () => {
+    setIsAsked(false);
+    keepRunNoteRemoval({ runId, noteId: note.id, was: wordsOf(note) }).then(onDone, setError);
+  };
   return (
     <>
       <Word className="ml-auto" onClick={() => setIsAsked(true)}>
         Remove it
       </Word>
-      {remove.isError && <Failed error={remove.error} />}
+      {error && <Failed error={error} />}
       {isAsked && (
         <Slip
           question="Remove this note?"
           doer="Remove"
-          isBusy={remove.isPending}
-          onDo={() =>
-            remove.mutate(noteId, { onSuccess: onDone, onSettled: () => setIsAsked(false) })
-          }
+          onDo={remove}
           onBack={() => setIsAsked(false)}
         >
           <p>It goes from the chart. Links already sent keep it.</p>

@@ -1,13 +1,19 @@
-import type { Note, RunPage } from '#shared/schemas/runs.ts';
 import type { DisplayUnit } from '#shared/units.ts';
 import { formatMoment, formatTemp } from '#shared/wording/format.ts';
 import { Word } from '../../components/key.tsx';
+import type { NoteHere, RunHere } from './use-run.ts';
 
 type NoteListProps = {
-  run: RunPage;
-  notes: (Note & { letter: string })[];
+  run: Pick<RunHere, 'mayWrite'>;
+  notes: (NoteHere & { letter: string })[];
   unit: DisplayUnit;
   onChange: (noteId: string) => void;
+};
+
+const UNSENT_WORDS = {
+  written: 'Not sent yet',
+  changed: 'Changed here, not sent yet',
+  removed: 'Removed here, not sent yet',
 };
 
 /** Every note whole, in order of time, under the letter it has on the chart. */
@@ -24,12 +30,15 @@ export function NoteList({ run, notes, unit, onChange }: NoteListProps) {
           >
             <b className="font-gothic text-[1rem]">{note.letter}</b>
             <p className="py-2 text-[1rem] leading-[1.35]">
-              {note.text}{' '}
+              {note.unsent === 'removed' ? <s>{note.text}</s> : note.text}{' '}
               <span className="fig whitespace-nowrap text-print">
                 {formatMoment(note.timeS)}, {formatTemp(note.tempC, unit)}
               </span>
+              {note.unsent && (
+                <span className="block text-small text-print">{UNSENT_WORDS[note.unsent]}</span>
+              )}
             </p>
-            {run.mayWrite && (
+            {run.mayWrite && note.unsent !== 'removed' && (
               <Word onClick={() => onChange(note.id)} aria-label={`Change note ${note.letter}`}>
                 Change
               </Word>

@@ -1,5 +1,4 @@
 import { useMemo, useState } from 'react';
-import type { RunPage } from '#shared/schemas/runs.ts';
 import type { DisplayUnit } from '#shared/units.ts';
 import { ChartPanel, type PickedMoment } from '../../chart/chart-panel.tsx';
 import { letterNotes, stripOfRun } from '../../chart/strip-of-run.ts';
@@ -8,22 +7,23 @@ import { Failed, Waiting } from '../../components/waiting.tsx';
 import { chartSentence } from './chart-sentence.ts';
 import { NoteForm } from './note-form.tsx';
 import { NoteList } from './note-list.tsx';
+import type { NoteHere, RunHere } from './use-run.ts';
 import { useRunReadings } from './use-run-readings.ts';
 
 type Writing = { noteId: string | null; moment: PickedMoment | null };
 
 /** The chart edge to edge, and the notes that hang on it. */
-export function RunFigure({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
+export function RunFigure({ run, unit }: { run: RunHere; unit: DisplayUnit }) {
   const readings = useRunReadings(run);
   const [writing, setWriting] = useState<Writing | null>(null);
-  const notes = useMemo(() => letterNotes(run.notes), [run.notes]);
+  const notes = useMemo(() => lettered(run.notes), [run.notes]);
   const strip = useMemo(
     () =>
       stripOfRun({
         analysis: run.analysis.analysis,
         bands: run.analysis.judgedBy,
         marks: run.marks,
-        notes: run.notes,
+        notes: run.notes.filter(({ unsent }) => unsent !== 'removed'),
       }),
     [run],
   );
@@ -67,6 +67,17 @@ export function RunFigure({ run, unit }: { run: RunPage; unit: DisplayUnit }) {
       </div>
     </section>
   );
+}
+
+/** The letters are those on the chart; a note that goes has none there. */
+function lettered(notes: NoteHere[]): (NoteHere & { letter: string })[] {
+  const [going, staying] = [true, false].map((goes) =>
+    notes.filter(({ unsent }) => (unsent === 'removed') === goes),
+  );
+  return [
+    ...letterNotes(staying ?? []),
+    ...(going ?? []).map((note) => ({ ...note, letter: '' })),
+  ].sort((a, b) => a.timeS - b.timeS);
 }
 
 /** The printed paper without a trace, of the chart's own height, until the readings are there. */

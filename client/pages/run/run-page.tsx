@@ -1,8 +1,5 @@
-import { useQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
-import type { RunPage as Run } from '#shared/schemas/runs.ts';
 import { SAFETY_LINE } from '#shared/wording/safety-lines.ts';
-import { runQuery } from '../../api/runs.ts';
 import { Failed, Waiting } from '../../components/waiting.tsx';
 import { useSession } from '../frame/session-context.ts';
 import { aboutOf } from './about-run.ts';
@@ -15,29 +12,28 @@ import { RunFigure } from './run-figure.tsx';
 import { RunPairs } from './run-pairs.tsx';
 import { Shares } from './shares.tsx';
 import { TitleBlock } from './title-block.tsx';
+import { useRun, type RunHere } from './use-run.ts';
 
 export function RunPage() {
   const { id = '' } = useParams();
-  const run = useQuery(runQuery(id));
+  const { run, here } = useRun(id);
 
-  if (run.isPending) {
+  if (here) return <RunSheet run={here} />;
+  if (!run.isError) {
     return (
       <main id="main" className="px-4 desk:px-12">
         <Waiting>Fetching the run…</Waiting>
       </main>
     );
   }
-  if (run.isError) {
-    return (
-      <main id="main" className="px-4 desk:px-12">
-        <Failed error={run.error} onRetry={run.refetch} />
-      </main>
-    );
-  }
-  return <RunSheet run={run.data} />;
+  return (
+    <main id="main" className="px-4 desk:px-12">
+      <Failed error={run.error} onRetry={run.refetch} />
+    </main>
+  );
 }
 
-function RunSheet({ run }: { run: Run }) {
+function RunSheet({ run }: { run: RunHere }) {
   const { shop, person } = useSession();
   const about = aboutOf(run, shop.unit);
   const mayShare = run.mayWrite || person.role === 'office';

@@ -12,6 +12,7 @@ import { useNowMs } from '../../format/use-now.ts';
 import { useSession } from '../frame/session-context.ts';
 import { Conflict } from './conflict.tsx';
 import { Refused } from './refused.tsx';
+import { RunNoteConflict } from './run-note-conflict.tsx';
 import { saveThings } from './save-things.ts';
 import { groupThings, groupWords, OUTCOME_WORDS, textOf } from './unsent-words.ts';
 
@@ -44,9 +45,13 @@ function Kept({ kept, person, zone }: KeptProps) {
   return (
     <div className="grid gap-9 pt-2">
       {unsent.length > 0 && <Unsent unsent={unsent} zone={zone} />}
-      {conflict.map((thing) => (
-        <Conflict key={thing.id} thing={thing} zone={zone} />
-      ))}
+      {conflict.map((thing) =>
+        thing.kind.startsWith('run-note') ? (
+          <RunNoteConflict key={thing.id} thing={thing} zone={zone} />
+        ) : (
+          <Conflict key={thing.id} thing={thing} zone={zone} />
+        ),
+      )}
       {refused.map((thing) => (
         <Refused key={thing.id} thing={thing} />
       ))}

@@ -32,6 +32,8 @@ const KIND_WORDS: Record<string, string> = {
   'visit-edit': 'Notes of a visit',
   'safety-ticks': 'Cautions ticked',
   'run-note': 'Note on a run',
+  'run-note-edit': 'Note on a run, changed',
+  'run-note-removal': 'Note on a run, removed',
 };
 
 export function kindWords(kind: string): string {
@@ -55,12 +57,15 @@ export function groupThings(things: readonly KeptThing[]): ThingGroup[] {
 export function groupWords({ things }: ThingGroup): string {
   const [first] = things;
   if (things.length === 1) return kindWords(first.kind);
-  return `${kindWords(first.kind)}, ${things.length} readings and marks`;
+  const isRun = first.kind === 'run-event';
+  return `${kindWords(first.kind)}, ${things.length} ${isRun ? 'readings and marks' : 'changes'}`;
 }
 
 /** What was written, where it was words. */
 export function textOf({ payload }: KeptThing): string {
   if (typeof payload !== 'object' || payload === null) return '';
   if ('notes' in payload && typeof payload.notes === 'string') return payload.notes;
-  return 'text' in payload && typeof payload.text === 'string' ? payload.text : '';
+  const note = 'now' in payload ? payload.now : 'was' in payload ? payload.was : payload;
+  if (typeof note !== 'object' || note === null) return '';
+  return 'text' in note && typeof note.text === 'string' ? note.text : '';
 }
