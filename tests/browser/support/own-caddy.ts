@@ -24,7 +24,7 @@ export async function ownCaddy(serverUrl: string) {
   const port = await freePort();
   const { caddyfile, name } = await fromReadme(new URL(serverUrl).host);
   await writeFile(join(folder, 'Caddyfile'), `${await head(port)}\n${caddyfile}`);
-  const rootFile = join(folder, 'data/caddy/pki/authorities/local/root.crt');
+  const kept = join(folder, 'data/caddy');
   let child: ChildProcess | undefined;
 
   async function start(): Promise<void> {
@@ -59,7 +59,11 @@ export async function ownCaddy(serverUrl: string) {
     home: folder,
     start,
     stop,
-    trustRoot: () => trust(folder, rootFile),
+    async trustRoot(): Promise<void> {
+      // The name's own certificate is made last.
+      await untilThere(join(kept, `certificates/local/${name}/${name}.crt`));
+      await trust(folder, join(kept, 'pki/authorities/local/root.crt'));
+    },
     async remove(): Promise<void> {
       await stop();
       await rm(folder, { recursive: true, force: true });
@@ -91,16 +95,18 @@ async function fromReadme(serverHost: string) {
   return { caddyfile: block.replace('127.0.0.1:4870', serverHost), name };
 }
 
-/** Into the store that Chromium reads beside its own list: a certificate that is trusted, not an error that is ignored. */
-async function trust(home: string, rootFile: string): Promise<void> {
+async function untilThere(file: string): Promise<void> {
   const patience = AbortSignal.timeout(START_WITHIN_MS);
-  while (
-    !(await access(rootFile).then(
+  const isThere = () =>
+    access(file).then(
       () => true,
       () => false,
-    ))
-  )
-    await pause(50, null, { signal: patience });
+    );
+  while (!(await isThere())) await pause(50, null, { signal: patience });
+}
+
+/** Into the store that Chromium reads beside its own list: a certificate that is trusted, not an error that is ignored. */
+async function trust(home: string, rootFile: string): Promise<void> {
   const store = join(home, '.pki/nssdb');
   await mkdir(store, { recursive: true });
   certutil('-N', '-d', `sql:${store}`, '--empty-password');
