@@ -12,7 +12,7 @@ type Fetched<Props> = { default: ComponentType<Props> };
 /** Not fetched, as without a network on the first visit: the run goes on by hand. */
 const Nothing = () => null;
 
-export const ProbePart = lazy((): Promise<Fetched<{ hint?: string | undefined }>> =>
+export const ProbePart = lazy((): Promise<Fetched<{ isNamed: boolean }>> =>
   fetchLive().then(
     (chunk) => ({ default: chunk.ProbePart }),
     () => ({ default: Nothing }),

@@ -28,7 +28,7 @@ export function RunPanel(props: RunPanelProps) {
       {canReachProbe && (
         <Suspense>
           <div className="-mt-4 px-1 pb-5">
-            <ProbePart />
+            <ProbePart isNamed={run.start.setup.probeId !== null} />
           </div>
         </Suspense>
       )}

@@ -40,9 +40,6 @@ const FIGURES = [
   { value: 'tenths', words: 'With tenths' },
 ] as const;
 
-const WHICH_PROBE =
-  'Choose under Probe which of the shop’s it is: its accuracy goes into every call.';
-
 /** Before the clock runs: cautions, which probe, which heat. The rest is asked for at the end. */
 export function StartPage(props: StartPageProps) {
   const { sources, isTicked, runs, problem, preferences, onPrefer, onStart } = props;
@@ -125,7 +122,7 @@ export function StartPage(props: StartPageProps) {
         )}
         {canReachProbe && (
           <Suspense>
-            <ProbePart hint={probeId === null ? WHICH_PROBE : undefined} />
+            <ProbePart isNamed={probeId !== null} />
           </Suspense>
         )}
         <div className="pt-4">

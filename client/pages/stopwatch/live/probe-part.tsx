@@ -8,8 +8,8 @@ import type { LiveQuestion, LiveReading } from '../../../device/live/live-probe.
 import { liveDesk, type DeskView } from './live-desk.ts';
 import { silenceWords } from './probe-words.ts';
 
-/** The live probe: chosen here, and what it reads. `hint`: what is still to be said of it. */
-export function ProbePart({ hint }: { hint?: string | undefined }) {
+/** The live probe: chosen here, and what it reads. `isNamed`: which of the shop's probes it is has been said. */
+export function ProbePart({ isNamed }: { isNamed: boolean }) {
   const desk = useSyncExternalStore(liveDesk.subscribe, liveDesk.view);
   const { probe, problem } = desk;
   return (
@@ -23,7 +23,7 @@ export function ProbePart({ hint }: { hint?: string | undefined }) {
         </p>
       )}
       {probe && probe.state.is !== 'ended' ? (
-        <Linked {...{ probe, hint }} latest={desk.latest} />
+        <Linked {...{ probe, isNamed }} latest={desk.latest} />
       ) : (
         <Choosing why={probe?.state.is === 'ended' ? probe.state.why : null} />
       )}
@@ -73,10 +73,10 @@ function Choosing({ why }: { why: string | null }) {
 type LinkedProps = {
   probe: NonNullable<DeskView['probe']>;
   latest: LiveReading | null;
-  hint?: string | undefined;
+  isNamed: boolean;
 };
 
-function Linked({ probe, latest, hint }: LinkedProps) {
+function Linked({ probe, latest, isNamed }: LinkedProps) {
   const { state } = probe;
   return (
     <>
@@ -93,7 +93,12 @@ function Linked({ probe, latest, hint }: LinkedProps) {
         {stateWords(probe, latest)}
       </p>
       {state.is === 'asks' && <Question question={state.question} />}
-      {hint && <p className="pb-2 text-body">{hint}</p>}
+      {!isNamed && (
+        <p className="pb-2 text-body">
+          Choose under Probe which of the shop’s it is, here or at the end: its accuracy goes into
+          every call.
+        </p>
+      )}
       <p className="text-small text-print">{KEEP_RATE_WORDS}</p>
       <Word onClick={() => liveDesk.letGo()}>Let go of this probe</Word>
     </>
