@@ -27,7 +27,7 @@ export function Choice<Value extends string>(props: ChoiceProps<Value>) {
               onChange={() => onChoose(option.value)}
               className="peer absolute inset-0 size-full cursor-pointer opacity-0"
             />
-            <span className="words grid min-h-key place-items-center rounded-key border-line border-print px-1 text-center text-[1.0625rem] leading-[1.1] font-medium peer-checked:border-ink peer-checked:bg-ink peer-checked:font-semibold peer-checked:text-paper peer-focus-visible:outline-3 peer-focus-visible:outline-offset-2 peer-focus-visible:outline-focus">
+            <span className="words grid min-h-key min-w-12 place-items-center rounded-key border-line border-print px-1 text-center text-[1.0625rem] leading-[1.1] font-medium peer-checked:border-ink peer-checked:bg-ink peer-checked:font-semibold peer-checked:text-paper peer-focus-visible:outline-3 peer-focus-visible:outline-offset-2 peer-focus-visible:outline-focus">
               {option.words}
             </span>
           </label>

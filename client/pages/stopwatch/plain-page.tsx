@@ -7,9 +7,9 @@ export function PlainPage({ head, isAlert = false, children }: PlainPageProps) {
   const visit = window.location.pathname.split('/').slice(0, 3).join('/');
   return (
     <main id="main" className="mx-auto min-h-dvh max-w-site px-4 pt-6">
-      <h1 role={isAlert ? 'alert' : 'status'} className="pb-3 font-serif text-page">
-        {head}
-      </h1>
+      <div role={isAlert ? 'alert' : 'status'}>
+        <h1 className="pb-3 font-serif text-page">{head}</h1>
+      </div>
       {children}
       <a className="word" href={visit}>
         Back to the visit

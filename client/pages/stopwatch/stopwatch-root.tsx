@@ -40,6 +40,9 @@ export function StopwatchRoot() {
   const tab = useOnlyTab();
   const [page, setPage] = useState<Opening>({ state: 'opening' });
   useEffect(() => {
+    document.title = 'Stopwatch – Fusekeeper';
+  }, []);
+  useEffect(() => {
     if (tab !== 'mine') return;
     opening ??= open();
     opening

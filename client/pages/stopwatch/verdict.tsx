@@ -10,6 +10,7 @@ import { wordOutcome } from '#shared/wording/word-outcome.ts';
 import { SmallStrip } from '../../chart/small-strip.tsx';
 import { stripOfRun } from '../../chart/strip-of-run.ts';
 import { StopSign } from '../../components/signs.tsx';
+import { FocusedHeading } from './focused-heading.tsx';
 import type { Sources } from './sources.ts';
 
 type VerdictProps = {
@@ -36,7 +37,7 @@ export function Verdict({ run, sources, toJudge, about, analysis }: VerdictProps
   ]);
   return (
     <>
-      <h1 className="pt-5 font-serif text-page">{heading}</h1>
+      <FocusedHeading className="pt-5 font-serif text-page">{heading}</FocusedHeading>
       <p
         className={`flex items-center gap-3 pt-2 font-gothic text-lead font-semibold ${analysis.outcome === 'stop' ? 'text-stop' : ''}`}
       >
