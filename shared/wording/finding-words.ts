@@ -11,6 +11,8 @@ export type About = {
   judgedBy: Rating | null;
   fuel: string;
   control?: string;
+  /** How the duct was in this run, and in the run of the machine that stands beside it; not told, it may be either. */
+  ducts?: ('on' | 'off')[];
 };
 
 /** A cause that the readings would be consistent with, why, and the check that settles it. */

@@ -5,9 +5,13 @@ import type { About } from '#shared/wording/finding-words.ts';
 import { formatRated } from '#shared/wording/format.ts';
 
 /** What the words for a run depend on. */
-export function aboutOf(run: RunPage, unit: DisplayUnit): About {
+export function aboutOf(
+  run: Pick<RunPage, 'machine' | 'pairs' | 'conditions' | 'analysis'>,
+  unit: DisplayUnit,
+): About {
   const { fuel, control } = run.machine;
-  return { unit, judgedBy: run.analysis.judgedBy, fuel, control };
+  const ducts = run.pairs.duct ? (['on', 'off'] as const) : [run.conditions.duct];
+  return { unit, judgedBy: run.analysis.judgedBy, fuel, control, ducts: [...ducts] };
 }
 
 /** "opens 155 ± 5, closes 130 ± 5", in the reader’s unit. */

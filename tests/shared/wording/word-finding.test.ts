@@ -118,6 +118,19 @@ test('short, hot bursts lead to the airflow first', () => {
   expect(nextChecks[0]).toMatch(/duct off/);
 });
 
+test('a run that was made already is not asked for', () => {
+  const checks = (code: 'in-band' | 'limit-cycling', ducts?: ('on' | 'off')[]) =>
+    wordFinding(bare(code), {
+      ...{ unit: 'F', judgedBy: DEFAULT_RATING, fuel: 'electric' },
+      ...(ducts && { ducts }),
+    }).nextChecks.filter((check) => /run with the duct/.test(check)).length;
+
+  expect([checks('in-band'), checks('in-band', ['off']), checks('in-band', ['on', 'off'])]).toEqual(
+    [1, 1, 0],
+  );
+  expect([checks('limit-cycling', ['on']), checks('limit-cycling', ['off'])]).toEqual([1, 0]);
+});
+
 test.each(TOO_SHORT_REASONS)(
   'a record too short because of %s says so in its own words',
   (reason) => {
