@@ -2,14 +2,14 @@ import { formatBand, formatRated } from '#shared/wording/format.ts';
 import { drawMarks } from './draw-marks.ts';
 import { drawHotSpan, drawPaper, drawWall } from './draw-paper.ts';
 import { drawEdges, drawHoles, drawMinutes, drawScale } from './draw-scale.ts';
-import { xOf, yOf, type Frame } from './frame.ts';
+import { isInView, xOf, yOf, type Frame } from './frame.ts';
 import { chooseGridSteps } from './grid-steps.ts';
 import { buildPyramid } from './pyramid.ts';
-import { words, type Shape } from './shapes.ts';
-import type { Bands, Strip } from './strip.ts';
+import { vertical, words, type Shape } from './shapes.ts';
+import type { Bands, PenMark, Strip } from './strip.ts';
 import { drawReadingDots, tracePath } from './trace-path.ts';
 
-export type LiveStrip = Pick<Strip, 'bands' | 'points' | 'hotSpans' | 'gaps'> & {
+export type LiveStrip = Pick<Strip, 'bands' | 'points' | 'hotSpans' | 'gaps' | 'marks'> & {
   timesS: Float64Array;
   tempsC: Float64Array;
   /** When the exhaust reaches the wall if nothing changes; null where that is not drawn. */
@@ -38,7 +38,28 @@ export function drawLive(frame: Frame, strip: LiveStrip, withHoles: boolean): Sh
     ...drawHairline(frame, strip),
     ...(bands ? nameBands(frame, bands) : []),
     ...drawMarks(frame, strip.points),
+    ...drawLiveMarks(frame, strip.marks),
   ];
+}
+
+const TICK_PX = 12;
+
+/** Ticks at the foot of the plot, each with its word where there is room: the sheet has none for a pen of its own. */
+function drawLiveMarks(frame: Frame, marks: PenMark[]): Shape[] {
+  const foot = frame.plot.top + frame.plot.height;
+  const shown = marks.filter(({ timeS }) => isInView(frame, timeS));
+  return shown.flatMap((mark, i) => {
+    const x = xOf(frame, mark.timeS);
+    const ink = mark.isStop ? 'stop' : 'ink';
+    const next = shown[i + 1];
+    const right = next ? xOf(frame, next.timeS) : frame.plot.left + frame.plot.width;
+    const tick: Shape = {
+      ...{ kind: 'line', path: vertical(x, foot - TICK_PX, foot), ink, widthPx: 2.25 },
+    };
+    if (right - x < mark.word.length * 7 + 10) return [tick];
+    const style = { sizePx: 13, weight: 600, ink, haloPx: 4 } as const;
+    return [tick, words(mark.word, { x: x + 5, y: foot - 4 }, style)];
+  });
 }
 
 /** From the pen to the scale; under the bands' names, which it would strike through. */

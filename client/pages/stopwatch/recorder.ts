@@ -127,6 +127,8 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
 
   async function keepNext(happening: Happening, atS: number): Promise<boolean> {
     const { run } = recording;
+    // Nothing follows a run's end: the shop would turn it down, and the run could not be let go of here.
+    if (run.end !== null || run.isThrownAway) return false;
     const event: RunEvent = {
       ...happening,
       id: parts.newId(),

@@ -82,6 +82,16 @@ test('what could not be kept is not shown, says why, and leaves no hole', async 
   expect(phone.kept.map(({ n }) => n)).toEqual([0, 1]);
 });
 
+test('nothing follows the end of a run', async () => {
+  const phone = aPhone();
+  const recorder = await begun(phone);
+  const setup = { ...RUN.setup, placement: 'Outlet', duct: 'on', load: 'empty' } as const;
+  await recorder.end('As found', setup);
+
+  expect(await recorder.read(150, recorder.at())).toBe(false);
+  expect(phone.kept.at(-1)?.kind).toBe('end');
+});
+
 test('an hour with the page gone is an hour, marked as the phone’s clock', async () => {
   const phone = aPhone();
   const first = await begun(phone);
