@@ -9,7 +9,9 @@ import { Key } from '../../components/key.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { listKeptRuns } from '../../device/kept-runs.ts';
 import { deviceEngine } from './analyse-on-device.ts';
+import { FocusedHeading } from './focused-heading.tsx';
 import { isEnded, judgeInTurn } from './judge-in-turn.ts';
+import { NoteOnRun } from './note-on-run.tsx';
 import { ShopAnswer } from './shop-answer.tsx';
 import type { Sources } from './sources.ts';
 import { Verdict } from './verdict.tsx';
@@ -48,6 +50,7 @@ export function OutcomePage({ run, sources, onAnother }: OutcomePageProps) {
           about={about}
           isTooShort={toJudge === null}
         />
+        {toJudge && <NoteOnRun runId={run.start.runId} toJudge={toJudge} unit={run.start.unit} />}
         <div className="grid gap-2.5 pt-3">
           <Key face="main" size="site" onClick={onAnother}>
             Take another run
@@ -64,7 +67,8 @@ export function OutcomePage({ run, sources, onAnother }: OutcomePageProps) {
 /** What the words for the run depend on. */
 function aboutOf(run: HandRun, { machine }: Sources): About {
   const bands = run.end && specifiedFor(machine, run.end.setup.setting);
-  return { unit: run.start.unit, judgedBy: ratingOf(bands ?? null), fuel: machine.fuel };
+  const ducts = run.end ? [run.end.setup.duct] : [];
+  return { unit: run.start.unit, judgedBy: ratingOf(bands ?? null), fuel: machine.fuel, ducts };
 }
 
 type Judgement =
@@ -104,7 +108,7 @@ function NoVerdict({ state }: NoVerdictProps) {
   if (state === 'too-short') {
     return (
       <>
-        <h1 className="pt-5 font-serif text-page">Too few readings</h1>
+        <FocusedHeading className="pt-5 font-serif text-page">Too few readings</FocusedHeading>
         <p className="pt-2 pb-3 text-say">
           Under three readings stand in this run, so there is nothing to judge. What was taken is
           kept.
@@ -114,14 +118,16 @@ function NoVerdict({ state }: NoVerdictProps) {
   }
   if (state === 'failed') {
     return (
-      <h1 role="alert" className="pt-5 pb-3 font-serif text-page">
-        This phone could not judge the run. It is kept, and the shop judges it.
-      </h1>
+      <div role="alert">
+        <h1 className="pt-5 pb-3 font-serif text-page">
+          This phone could not judge the run. It is kept, and the shop judges it.
+        </h1>
+      </div>
     );
   }
   return (
     <div role="status" className="pt-5 pb-3">
-      <h1 className="font-serif text-page">Looking at the run…</h1>
+      <FocusedHeading className="font-serif text-page">Looking at the run…</FocusedHeading>
       {state === 'working-here' && (
         <p className="pt-2 text-say">
           This browser gave no worker for it, so the page stands still for some seconds.
