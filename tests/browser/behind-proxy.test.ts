@@ -98,7 +98,7 @@ test('behind a proxy with a certificate a phone works on with proxy and server d
     await server.start(settings);
     await proxy.start();
     await endByKeys(page);
-    await expect(page.getByText('Sent. The shop judged it as well.')).toBeVisible({
+    await expect(page.getByText('The shop’s analysis agrees.')).toBeVisible({
       timeout: 60_000,
     });
     await page.getByRole('link', { name: 'See the run there' }).click();

@@ -93,7 +93,7 @@ test('a runaway is taken by hand without signal, the guard calls it, and the out
 
   await context.setOffline(false);
   await page.clock.runFor(20_000);
-  await expect(page.getByText('Sent. The shop judged it as well.')).toBeVisible();
+  await expect(page.getByText('The shop’s analysis agrees.')).toBeVisible();
   await page.getByRole('link', { name: 'See the run there' }).click();
   await expect(page.getByText('Do not leave this machine heating.')).toBeVisible();
   await page.goto(`/visits/${visitId}`);
