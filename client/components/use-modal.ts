@@ -1,4 +1,4 @@
-import { useEffect, useRef, type RefObject } from 'react';
+import { useLayoutEffect, useRef, type RefObject } from 'react';
 
 /**
  * A dialog that is open, over all else, for as long as it stands.
@@ -7,7 +7,8 @@ import { useEffect, useRef, type RefObject } from 'react';
  */
 export function useModal(focus?: string): RefObject<HTMLDialogElement | null> {
   const modal = useRef<HTMLDialogElement>(null);
-  useEffect(() => {
+  // Closed while it still stands in the page: only then does the focus go back to where it came from.
+  useLayoutEffect(() => {
     const dialog = modal.current;
     dialog?.showModal();
     if (focus) dialog?.querySelector<HTMLElement>(focus)?.focus();
