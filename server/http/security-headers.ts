@@ -23,6 +23,10 @@ const POLICY = {
   'trusted-types': ['fusekeeper-worker'],
 };
 
+/** Live probes hang on Bluetooth or on a serial port; a page that frames ours, or that we framed, gets neither. */
+const PERMISSIONS =
+  'bluetooth=(self), serial=(self), camera=(), geolocation=(), microphone=(), payment=()';
+
 /**
  * On every answer, errors included. Over plain http the browser is not told to insist on https.
  * In development there is no policy, since Vite puts a script into the page.
@@ -38,7 +42,7 @@ export function securityHeaders(how: { https: boolean; development: boolean }): 
   });
   return (req, res, next) => {
     res.set('X-Robots-Tag', 'noindex, nofollow');
-    res.set('Permissions-Policy', 'camera=(), geolocation=(), microphone=(), payment=()');
+    res.set('Permissions-Policy', PERMISSIONS);
     headers(req, res, next);
   };
 }

@@ -1,5 +1,5 @@
 import { lazy, type ComponentType } from 'react';
-import type { LiveDesk } from './live/live-desk.ts';
+import type { LiveDesk } from './live/create-live-desk.ts';
 import type { ProbeLineProps } from './live/probe-line.tsx';
 
 /** Whether this browser can reach a probe at all; where it cannot, nothing of it is shown or fetched. */

@@ -56,7 +56,7 @@ function PenHead({ frame, strip, figure }: { frame: Frame; strip: Drawn; figure:
         x={right - 7}
         y={flagY + 10}
         textAnchor="end"
-        fontSize={figure.length > 3 ? 22 : 28}
+        fontSize={figure.length > 4 ? 19 : figure.length > 3 ? 22 : 28}
         fontWeight="600"
         fill="var(--strip)"
       >

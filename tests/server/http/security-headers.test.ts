@@ -52,6 +52,8 @@ test('the policy and its companions are on every answer, whatever it says', asyn
       'cross-origin-resource-policy': 'same-origin',
       'x-content-type-options': 'nosniff',
       'x-robots-tag': 'noindex, nofollow',
+      'permissions-policy':
+        'bluetooth=(self), serial=(self), camera=(), geolocation=(), microphone=(), payment=()',
     });
     expect(headers).not.toHaveProperty('x-powered-by');
     expect(headers).not.toHaveProperty('strict-transport-security');

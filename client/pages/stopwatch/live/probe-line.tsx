@@ -3,6 +3,7 @@ import type { HandRun } from '#shared/recorder/replay-run.ts';
 import { Word } from '../../../components/key.tsx';
 import { liveDesk } from './live-desk.ts';
 import { probeTrouble, type ProbeTrouble } from './probe-words.ts';
+import './probe-line.css';
 
 export type ProbeLineProps = {
   run: HandRun;
@@ -24,7 +25,7 @@ export function ProbeLine({ run, nowS, onAnswer, onSay }: ProbeLineProps) {
 
   if (!trouble) return null;
   return (
-    <div className="flex items-center gap-3 pb-1.5">
+    <div className="sw-probe flex items-center gap-3 pb-1.5">
       <p className="words min-w-0 flex-1 text-[1rem] leading-[1.25] font-medium">{trouble.words}</p>
       {trouble.does && (
         <Word className="shrink-0" onClick={() => act(trouble.does, onAnswer)}>

@@ -5,7 +5,8 @@ import { Key, Word } from '../../../components/key.tsx';
 import { SectionHead } from '../../../components/section-head.tsx';
 import { BAUD_RATES } from '../../../device/live/serial-probe.ts';
 import type { LiveQuestion, LiveReading } from '../../../device/live/live-probe.ts';
-import { liveDesk, type DeskView } from './live-desk.ts';
+import type { DeskView } from './create-live-desk.ts';
+import { liveDesk } from './live-desk.ts';
 import { silenceWords } from './probe-words.ts';
 
 /** The live probe: chosen here, and what it reads. `isNamed`: which of the shop's probes it is has been said. */

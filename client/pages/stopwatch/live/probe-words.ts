@@ -2,7 +2,7 @@ import { gapAfterS, lastOfProbe, openGap } from '#shared/recorder/probe-gap.ts';
 import type { HandRun } from '#shared/recorder/replay-run.ts';
 import { formatMoment } from '#shared/wording/format.ts';
 import type { Silence } from '../../../device/live/live-probe.ts';
-import type { DeskView } from './live-desk.ts';
+import type { DeskView } from './create-live-desk.ts';
 
 /** What stands on the deck while a live probe is wanted and does not simply read; `does`: what its word does. */
 export type ProbeTrouble = {
