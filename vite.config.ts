@@ -40,6 +40,12 @@ const sharedChunks = [
     test: /node_modules\/idb\/|client\/device\/(?!live\/|join-queries|kept-runs|page-age|start-with-queries|use-kept)/,
     priority: 1,
   },
+  {
+    name: 'begin',
+    // What the pages of the stopwatch share, before a run and in it.
+    test: /client\/pages\/stopwatch\/(choice|lazy-live|press|probe-options|settings-form|sounds)\.tsx?$|shared\/recorder\/rhythm\.ts$/,
+    priority: 1,
+  },
 ];
 
 export default defineConfig({

@@ -1,6 +1,7 @@
-import { ApiError, type Shelf } from '../api/http.ts';
+import type { Shelf } from '../api/http.ts';
 import type { AsOf } from './as-of.ts';
 import type { Device } from './device.ts';
+import { createLine, LATE } from './line.ts';
 
 /** What the screens on site need; nothing else of the shop lies on a phone (ASVS 14.3.3). */
 const ON_SITE = [
@@ -11,16 +12,13 @@ const ON_SITE = [
   /^\/api\/(ratings|probes|calibrations)$/,
 ];
 
-/** On a bad line a page that lies here already is shown after so long; the line's answer follows when it comes. */
-const PATIENCE_MS = 4_000;
-
-/** Neither the server nor anything before it answered. A proxy says so with 502 to 504. */
-export function isAway(error: unknown): boolean {
-  return error instanceof ApiError && [0, 502, 503, 504].includes(error.status);
-}
-
 /** Keeps the server's answers as they come, and gives them where it cannot be asked. */
-export function createShelf(device: Device, asOf: AsOf, onLate: (url: string) => void): Shelf {
+export function createShelf(
+  device: Device,
+  asOf: AsOf,
+  onLate: (url: string) => void,
+  line = createLine(),
+): Shelf {
   async function keep(url: string, answer: unknown): Promise<void> {
     const person = device.person();
     if (person) await device.answers.put(person.id, url, answer);
@@ -53,23 +51,10 @@ export function createShelf(device: Device, asOf: AsOf, onLate: (url: string) =>
     asked.catch(() => {});
     const kept = await find(url, check);
     if (!kept) return asked;
-    const served = () => {
-      asOf.set(url, kept.fetchedAtMs);
-      return kept.data;
-    };
-    const late = new Promise<typeof kept.data>((resolve) => {
-      const timer = setTimeout(() => {
-        isLate = true;
-        resolve(served());
-      }, PATIENCE_MS);
-      asked.then(
-        () => clearTimeout(timer),
-        () => clearTimeout(timer),
-      );
-    });
-    return Promise.race([late, asked]).catch((error: unknown) => {
-      if (isAway(error)) return served();
-      throw error;
-    });
+    const answer = await line.wait(asked);
+    if (answer !== LATE) return answer;
+    isLate = true;
+    asOf.set(url, kept.fetchedAtMs);
+    return kept.data;
   };
 }

@@ -115,3 +115,28 @@ test('on a line that hangs, what lies here is shown after four seconds and the a
   expect([first, age]).toEqual([{ day: 'Monday' }, 1_000]);
   expect(asOf.times().size).toBe(0);
 });
+
+test('on a line that hung once the next pages are shown at once, until something answers', async () => {
+  const { shelf, answers, laidBy } = await build();
+  const [visit, machine] = ['/api/visits/1', '/api/machines/1'];
+  for (const url of [ROUNDS, visit, machine]) {
+    await shelf(url, answers({ url }), asIs);
+    await laidBy(url);
+  }
+  const hangs = () => new Promise(() => {});
+  vi.useFakeTimers({ toFake: ['setTimeout', 'clearTimeout'], shouldAdvanceTime: true });
+  const shownAfter = async (url: string, ms: number) => {
+    let isShown = false;
+    void shelf(url, hangs, asIs).then(() => (isShown = true));
+    const before = vi.getTimerCount();
+    await vi.waitFor(() => expect(vi.getTimerCount()).toBeGreaterThan(before));
+    await vi.advanceTimersByTimeAsync(ms);
+    return isShown;
+  };
+
+  expect(await shownAfter(ROUNDS, 3_000)).toBe(false);
+  await vi.advanceTimersByTimeAsync(1_500);
+  expect(await shownAfter(visit, 400)).toBe(true);
+  await shelf(machine, answers({}), asIs);
+  expect(await shownAfter(visit, 400)).toBe(false);
+});
