@@ -185,7 +185,10 @@ export async function beginBadDay(line: BadLine, visitId: string) {
       await browser.context.setOffline(false);
       await endByKeys(page);
       if (isKilled) await killEnding();
-      else await expect(page.getByText(/by engine version/)).toBeVisible(PATIENTLY);
+      else
+        await expect(page.getByText(/^Judged on this phone by engine version/)).toBeVisible(
+          PATIENTLY,
+        );
       await expect
         .poll(
           async () => {
@@ -218,6 +221,8 @@ function thingsOf(page: Page): Promise<KeptHere[]> {
 }
 
 export type Verdict = {
+  /** The run that the server made; '' where it made none. */
+  runId: string;
   shown: number;
   /** Readings that were on the screen and are not with the server. */
   lost: number[];
@@ -251,7 +256,7 @@ function verdictOf({ shown, received, made, lines, kept, faults }: Found): Verdi
   const stuck = kept.filter(({ state }) => state !== 'applied');
   if (stuck.length > 0) problems.push(`${stuck.length} things: ${stuck[0]?.state}`);
   if (received.some((tempF, at) => at > 0 && tempF < received[at - 1]!)) problems.push('disorder');
-  return { shown: shown.length, ...heldAgainst(shown, received), problems };
+  return { runId: made[0] ?? '', shown: shown.length, ...heldAgainst(shown, received), problems };
 }
 
 /** Every reading of a day is another figure, so that one too few and one too many cannot make up for each other. */

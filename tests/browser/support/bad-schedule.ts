@@ -70,8 +70,8 @@ export async function playBadSchedule(line: BadLine, seed: number): Promise<Play
     // What the page could not do is a fault of the page: it is told with the way that led there.
     const words = error instanceof Error ? error.message : String(error);
     const problems = [`after ${done.join(' | ')}: ${words}`];
-    const shown = day.shown.length;
-    return { shown, lost: [], doubled: [], problems, seed, steps, ms: performance.now() - began };
+    const none = { runId: '', shown: day.shown.length, lost: [], doubled: [] };
+    return { ...none, problems, seed, steps, ms: performance.now() - began };
   } finally {
     await day.close();
   }

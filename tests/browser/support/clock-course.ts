@@ -3,7 +3,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import type { BrowserContext, Page } from '@playwright/test';
-import { openBrowser } from './own-browser.ts';
+import { openBrowser, type OwnBrowser } from './own-browser.ts';
 import { layByPhone } from './phone.ts';
 import { byKeypad, openToStart, readByKeys } from './run-by-keys.ts';
 import { errorOfLast, eventsOnDevice, firstDown, forgetFinger, noteFingers } from './true-time.ts';
@@ -42,16 +42,7 @@ export async function playCourse(url: string, manner: Manner, lastsS: number): P
     const before = await errorOfLast(page, start);
     const began = performance.now();
 
-    if (manner === 'killed') {
-      await browser.kill();
-      await pause(lastsS * 1000);
-      browser = await openBrowser(profile);
-      await noteFingers(browser.context);
-      page = await browser.firstPage();
-      await page.goto(stopwatch);
-    } else {
-      await pass(browser.context, page, manner, lastsS);
-    }
+    ({ browser, page } = await undergo({ browser, page, profile }, manner, lastsS));
     await page.getByRole('timer').waitFor();
     await forgetFinger(page);
     await readByKeys(page, 96, byKeypad(page));
@@ -67,15 +58,36 @@ export async function playCourse(url: string, manner: Manner, lastsS: number): P
   }
 }
 
-async function pass(
+type OpenRun = { browser: OwnBrowser; page: Page; profile: string };
+
+/** So long in that manner. @returns the browser and page on which the run goes on */
+export async function undergo(
+  { browser, page, profile }: OpenRun,
+  manner: Manner,
+  lastsS: number,
+): Promise<OpenRun> {
+  if (manner === 'hidden' || manner === 'frozen') {
+    await beHidden(browser.context, page, manner, lastsS);
+    return { browser, page, profile };
+  }
+  const url = page.url();
+  if (manner === 'killed') await browser.kill();
+  await pause(lastsS * 1000);
+  if (manner === 'reloaded') await page.reload();
+  if (manner !== 'killed') return { browser, page, profile };
+  const next = await openBrowser(profile);
+  await noteFingers(next.context);
+  const nextPage = await next.firstPage();
+  await nextPage.goto(url);
+  return { browser: next, page: nextPage, profile };
+}
+
+async function beHidden(
   context: BrowserContext,
   page: Page,
-  manner: Exclude<Manner, 'killed'>,
+  manner: 'hidden' | 'frozen',
   lastsS: number,
 ): Promise<void> {
-  if (manner === 'seen' || manner === 'reloaded') await pause(lastsS * 1000);
-  if (manner === 'reloaded') await page.reload();
-  if (manner !== 'hidden' && manner !== 'frozen') return;
   const other = await context.newPage();
   await other.bringToFront();
   const session = await context.newCDPSession(page);

@@ -10,7 +10,7 @@ import { join, resolve } from 'node:path';
  *
  * @param built the folder that the build lies in
  */
-export async function ownServer(built = 'dist') {
+export async function ownServer(built = process.env['FK_BUILT'] ?? 'dist') {
   const folder = await mkdtemp(join(tmpdir(), 'fusekeeper-own-'));
   // A copy of the program, since a test may lay another version over it.
   await cp(built, join(folder, 'dist'), { recursive: true });

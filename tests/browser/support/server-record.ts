@@ -38,9 +38,9 @@ export function createServerRecord({ url, dataFolder }: Asked) {
     /** The run's words on how it was taken. */
     async warningsOf(runId: string): Promise<string[]> {
       const page = (await (await ask(`/api/runs/${runId}`)).json()) as {
-        reading: { warnings: { message: string }[] };
+        warnings: { message: string }[];
       };
-      return page.reading.warnings.map(({ message }) => message);
+      return page.warnings.map(({ message }) => message);
     },
 
     /** Every line of a visit's hand runs as it was received, in order. */
