@@ -51,7 +51,7 @@ export function EndPanel({ run, probes, onEnd, onClose }: EndPanelProps) {
   return (
     <Panel heading="End this run?" close="Go on reading" onClose={onClose}>
       <p className="px-1 pb-3 text-say">{takenSentence(run)}</p>
-      <div className="grid gap-px border border-print bg-rule">
+      <div className="grid grid-cols-1 gap-px border border-print bg-rule">
         <Choice
           label="Duct"
           name="duct"

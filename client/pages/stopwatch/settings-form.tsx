@@ -27,7 +27,7 @@ const SWITCHES = [
 export function SettingsForm({ preferences, onPrefer }: SettingsFormProps) {
   const prefer = (change: Partial<Preferences>) => onPrefer({ ...preferences, ...change });
   return (
-    <div className="grid gap-px border border-print bg-rule">
+    <div className="grid grid-cols-1 gap-px border border-print bg-rule">
       <Choice
         label="Ask for a reading every"
         name="rhythm"

@@ -83,7 +83,7 @@ export function StartPage(props: StartPageProps) {
         )}
         {props.children}
         {!isTicked && <Cautions onTick={props.onTick} />}
-        <div className="grid gap-px border border-print bg-rule">
+        <div className="grid grid-cols-1 gap-px border border-print bg-rule">
           <Choice
             label="Heat setting"
             name="setting"
