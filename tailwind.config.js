@@ -47,7 +47,10 @@ export default {
       section: ['1.25rem', { lineHeight: '1.2', fontWeight: '600' }],
       'section-site': ['1.4375rem', { lineHeight: '1.2', fontWeight: '600' }],
       finding: ['1.5625rem', { lineHeight: '1.15', letterSpacing: '-0.01em', fontWeight: '600' }],
-      page: ['1.875rem', { lineHeight: '1.1', letterSpacing: '-0.014em', fontWeight: '600' }],
+      page: [
+        'min(1.875rem, 14vw)',
+        { lineHeight: '1.1', letterSpacing: '-0.014em', fontWeight: '600' },
+      ],
       'page-desk': [
         '2.375rem',
         { lineHeight: '1.1', letterSpacing: '-0.014em', fontWeight: '600' },
