@@ -41,17 +41,19 @@ export function NoteOnRun({ runId, toJudge, unit }: NoteOnRunProps) {
       <h2 id="notes-here" className="font-serif text-finding">
         Notes
       </h2>
-      <ul role="status">
-        {written.map(({ id, timeS, tempC, text, isUnsent }) => (
-          <li key={id} className="border-b border-hair py-2 text-body">
-            {text}{' '}
-            <span className="fig whitespace-nowrap text-print">
-              {formatMoment(timeS)}, {formatTemp(tempC, unit)}
-            </span>
-            {isUnsent && <span className="block text-small text-print">Not sent yet</span>}
-          </li>
-        ))}
-      </ul>
+      <div role="status">
+        <ul>
+          {written.map(({ id, timeS, tempC, text, isUnsent }) => (
+            <li key={id} className="border-b border-hair py-2 text-body">
+              {text}{' '}
+              <span className="fig whitespace-nowrap text-print">
+                {formatMoment(timeS)}, {formatTemp(tempC, unit)}
+              </span>
+              {isUnsent && <span className="block text-small text-print">Not sent yet</span>}
+            </li>
+          ))}
+        </ul>
+      </div>
       <form onSubmit={handleSubmit} noValidate className="grid gap-2.5 pt-2">
         <TextField label="Note" name="note" maxLength={200} autoComplete="off" />
         <TextField
