@@ -109,9 +109,10 @@ test('no state of a run has anything that axe finds, a sideways scroll or a smal
   await lookAt(page, 'outcome of a runaway');
 });
 
-test('no page beside a run has anything that axe finds: tenths, left hand, gas, another tab, too short, thrown away, not opened', async ({
+test('no page beside a run has anything that axe finds: tenths, left hand, another tab, too short, thrown away, not opened', async ({
   page,
   context,
+  foresee,
 }) => {
   const visitId = await openStopwatch(page);
   await tick(page);
@@ -145,6 +146,7 @@ test('no page beside a run has anything that axe finds: tenths, left hand, gas, 
   await expect(page.getByText('The run was thrown away.')).toBeVisible();
   await lookAt(page, 'thrown away', briefly);
 
+  foresee(/\/api\/visits\/00000000/, 404);
   await page.goto('/visits/00000000-0000-4000-8000-000000000000/stopwatch');
   await expect(page.getByText('The stopwatch did not open.')).toBeVisible();
   await lookAt(page, 'not opened', briefly);
