@@ -38,7 +38,7 @@ export function MarksPanel({ atS, onMark, onClose }: MarksPanelProps) {
           </Key>
         </form>
       ) : (
-        <div className="grid grid-cols-2 gap-2">
+        <div className="grid grid-cols-2 gap-2 max-[300px]:grid-cols-1">
           {MARKS.map(({ kind, words }) => (
             <Key key={kind} className="!min-h-[72px]" onClick={() => onMark(kind, null)}>
               {words}

@@ -72,7 +72,7 @@ export function TakenList({ run, onCorrect }: Pick<RunPanelProps, 'run' | 'onCor
         {taken.map((each) => (
           <li key={each.id} className="border-b border-hair px-1">
             {'kind' in each ? (
-              <p className="words flex min-h-touch items-center gap-4 text-table">
+              <p className="words flex min-h-touch flex-wrap items-center gap-x-4 text-table">
                 <span className="fig w-14 text-print">{formatAt(each.atS)}</span>
                 {each.text ?? MARK_WORDS[each.kind]}
               </p>
@@ -86,7 +86,7 @@ export function TakenList({ run, onCorrect }: Pick<RunPanelProps, 'run' | 'onCor
                 }}
               />
             ) : (
-              <p className="words flex min-h-touch items-center gap-4 text-table">
+              <p className="words flex min-h-touch flex-wrap items-center gap-x-4 text-table">
                 <span className="fig w-14 text-print">{formatAt(each.atS)}</span>
                 <b className="fig font-semibold">{formatReading(each, run.start.hasTenths)}</b>
                 {each.from === 'probe' && <span className="text-print">probe</span>}

@@ -47,7 +47,7 @@ export function SettingsForm({ preferences, onPrefer }: SettingsFormProps) {
       {SWITCHES.map(({ name, words }) => (
         <label
           key={name}
-          className="words flex min-h-key cursor-pointer items-center gap-4 bg-strip px-3 text-[1.0625rem] leading-[1.25] font-medium"
+          className="words flex min-h-key cursor-pointer items-center gap-4 wrap-anywhere bg-strip px-3 text-[1.0625rem] leading-[1.25] font-medium"
         >
           <input
             type="checkbox"
