@@ -52,7 +52,7 @@ export function createSender({ device, post, locks, onAnswers }: SenderParts) {
       const things = batchOf(unsent.filter(({ id }) => !waiting.has(id)));
       if (things.length === 0) return waiting.size > 0 ? 'waiting' : 'sent';
       const common = { deviceId, personId: person.id, clientVersion: CLIENT_VERSION };
-      const answer = await post({ ...common, things });
+      const answer = await post({ ...common, deviceNowMs: Date.now(), things });
       await device.things.answer(answer.answers);
       await device.changed();
       const settled = new Set(

@@ -26,10 +26,17 @@ async function apply(on: ApplyOn, event: RunEvent, makeEnded: MakeEnded): Promis
   // The chain sees to it that nothing is left out; one that was refused leaves a hole.
   if (event.n <= (await handRuns.lastN(event.runId))) throw outOfPlace();
   if (await handRuns.isOver(event.runId)) throw over();
-  await handRuns.insert(event, owner, on.nowMs);
+  await handRuns.insert(withClocks(event, on), owner, on.nowMs);
   const answer = { runId: event.runId };
   const isEdge = event.kind === 'end' || event.kind === 'start';
   return { status: 'applied', answer, ...(isEdge && { afterwards: makeEnded }) };
+}
+
+/** The end says what both clocks said as it came: a run without signal has nothing else to check its clock by. */
+function withClocks(event: RunEvent, { deviceNowMs, nowMs }: ApplyOn): RunEvent {
+  if (event.kind !== 'end') return event;
+  const reached = deviceNowMs === null ? undefined : { serverMs: nowMs, phoneMs: deviceNowMs };
+  return { ...event, reached };
 }
 
 /** A run belongs to whoever began it; nobody else adds to it. @throws {AppError} may not */

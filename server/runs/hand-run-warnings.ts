@@ -45,7 +45,10 @@ function clockWarning({ fromS, toS, check, longerS }: HandRun['clock'][number]):
   const span = `From ${formatMoment(fromS)} to ${formatMoment(toS)} time is from the phone’s clock`;
   const checked = {
     unchecked: 'not checked',
-    agrees: 'the server’s clock agrees',
+    agrees:
+      longerS === null
+        ? 'it agreed with the server’s clock when the run was sent'
+        : 'the server’s clock agrees',
     differs: `the server’s clock differs by ${formatSpan(Math.abs(longerS ?? 0))}`,
   };
   return told('phone-clock', `${span}; ${checked[check]}`);

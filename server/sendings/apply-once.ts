@@ -14,7 +14,7 @@ import {
 } from './thing-handler.ts';
 
 export type Handlers = Partial<Record<SendingKind, ThingHandler>>;
-export type From = { person: Person; deviceId: string };
+export type From = { person: Person; deviceId: string; deviceNowMs: number | null };
 /** `isNew`: decided now, not remembered. */
 type Done = { answer: ThingAnswer; isNew: boolean; afterwards?: (() => Promise<void>) | undefined };
 type Decided = { answer: ThingAnswer; isFinal: boolean; afterwards?: Done['afterwards'] };
@@ -78,7 +78,7 @@ async function placeProblem(
 type HandedOn = Omit<ApplyOn, 'thing'> & From & { thing: Thing };
 
 async function decide(handlers: Handlers, on: HandedOn): Promise<Decided> {
-  const { trx, person, deviceId, nowMs } = on;
+  const { trx, person, deviceId, deviceNowMs, nowMs } = on;
   const { payload, ...envelope } = on.thing;
   const { id, kind } = envelope;
   const handler = isKnown(handlers, kind) ? handlers[kind] : undefined;
@@ -88,7 +88,10 @@ async function decide(handlers: Handlers, on: HandedOn): Promise<Decided> {
   try {
     // A point to go back to: a refusal leaves nothing of itself but its record.
     const applied = await trx.transaction((inner) =>
-      handler.apply({ trx: inner, person, thing: { ...envelope, deviceId }, nowMs }, payload),
+      handler.apply(
+        { trx: inner, person, thing: { ...envelope, deviceId }, deviceNowMs, nowMs },
+        payload,
+      ),
     );
     return { answer: answerOf(id, applied, payload), isFinal: true, ...afterwardsOf(applied) };
   } catch (error) {

@@ -9,10 +9,10 @@ export function sendingRoutes(sendings: SendingService, now: () => Date): Router
   const router = Router();
 
   router.post('/sendings', async (req, res) => {
-    const { deviceId, personId, things } = validate(sendingsSchema, req.body);
+    const { deviceId, personId, deviceNowMs, things } = validate(sendingsSchema, req.body);
     const person = personOf(req);
     if (personId !== null && personId !== person.id) throw otherPerson();
-    const answers = await sendings.takeAll({ person, deviceId }, things);
+    const answers = await sendings.takeAll({ person, deviceId, deviceNowMs }, things);
     const answer: SendingsAnswer = { serverNowMs: now().getTime(), answers };
     res.json(answer);
   });

@@ -10,6 +10,8 @@ export type ApplyOn = {
   trx: Knex.Transaction;
   person: Person;
   thing: Omit<Thing, 'payload'> & { deviceId: string };
+  /** What the device's clock said as it sent this; null where it did not say. */
+  deviceNowMs: number | null;
   nowMs: number;
 };
 

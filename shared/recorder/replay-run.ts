@@ -68,7 +68,7 @@ export function replayRun(events: readonly RunEvent[]): HandRun | null {
     corrections,
     takenBack: taken.size,
     guard: ofKind(ordered, 'guard').map(({ atS, says, why }) => ({ atS, says, why })),
-    clock: clockSpans(ofKind(ordered, 'asleep'), ofKind(ordered, 'clock-check')),
+    clock: clockSpans(ordered),
     steps: ofKind(ordered, 'clock-step').map(({ atS, stepS }) => ({ atS, stepS })),
     probeGaps: ofKind(ordered, 'probe-gap').map(({ fromS, atS }) => ({ fromS, toS: atS })),
     end: ofKind(ordered, 'end').at(-1) ?? null,

@@ -30,6 +30,9 @@ type Stamp = {
 /** A temperature in the unit of the probe that it comes from. */
 export type Measured = { temp: number; unit: DisplayUnit };
 
+/** What both clocks said when the end of a run came to the server. */
+export type Reached = { serverMs: number; phoneMs: number };
+
 type Happening =
   | {
       kind: 'start';
@@ -56,7 +59,8 @@ type Happening =
   | { kind: 'probe-gap'; fromS: number }
   /** What the guard began to say. */
   | { kind: 'guard'; says: 'quiet' | 'watch' | 'cut-heat' | 'unplug'; why: string }
-  | { kind: 'end'; label: string; setup: EndSetup }
+  /** `reached` is put there by the server. */
+  | { kind: 'end'; label: string; setup: EndSetup; reached?: Reached | undefined }
   | { kind: 'thrown-away' };
 
 /** One line of a run taken by hand. The run is the list of them; nothing in it is ever changed. */

@@ -63,6 +63,10 @@ export const runEventSchema = z.discriminatedUnion('kind', [
     says: z.enum(['quiet', 'watch', 'cut-heat', 'unplug']),
     why: z.string().max(60),
   }),
-  event('end', { label, setup: endSetupSchema }),
+  event('end', {
+    label,
+    setup: endSetupSchema,
+    reached: z.object({ serverMs: instantSchema, phoneMs: instantSchema }).optional(),
+  }),
   event('thrown-away', {}),
 ]) satisfies z.ZodType<RunEvent>;

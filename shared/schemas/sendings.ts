@@ -27,6 +27,8 @@ export const sendingsSchema = z.object({
   /** Whose things they are; the session may be somebody else's by now. Null: an older client, which did not say. */
   personId: idSchema.nullable().default(null),
   clientVersion: z.string().max(40).default(''),
+  /** What the device's clock says as it sends; null: an older client, which did not say. */
+  deviceNowMs: instantSchema.nullable().default(null),
   /** Each is read on its own: one that cannot be read does not hold up the others. */
   things: z.array(z.unknown()).max(MOST_THINGS),
 });

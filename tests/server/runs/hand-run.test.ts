@@ -31,6 +31,7 @@ type Said = { atS: number } & (
   | { mark: 'click' | 'heat-off' }
   | { kind: 'undo' | 'correction'; of: number; temp?: number }
   | { says: 'cut-heat' }
+  | { asleepFromS: number }
 );
 
 /** The events of a run, from what was done in it. */
@@ -46,6 +47,7 @@ function eventsOf(visitId: string, said: Said[], endS: number): RunEvent[] {
   const middle = said.map((each, i): RunEvent => {
     const stamped = { id: ids[i]!, ...stamp(i + 1, each.atS) };
     if ('mark' in each) return { ...stamped, kind: 'mark', mark: each.mark, text: null };
+    if ('asleepFromS' in each) return { ...stamped, kind: 'asleep', fromS: each.asleepFromS };
     if ('says' in each) return { ...stamped, kind: 'guard', says: each.says, why: 'limit-near' };
     if (!('kind' in each)) return { ...stamped, kind: 'reading', temp: each.temp, from: 'hand' };
     if (each.kind === 'undo') return { ...stamped, kind: 'undo', takes: ids[each.of]! };
@@ -62,8 +64,8 @@ function eventsOf(visitId: string, said: Said[], endS: number): RunEvent[] {
   return [start, ...middle, end];
 }
 
-function send(agent: Agent, events: RunEvent[]) {
-  const device = sendingDevice(agent);
+function send(agent: Agent, events: RunEvent[], deviceNowMs: number | null = null) {
+  const device = sendingDevice(agent, { deviceNowMs });
   const chain = `run:${events[0]?.runId}`;
   const things = events.map((event, i) =>
     device.thing('run-event', event, { chain, chainN: i + 1 }),
@@ -130,6 +132,24 @@ test('both values of a correction, what was taken back and the guard are told on
     'guard',
   ]);
   expect(page.warnings[0].message).toContain(`typed as ${wasTemp} and put right to 88`);
+});
+
+test('a span asleep in a run without signal is held against both clocks as its end comes', async () => {
+  const { visit } = await bookVisit(owner, technician);
+  const said: Said[] = [...readings(3, 30), { atS: 320, asleepFromS: 300 }];
+  const told = async (deviceNowMs: number | null) => {
+    const events = eventsOf(visit.id, said, 340);
+    await send(technician, events, deviceNowMs);
+    return (await technician.get(`/api/runs/${events[0]?.runId}`)).body.warnings[0].message;
+  };
+  const span = 'From 5:00 to 5:20 time is from the phone’s clock';
+
+  expect(await told(NOW.getTime() + 400)).toBe(
+    `${span}; it agreed with the server’s clock when the run was sent.`,
+  );
+  expect(await told(NOW.getTime() - 90_000)).toBe(`${span}; not checked.`);
+  // An older client, which does not say what its clock shows.
+  expect(await told(null)).toBe(`${span}; not checked.`);
 });
 
 test('device and server judge twenty seeded runs alike, to the figures that are printed', async () => {

@@ -5,7 +5,7 @@ import type { ThingAnswer } from '#shared/schemas/sendings.ts';
 type Sent = { id?: string; chain?: string | null; chainN?: number | null };
 
 /** A device that sends: things in the envelope of today's client, numbered as they are made. */
-export function sendingDevice(agent: Agent) {
+export function sendingDevice(agent: Agent, more: { deviceNowMs?: number | null } = {}) {
   const deviceId = randomUUID();
   let order = 0;
   return {
@@ -23,7 +23,8 @@ export function sendingDevice(agent: Agent) {
       };
     },
     async send(...things: unknown[]): Promise<ThingAnswer[]> {
-      const body = { deviceId, personId: agent.person.id, clientVersion: '1', things };
+      const envelope = { deviceId, personId: agent.person.id, clientVersion: '1', ...more };
+      const body = { ...envelope, things };
       const answer = await agent.post('/api/sendings').send(body);
       if (answer.status !== 200) throw new Error(`${answer.status} ${answer.text}`);
       return answer.body.answers;

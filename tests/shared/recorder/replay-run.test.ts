@@ -133,23 +133,59 @@ describe('a span by the phone’s clock', () => {
   } as const;
   const check = (n: number, atS: number, serverMs: number) =>
     ({ id: `c${n}`, runId: 'r', n, wallMs: 0, kind: 'clock-check', atS, serverMs }) as const;
+  /** Ended at 500 s of the run, when the phone's clock said 5,000 s; sent 100 s later. */
+  const sent = (serverMs: number) => {
+    const reached = { serverMs, phoneMs: 5_100_000 };
+    const said = { label: 'Run 1', setup: { ...SETUP, duct: 'on', load: 'damp' } } as const;
+    return {
+      id: 'z',
+      runId: 'r',
+      n: 9,
+      atS: 500,
+      wallMs: 5_000_000,
+      kind: 'end',
+      ...said,
+      reached,
+    } as const;
+  };
 
   test('agrees where the server counted as much between the checks around it', () => {
-    const checks = [check(1, 90, 1_000_000), check(3, 410, 1_320_500)];
+    const checks = [check(1, 90, 1_000_000), asleep, check(3, 410, 1_320_500)];
 
-    expect(clockSpans([asleep], checks)).toMatchObject([{ fromS: 100, toS: 400, check: 'agrees' }]);
+    expect(clockSpans(checks)).toMatchObject([{ fromS: 100, toS: 400, check: 'agrees' }]);
   });
 
   test('differs where the phone was set ahead by an hour meanwhile', () => {
-    const checks = [check(1, 90, 1_000_000), check(3, 4010, 1_320_000)];
+    const checks = [check(1, 90, 1_000_000), { ...asleep, atS: 4000 }, check(3, 4010, 1_320_000)];
 
-    expect(clockSpans([{ ...asleep, atS: 4000 }], checks)).toMatchObject([
-      { check: 'differs', longerS: 3600 },
-    ]);
+    expect(clockSpans(checks)).toMatchObject([{ check: 'differs', longerS: 3600 }]);
   });
 
   test('is unchecked while the server was reached on one side only', () => {
-    expect(clockSpans([asleep], [check(1, 90, 1_000_000)])).toMatchObject([{ check: 'unchecked' }]);
+    expect(clockSpans([check(1, 90, 1_000_000), asleep])).toMatchObject([{ check: 'unchecked' }]);
+  });
+
+  test('is held against both clocks as the run came, where the server was not reached between', () => {
+    // The check stands at 90 s; the run came at 500 + 100 = 600 s of its own time: 510 s later.
+    const found = [510, 511, 540, 0].map((byServerS) => {
+      const events = [check(1, 90, 1_000_000), asleep, sent(1_000_000 + byServerS * 1000)];
+      return clockSpans(events)[0];
+    });
+
+    expect(found).toMatchObject([
+      { check: 'agrees', longerS: 0 },
+      { check: 'agrees', longerS: -1 },
+      // Half a minute may be the line's.
+      { check: 'unchecked', longerS: null },
+      { check: 'differs', longerS: 510 },
+    ]);
+  });
+
+  test('of a run without signal is held against how right the phone’s clock was in the end', () => {
+    expect(clockSpans([asleep, sent(5_101_000)])).toMatchObject([
+      { check: 'agrees', longerS: null },
+    ]);
+    expect(clockSpans([asleep, sent(5_400_000)])).toMatchObject([{ check: 'unchecked' }]);
   });
 });
 
