@@ -46,7 +46,8 @@ function server(port: string, dataFolder: string, demo: 'yes' | 'no') {
       DEMO: demo,
       NODE_ENV: 'production',
     },
-    timeout: 60_000,
+    // Three shops are laid out side by side, on a machine that may be busy.
+    timeout: 120_000,
     gracefulShutdown: { signal: 'SIGTERM' as const, timeout: 5_000 },
   };
 }
@@ -55,7 +56,7 @@ export default defineConfig({
   testDir: 'tests/browser',
   testMatch: '*.test.ts',
   workers: WORKERS,
-  timeout: 120_000,
+  timeout: 240_000,
   expect: { timeout: 20_000 },
   forbidOnly: true,
   outputDir: 'test-results/browser',

@@ -83,7 +83,9 @@ function JobRow({ job, zone }: { job: JobListItem; zone: string }) {
     <tr
       className={`relative max-wide:grid max-wide:grid-cols-[64px_minmax(0,1fr)_auto] max-wide:gap-x-3 max-wide:border-b max-wide:border-print max-wide:py-3 wide:static wide:text-[1.03125rem] wide:leading-[1.28] wide:*:py-[11px] wide:*:align-top ${isCallback ? RULE_ON_PHONE : ''}`}
     >
-      <Td className={`fig text-[1.1875rem] font-semibold ${CELL} ${isCallback ? RULE_ON_DESK : ''}`}>
+      <Td
+        className={`fig text-[1.1875rem] font-semibold ${CELL} ${isCallback ? RULE_ON_DESK : ''}`}
+      >
         <Link to={`/jobs/${job.id}`} className={IN_LINE}>
           {job.number}
         </Link>

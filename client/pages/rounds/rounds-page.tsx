@@ -50,7 +50,9 @@ function RoundsFrame({ heading, body }: { heading: string; body: React.ReactNode
 
 function DayHeading({ children }: { children: string }) {
   return (
-    <PageHeading className="py-2 !text-[1.6875rem] max-[350px]:!text-[1.5rem]">{children}</PageHeading>
+    <PageHeading className="py-2 !text-[1.6875rem] max-[350px]:!text-[1.5rem]">
+      {children}
+    </PageHeading>
   );
 }
 

@@ -1,4 +1,4 @@
-import { useEffect, useState, type ComponentType } from 'react';
+import { useEffect, useRef, useState, type ComponentType } from 'react';
 import { replayRun } from '#shared/recorder/replay-run.ts';
 import type { RunEvent } from '#shared/recorder/run-event.ts';
 import { ApiError } from '../../api/http.ts';
@@ -31,6 +31,8 @@ type Opened = {
   /** The run that goes on, if there is one. */
   taking: Taking | null;
   isTicked: boolean;
+  /** How many runs of this visit are known: the next one is named by it. */
+  runs: number;
 };
 type Opening =
   { state: 'opening' } | { state: 'failed'; words: string } | { state: 'open'; opened: Opened };
@@ -87,8 +89,20 @@ async function open(): Promise<Opened> {
   // A run that goes on is opened wherever it was begun.
   const sources = await findSources(session, start?.kind === 'start' ? start.visitId : visitId);
   const taking = running && (await goOn(sources, running));
-  const { safetyTickedAtMs } = sources.visit;
-  return { sources, taking, isTicked: safetyTickedAtMs !== null || (await wasTicked(visitId)) };
+  const isTicked = sources.visit.safetyTickedAtMs !== null || (await wasTicked(visitId));
+  return { sources, taking, isTicked, runs: countRuns(sources.visit, runs) };
+}
+
+/** Those that the shop has, and those that lie here and have not come to it yet. */
+function countRuns(visit: Sources['visit'], kept: RunEvent[][]): number {
+  const ids = new Set(visit.runs.map(({ id }) => id));
+  for (const events of kept) {
+    const [start] = events;
+    const isOfVisit = start?.kind === 'start' && start.visitId === visit.id;
+    const isThrownAway = events.some(({ kind }) => kind === 'thrown-away');
+    if (isOfVisit && !isThrownAway) ids.add(start.runId);
+  }
+  return ids.size;
 }
 
 async function goOn(sources: Sources, events: RunEvent[]): Promise<Taking> {
@@ -141,6 +155,8 @@ function Stopwatch({ opened }: { opened: Opened }) {
   const [problem, setProblem] = useState<string | null>(null);
   const [preferences, setPreferences] = useState(loadPreferences);
   const [taking, setTaking] = useState(opened.taking);
+  const [runs, setRuns] = useState(opened.runs);
+  const isStarting = useRef(false);
   useEffect(fetchTheRest, []);
 
   function handlePrefer(next: typeof preferences): void {
@@ -155,9 +171,15 @@ function Stopwatch({ opened }: { opened: Opened }) {
   }
   function handleStart(run: NewRun, downMonoMs: number): void {
     sounds.wake();
+    if (isStarting.current) return;
+    isStarting.current = true;
     begin(sources, run, downMonoMs)
-      .then(setTaking)
-      .catch((error: unknown) => setProblem(wordsOf(error)));
+      .then((begun) => {
+        setTaking(begun);
+        setRuns(runs + 1);
+      })
+      .catch((error: unknown) => setProblem(wordsOf(error)))
+      .finally(() => (isStarting.current = false));
   }
 
   const preferring = { preferences, onPrefer: handlePrefer };
@@ -171,7 +193,7 @@ function Stopwatch({ opened }: { opened: Opened }) {
       {...preferring}
       sources={sources}
       isTicked={isTicked}
-      runs={sources.visit.runs.length}
+      runs={runs}
       problem={problem}
       onTick={handleTick}
       onStart={handleStart}

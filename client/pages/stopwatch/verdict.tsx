@@ -7,6 +7,9 @@ import { formatBand } from '#shared/wording/format.ts';
 import { SAFETY_LINE } from '#shared/wording/safety-lines.ts';
 import { wordFinding } from '#shared/wording/word-finding.ts';
 import { wordOutcome } from '#shared/wording/word-outcome.ts';
+import { eventsOf } from '../../chart/chart-events.ts';
+import { ChartTable } from '../../chart/chart-table.tsx';
+import { buildPyramid } from '../../chart/pyramid.ts';
 import { SmallStrip } from '../../chart/small-strip.tsx';
 import { stripOfRun } from '../../chart/strip-of-run.ts';
 import { StopSign } from '../../components/signs.tsx';
@@ -30,6 +33,7 @@ export function Verdict({ run, sources, toJudge, about, analysis }: VerdictProps
   const { heading, sentence, afterStop } = wordOutcome(analysis.outcome, headline, about);
   const worded = [headline, ...others].map((finding) => wordFinding(finding, about));
   const { timesS, tempsC } = toJudge.series;
+  const strip = stripOfRun({ analysis, bands, marks: toJudge.marks, notes: [] });
   const trace = Array.from(timesS, (timeS, i): [number, number, number] => [
     timeS,
     tempsC[i]!,
@@ -55,7 +59,7 @@ export function Verdict({ run, sources, toJudge, about, analysis }: VerdictProps
       )}
       <div className="-mx-4 mt-4 border-y border-print bg-strip">
         <SmallStrip
-          strip={stripOfRun({ analysis, bands, marks: toJudge.marks, notes: [] })}
+          strip={strip}
           trace={trace}
           unit={unit}
           name={`The run on paper: ${heading}`}
@@ -66,10 +70,21 @@ export function Verdict({ run, sources, toJudge, about, analysis }: VerdictProps
             }
           }
         />
+        <div className="px-4">
+          <ChartTable
+            id="outcome-table"
+            pyramid={buildPyramid(timesS, tempsC, strip.gaps)}
+            unit={unit}
+            events={eventsOf(strip)}
+            view={{ fromS: 0, toS: timesS.at(-1) ?? 0 }}
+            hasAllReadings
+          />
+        </div>
       </div>
       {worded.map(({ title, sentences, nextChecks }) => (
         <section key={title} className="border-b border-hair py-3">
-          <h2 className="font-serif text-finding">{title}</h2>
+          {/* The first one is the page's heading, and is not shown twice. */}
+          <h2 className={title === heading ? 'sr-only' : 'font-serif text-finding'}>{title}</h2>
           {sentences.map((said) => (
             <p key={said} className="pt-1 text-body">
               {said}

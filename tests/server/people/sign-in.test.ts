@@ -74,22 +74,25 @@ test('a wrong password, an unknown address and a disabled person get the same an
 });
 
 test('an unknown address takes as long as a known one', async () => {
-  const medianMs = async (email: string) => {
-    const times: number[] = [];
-    for (let i = 0; i < 3; i++) {
-      await app.db('sign_in_failures').delete();
-      const start = performance.now();
-      await signIn(email, 'not the password');
-      times.push(performance.now() - start);
-    }
-    return times.toSorted((a, b) => a - b)[1] ?? 0;
+  const takesMs = async (email: string) => {
+    await app.db('sign_in_failures').delete();
+    const start = performance.now();
+    await signIn(email, 'not the password');
+    return performance.now() - start;
   };
 
-  const [known, unknown] = [await medianMs(EMAIL), await medianMs('nobody@harrowlane.example')];
+  // In turn, so that what else the machine does falls on both; the quickest is the least disturbed.
+  const known: number[] = [];
+  const unknown: number[] = [];
+  for (let i = 0; i < 4; i++) {
+    known.push(await takesMs(EMAIL));
+    unknown.push(await takesMs('nobody@harrowlane.example'));
+  }
 
-  // Generous, for a busy machine: without the hash of nobody it is under a tenth.
-  expect(unknown / known).toBeGreaterThan(0.5);
-  expect(unknown / known).toBeLessThan(2);
+  // Without the hash of nobody it is under a tenth.
+  const ratio = Math.min(...unknown) / Math.min(...known);
+  expect(ratio).toBeGreaterThan(0.5);
+  expect(ratio).toBeLessThan(2);
 });
 
 test('nothing of a long password is ignored', async () => {
