@@ -71,7 +71,7 @@ export default defineConfig({
     ],
     environment: 'node',
     setupFiles: ['tests/support/fail-on-console-error.ts'],
-    testTimeout: 20_000,
+    testTimeout: 60_000,
     maxWorkers: 2,
   },
 });
