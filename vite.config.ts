@@ -66,7 +66,14 @@ export default defineConfig({
         // Pure, by the rules of shared/: files of tests need not be kept apart, and load it once.
         test: { name: 'shared', include: ['tests/shared/**/*.test.ts'], isolate: false },
       },
-      { extends: true, test: { name: 'server', include: ['tests/server/**/*.test.ts'] } },
+      {
+        extends: true,
+        test: {
+          name: 'server',
+          include: ['tests/server/**/*.test.ts'],
+          globalSetup: ['tests/support/built-workers.ts'],
+        },
+      },
       { extends: true, test: { name: 'client', include: ['tests/client/**/*.test.ts'] } },
     ],
     environment: 'node',

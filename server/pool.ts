@@ -3,20 +3,21 @@ import { createRequire } from 'node:module';
 import { pathToFileURL } from 'node:url';
 import { Piscina } from 'piscina';
 
-/** From source the workers are TypeScript and need tsx; once built they are JavaScript beside this bundle. */
-const fromSource = import.meta.url.endsWith('.ts');
-
 /** The threads that keep the main one free; each starts at its first task. */
 export type Workers = { passwords: Piscina; runs: Piscina };
 
-export function openWorkers(): Workers {
+/**
+ * @param beside the file in whose folder they lie: this one. From source they are TypeScript and need tsx; built they
+ *   are JavaScript
+ * @param niceIncrement where cores are short, whoever waits for a page goes first
+ */
+export function openWorkers({ beside = import.meta.url, niceIncrement = 10 } = {}): Workers {
   return {
     // One hash at a time: a storm of sign-ins must leave a core for everyone else.
-    passwords: pool('people/password-worker', { maxThreads: 1, maxQueue: 20 }),
-    // Where cores are short, whoever waits for a page goes first.
-    runs: pool('runs/run-worker', {
+    passwords: pool(beside, 'people/password-worker', { maxThreads: 1, maxQueue: 20 }),
+    runs: pool(beside, 'runs/run-worker', {
       maxThreads: Math.max(1, availableParallelism() - 1),
-      niceIncrement: 10,
+      niceIncrement,
     }),
   };
 }
@@ -26,11 +27,13 @@ export async function closeWorkers(workers: Workers): Promise<void> {
 }
 
 function pool(
+  beside: string,
   name: string,
   limits: { maxThreads: number; maxQueue?: number; niceIncrement?: number },
 ): Piscina {
+  const fromSource = beside.endsWith('.ts');
   return new Piscina({
-    filename: new URL(`./${name}.${fromSource ? 'ts' : 'js'}`, import.meta.url).href,
+    filename: new URL(`./${name}.${fromSource ? 'ts' : 'js'}`, beside).href,
     execArgv: fromSource ? ['--import', tsxInThread()] : [],
     minThreads: 0,
     idleTimeout: 60_000,

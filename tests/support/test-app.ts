@@ -4,7 +4,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Express } from 'express';
 import request from 'supertest';
-import { afterAll } from 'vitest';
+import { afterAll, inject } from 'vitest';
 import { createApp } from '#server/app.ts';
 import type { AppParts } from '#server/app.ts';
 import { migrate, openDatabase } from '#server/db.ts';
@@ -36,7 +36,7 @@ export async function createTestApp(given: Partial<AppParts> = {}) {
     db,
     dataDir: await mkdtemp(join(tmpdir(), 'fusekeeper-test-')),
     now: () => NOW,
-    workers: openWorkers(),
+    workers: openWorkers({ beside: inject('workersBeside'), niceIncrement: 0 }),
     publicUrl: null,
     secrets: { tokenKey: createSecretKey(randomBytes(48)), pepper: randomBytes(48) },
     logger: createLogger({ write: (line) => void lines.push(line) }),
