@@ -152,10 +152,10 @@ test('a span asleep in a run without signal is held against both clocks as its e
   expect(await told(null)).toBe(`${span}; not checked.`);
 });
 
-test('device and server judge twenty seeded runs alike, to the figures that are printed', async () => {
+test('device and server judge six seeded runs alike, to the figures that are printed', async () => {
   const { visit, machine } = await bookVisit(owner, technician);
   const page = (await technician.get(`/api/machines/${machine.id}`)).body;
-  for (let seed = 101; seed <= 120; seed++) {
+  for (let seed = 101; seed <= 106; seed++) {
     const events = eventsOf(visit.id, readings(seed), 1120);
     const run = replayRun(events);
     const toJudge = run && seriesOfRun(run);
