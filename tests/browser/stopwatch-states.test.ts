@@ -120,6 +120,7 @@ test('no page beside a run has anything that axe finds: tenths, left hand, anoth
     await page.getByRole('radio', { name }).check();
   }
   await page.getByRole('button', { name: 'Start the clock' }).click();
+  await expect(page.getByRole('group', { name: 'Keypad' })).toBeVisible();
   await type(page, '0212');
   await expect(page.getByRole('status').first()).toContainText('Kept, 21.2 at');
   await lookAt(page, 'tenths of a degree, left hand', briefly);

@@ -198,11 +198,15 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
       });
     },
 
-    /** Takes the newest thing back. @returns what it was; null where there is nothing */
-    undo(): RunEvent | null {
-      const last = lastToTakeBack(recording.events);
-      if (last) void record({ kind: 'undo', takes: last.id });
-      return last;
+    /** Takes the newest thing back, also one that is being kept just now. @returns what it was; null: nothing was */
+    undo(): Promise<RunEvent | null> {
+      const atS = atNow();
+      const taken = queue.then(async () => {
+        const last = lastToTakeBack(recording.events);
+        return last && (await keepNext({ kind: 'undo', takes: last.id }, atS)) ? last : null;
+      });
+      queue = taken;
+      return taken;
     },
 
     /** Everything that was asked for so far is on the device, or was refused. */

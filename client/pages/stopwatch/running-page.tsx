@@ -90,8 +90,9 @@ export function RunningPage({
     heatOff: (downMonoMs: number) => mark('heat-off', recorder.at(downMonoMs)),
     undo() {
       if (entry.undo()) return;
-      const taken = recorder.undo();
-      if (taken) setSaid(`Taken back, ${formatAt(taken.atS)}`);
+      void recorder.undo().then((taken) => {
+        if (taken) setSaid(`Taken back, ${formatAt(taken.atS)}`);
+      });
     },
     marks: (downMonoMs: number) => setSlip({ kind: 'marks', atS: recorder.at(downMonoMs) }),
   };

@@ -166,7 +166,7 @@ test('Undo takes back what a person did, not what the probe said since', async (
   await say(60);
   await recorder.mark('click', recorder.at());
   await say(61);
-  recorder.undo();
+  await recorder.undo();
   await recorder.settled();
 
   expect(run().marks).toEqual([]);

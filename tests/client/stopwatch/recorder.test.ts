@@ -148,3 +148,15 @@ test('what the guard begins to say is kept with the run', async () => {
 
   expect(recorder.recording().run.guard.at(-1)?.says).toBe('quiet');
 });
+
+test('Undo right after a mark takes that back, though it is still being kept', async () => {
+  const recorder = await begun(aPhone());
+  await recorder.read(141, 10);
+
+  void recorder.mark('click', 11);
+  await recorder.undo();
+
+  const { run } = recorder.recording();
+  expect(run.marks).toEqual([]);
+  expect(run.readings).toHaveLength(1);
+});
