@@ -47,10 +47,12 @@ export function createDevice({ name = 'fusekeeper', nowMs = Date.now, channel }:
 
   async function countOthers(): Promise<Unsent['others']> {
     const people = await (await db()).getAll('people');
-    const counts = await things.countByPerson();
-    return people
-      .filter(({ id }) => id !== person?.id && counts.has(id))
-      .map(({ id, name }) => ({ name, unsent: counts.get(id) ?? 0 }));
+    const others = people.filter(({ id }) => id !== person?.id);
+    const counted = others.map(async ({ id, name }) => {
+      const { unsent } = await things.count(id);
+      return { name, unsent };
+    });
+    return (await Promise.all(counted)).filter(({ unsent }) => unsent > 0);
   }
 
   /** Tells this page and the other tabs. */

@@ -4,8 +4,6 @@ import type { KeptThing } from './device-db.ts';
 import { keepThing, letGoOfChain, thingsOfChain, thisDevice } from './this-device.ts';
 
 const CHAIN = 'run:';
-/** The character after the colon: where the chains of runs end. */
-const PAST_CHAIN = 'run;';
 
 /** Resolves once the event would survive a power cut. @throws {KeepError} it was not kept */
 export async function keepRunEvent(event: RunEvent): Promise<void> {
@@ -26,8 +24,7 @@ export function letGoOfRun(runId: string): Promise<boolean> {
 export async function listKeptRuns(): Promise<RunEvent[][]> {
   const person = thisDevice.person();
   if (!person) return [];
-  const range = IDBKeyRange.bound([person.id, CHAIN], [person.id, PAST_CHAIN]);
-  const things = await (await thisDevice.db()).getAllFromIndex('things', 'chain', range);
+  const things = await thisDevice.things.listChains(person.id, CHAIN);
   const byRun = new Map<string, RunEvent[]>();
   for (const { payload } of things) {
     if (!isRunEvent(payload)) continue;

@@ -18,6 +18,8 @@ const NO_THINGS: Counts = { unsent: 0, conflict: 0, refused: 0 };
 const APPLIED_MS = 30 * 86_400_000;
 /** Sorts after every string, number and date (Indexed Database API 3.0, section 2.4). */
 const LAST: IDBValidKey[] = [];
+/** Sorts after whatever the name of a chain goes on with. */
+const PAST_NAMES = '\uffff';
 
 export type KeptThings = ReturnType<typeof createKeptThings>;
 
@@ -86,6 +88,12 @@ export function createKeptThings(db: () => Promise<DeviceDb>, nowMs: () => numbe
       return (await db()).getAllFromIndex('things', 'chain', ofChain(personId, chain));
     },
 
+    /** Everything in chains whose names begin so, sent or not, chain by chain and in order. */
+    async listChains(personId: string, beginning: string): Promise<KeptThing[]> {
+      const range = IDBKeyRange.bound([personId, beginning], [personId, beginning + PAST_NAMES]);
+      return (await db()).getAllFromIndex('things', 'chain', range);
+    },
+
     /** Keeps what became of things that were sent. One that is final already stays as it is. */
     async answer(answers: readonly ThingAnswer[]): Promise<void> {
       const tx = (await db()).transaction('things', 'readwrite', STRICT);
@@ -134,18 +142,6 @@ export function createKeptThings(db: () => Promise<DeviceDb>, nowMs: () => numbe
         if (state === 'applied' && isOld) await cursor.delete();
       }
       await tx.done;
-    },
-
-    /** How many unsent things each person has here. */
-    async countByPerson(): Promise<Map<string, number>> {
-      const counts = new Map<string, number>();
-      const tx = (await db()).transaction('things');
-      let cursor = await tx.store.index('state').openKeyCursor();
-      for (; cursor; cursor = await cursor.continue()) {
-        const [personId, state] = cursor.key;
-        if (state === 'unsent') counts.set(personId, (counts.get(personId) ?? 0) + 1);
-      }
-      return counts;
     },
   };
 }

@@ -48,7 +48,9 @@ export function createSender({ device, post, locks, onAnswers }: SenderParts) {
     const deviceId = await device.things.deviceId();
     const waiting = new Set<string>();
     for (;;) {
-      const unsent = await device.things.list(person.id, 'unsent');
+      // No more than can go at once: of a run of hours thousands may lie here.
+      const most = MOST_THINGS + waiting.size;
+      const unsent = await device.things.list(person.id, 'unsent', most);
       const things = batchOf(unsent.filter(({ id }) => !waiting.has(id)));
       if (things.length === 0) return waiting.size > 0 ? 'waiting' : 'sent';
       const common = { deviceId, personId: person.id, clientVersion: CLIENT_VERSION };
