@@ -145,7 +145,7 @@ export function isGapBetween(gaps: Span[], beforeS: number, afterS: number): boo
 }
 
 /** Index of the reading nearest to a time; −1 where there are none. */
-export function nearestReading({ timesS }: Pyramid, timeS: number): number {
+export function nearestReading({ timesS }: Pick<Pyramid, 'timesS'>, timeS: number): number {
   const after = indexAtOrAfter(timesS, timeS);
   if (after === 0) return timesS.length > 0 ? 0 : -1;
   if (after === timesS.length) return after - 1;

@@ -3,6 +3,9 @@ import type { KeptThing } from './device-db.ts';
 import { newId } from './new-id.ts';
 import { keepThing, thisDevice } from './this-device.ts';
 
+/** How chains begin in which a note stands that follows nothing unsent. */
+export const NOTES_ALONE = 'notes:';
+
 /** A note on a run; its id is that of the thing. @throws {KeepError} it was not kept */
 export async function keepRunNote(note: SentRunNote): Promise<KeptThing> {
   return keepThing('run-note', note, { chain: await chainFor(note.runId) });
@@ -26,7 +29,7 @@ async function chainFor(runId: string): Promise<string> {
   const person = thisDevice.person();
   const unsent = person ? await thisDevice.things.list(person.id, 'unsent') : [];
   const last = unsent.findLast(({ payload }) => runIdOf(payload) === runId);
-  return last?.chain ?? `notes:${newId()}`;
+  return last?.chain ?? NOTES_ALONE + newId();
 }
 
 function runIdOf(payload: unknown): unknown {

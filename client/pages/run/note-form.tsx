@@ -14,8 +14,8 @@ import { Slip } from '../../components/slip.tsx';
 import { Failed } from '../../components/waiting.tsx';
 import { keepRunNote, keepRunNoteEdit, keepRunNoteRemoval } from '../../device/run-notes.ts';
 import { problemsOf } from '../../forms/use-checked-form.ts';
+import { readMoment } from '../../forms/typed-moment.ts';
 import { readNumber } from '../../forms/typed-number.ts';
-import { readMoment } from './moment.ts';
 import type { RunHere } from './use-run.ts';
 
 type NoteFormProps = {

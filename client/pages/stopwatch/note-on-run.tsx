@@ -1,33 +1,37 @@
-import { useEffect, useState, type SubmitEvent } from 'react';
+import { useState, type SubmitEvent } from 'react';
 import type { RunToJudge } from '#shared/recorder/series-of-run.ts';
 import type { DisplayUnit } from '#shared/units.ts';
 import { formatMoment, formatTemp } from '#shared/wording/format.ts';
+import { nearestReading } from '../../chart/pyramid.ts';
 import { TextField } from '../../components/field.tsx';
 import { Key } from '../../components/key.tsx';
 import type { KeptThing } from '../../device/device-db.ts';
-import { keepRunNote } from '../../device/run-notes.ts';
+import { keepRunNote, NOTES_ALONE } from '../../device/run-notes.ts';
 import { thingsOfRun } from '../../device/kept-runs.ts';
 import { thisDevice } from '../../device/this-device.ts';
+import { useOnDevice } from '../../device/use-on-device.ts';
+import { readMoment } from '../../forms/typed-moment.ts';
 
 type NoteOnRunProps = { runId: string; toJudge: RunToJudge; unit: DisplayUnit };
 
 /** Notes at a moment of the run that was just taken; each lies on the phone first and goes behind the run. */
 export function NoteOnRun({ runId, toJudge, unit }: NoteOnRunProps) {
-  const written = useNotesHere(runId);
+  const written = useOnDevice(findNotes, runId) ?? [];
   const [problem, setProblem] = useState<string | null>(null);
-  const lastS = toJudge.series.timesS.at(-1) ?? 0;
+  const { timesS, tempsC } = toJudge.series;
+  const lastS = timesS.at(-1) ?? 0;
 
   function handleSubmit(event: SubmitEvent<HTMLFormElement>): void {
     event.preventDefault();
     const form = event.currentTarget;
     const typed = new FormData(form);
     const text = String(typed.get('note') ?? '').trim();
-    const timeS = readTime(String(typed.get('at') ?? ''));
+    const timeS = readMoment(String(typed.get('at') ?? ''));
     if (text === '') return setProblem('Enter the note');
     if (timeS === null || timeS > lastS) {
       return setProblem(`Enter a time up to ${formatMoment(lastS)}`);
     }
-    keepRunNote({ runId, timeS, tempC: tempAt(toJudge, timeS), text }).then(
+    keepRunNote({ runId, timeS, tempC: tempsC[nearestReading({ timesS }, timeS)] ?? 0, text }).then(
       () => {
         setProblem(null);
         form.reset();
@@ -77,29 +81,17 @@ export function NoteOnRun({ runId, toJudge, unit }: NoteOnRunProps) {
 
 type NoteHere = { id: string; timeS: number; tempC: number; text: string; isUnsent: boolean };
 
-/** Notes of the run that lie on this phone, as they were written. */
-function useNotesHere(runId: string): NoteHere[] {
-  const [notes, setNotes] = useState<NoteHere[]>([]);
-  useEffect(() => {
-    let isCurrent = true;
-    const read = async () => {
-      const person = thisDevice.person();
-      const [ofRun, unsent, applied] = await Promise.all([
-        thingsOfRun(runId),
-        person ? thisDevice.things.list(person.id, 'unsent') : [],
-        person ? thisDevice.things.list(person.id, 'applied') : [],
-      ]);
-      const byId = new Map([...ofRun, ...applied, ...unsent].map((thing) => [thing.id, thing]));
-      if (isCurrent) setNotes([...byId.values()].flatMap((thing) => noteOf(thing, runId)));
-    };
-    void read();
-    const stop = thisDevice.subscribe(() => void read());
-    return () => {
-      isCurrent = false;
-      stop();
-    };
-  }, [runId]);
-  return notes;
+/** Notes of the run that lie on this phone, as they were written: behind the run, or in chains of their own. */
+async function findNotes(runId: string): Promise<NoteHere[]> {
+  const person = thisDevice.person();
+  if (!person) return [];
+  const [ofRun, alone] = await Promise.all([
+    thingsOfRun(runId),
+    thisDevice.things.listChains(person.id, NOTES_ALONE),
+  ]);
+  return [...ofRun, ...alone]
+    .sort((a, b) => a.order - b.order)
+    .flatMap((thing) => noteOf(thing, runId));
 }
 
 function noteOf({ id, kind, payload, state }: KeptThing, runId: string): NoteHere[] {
@@ -120,19 +112,4 @@ function isNote(payload: unknown): payload is Written {
     'tempC' in payload &&
     'text' in payload
   );
-}
-
-/** `7:30` or seconds; null where it is neither. */
-function readTime(typed: string): number | null {
-  const [, minutes = '0', seconds] = /^(?:(\d{1,4}):)?(\d{1,5})$/.exec(typed.trim()) ?? [];
-  return seconds === undefined ? null : Number(minutes) * 60 + Number(seconds);
-}
-
-/** The reading nearest to a moment, °C. */
-function tempAt({ series: { timesS, tempsC } }: RunToJudge, timeS: number): number {
-  let nearest = 0;
-  timesS.forEach((each, i) => {
-    if (Math.abs(each - timeS) < Math.abs(timesS[nearest]! - timeS)) nearest = i;
-  });
-  return tempsC[nearest] ?? 0;
 }

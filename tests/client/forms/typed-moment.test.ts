@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { readMoment } from '#client/pages/run/moment.ts';
+import { readMoment } from '#client/forms/typed-moment.ts';
 
 test('a time is read as a clock or as plain seconds', () => {
   expect(readMoment('7:48')).toBe(468);
