@@ -36,8 +36,8 @@ const sharedChunks = [
   },
   {
     name: 'device',
-    // Without what joins the device to the queries, and without live probes: the stopwatch opens without those.
-    test: /node_modules\/idb\/|client\/device\/(?!live\/|join-queries|kept-runs|page-age|start-with-queries|use-kept)/,
+    // Without what joins the device to the queries, and without engine and live probes: the stopwatch opens without those.
+    test: /node_modules\/idb\/|client\/device\/(?!engine\/|live\/|join-queries|kept-runs|page-age|start-with-queries|use-)/,
     priority: 1,
   },
   {

@@ -1,4 +1,4 @@
-import analysisWorkerUrl from '../pages/stopwatch/analysis-worker.ts?worker&url';
+import analysisWorkerUrl from './engine/analysis-worker.ts?worker&url';
 
 export const SERVICE_WORKER_URL = '/sw.js';
 export const ANALYSIS_WORKER_URL = analysisWorkerUrl;

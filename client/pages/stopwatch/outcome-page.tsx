@@ -8,7 +8,7 @@ import type { About } from '#shared/wording/finding-words.ts';
 import { Key } from '../../components/key.tsx';
 import { ThemeWord } from '../../components/theme-word.tsx';
 import { listKeptRuns } from '../../device/kept-runs.ts';
-import { deviceEngine } from './analyse-on-device.ts';
+import { deviceEngine } from '../../device/engine/analyse-on-device.ts';
 import { FocusedHeading } from './focused-heading.tsx';
 import { isEnded, judgeInTurn } from './judge-in-turn.ts';
 import { NoteOnRun } from './note-on-run.tsx';
@@ -91,9 +91,8 @@ function useJudgement(run: HandRun, sources: Sources, toJudge: RunToJudge | null
       )
       .then((analysis) => setJudgement({ state: 'done', analysis }))
       .catch(() => setJudgement({ state: 'failed' }));
-    // Judged once: the run has ended.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, []);
+    // Judged once: a run that has ended does not change.
+  }, [run, sources, toJudge]);
   return judgement;
 }
 

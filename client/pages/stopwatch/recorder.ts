@@ -103,7 +103,7 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
   }
 
   /** Once all that was asked for before is kept or refused. */
-  function inTurn(keep: () => Promise<boolean>): Promise<boolean> {
+  function inTurn<Kept>(keep: () => Promise<Kept>): Promise<Kept> {
     const kept = queue.then(keep);
     queue = kept;
     return kept;
@@ -201,12 +201,10 @@ export function openRecorder(parts: RecorderParts, kept: readonly RunEvent[], is
     /** Takes the newest thing back, also one that is being kept just now. @returns what it was; null: nothing was */
     undo(): Promise<RunEvent | null> {
       const atS = atNow();
-      const taken = queue.then(async () => {
+      return inTurn(async () => {
         const last = lastToTakeBack(recording.events);
         return last && (await keepNext({ kind: 'undo', takes: last.id }, atS)) ? last : null;
       });
-      queue = taken;
-      return taken;
     },
 
     /** Everything that was asked for so far is on the device, or was refused. */

@@ -5,7 +5,7 @@ import { keepRunEvent } from '../../device/kept-runs.ts';
 import { newId } from '../../device/new-id.ts';
 import { holdUpdates } from '../../device/recording-hold.ts';
 import { onAnswers, serverClock } from '../../device/this-device.ts';
-import { deviceEngine } from './analyse-on-device.ts';
+import { deviceEngine } from '../../device/engine/analyse-on-device.ts';
 import { guardSetupOf } from './judge-run.ts';
 import { fetchPanels } from './lazy-panels.tsx';
 import { PlainPage } from './plain-page.tsx';

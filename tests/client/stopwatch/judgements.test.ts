@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { createDeviceEngine } from '#client/pages/stopwatch/device-engine.ts';
-import type { AnalyseRun } from '#client/pages/stopwatch/engine-task.ts';
+import { createDeviceEngine } from '#client/device/engine/device-engine.ts';
+import type { AnalyseRun } from '#client/device/engine/engine-task.ts';
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
 import type { Analysis, AnalysisInput } from '#shared/analysis/analysis.ts';
 import { DEFAULT_RATING } from '#shared/analysis/rating.ts';

@@ -1,4 +1,4 @@
-import { ANALYSIS_WORKER_URL, trustedWorkerUrl } from '../../device/trusted-worker.ts';
+import { ANALYSIS_WORKER_URL, trustedWorkerUrl } from '../trusted-worker.ts';
 import { createDeviceEngine } from './device-engine.ts';
 import type { AnalyseRun } from './engine-task.ts';
 

@@ -1,7 +1,7 @@
 import { MessageChannel, type MessagePort } from 'node:worker_threads';
 import { afterEach, expect, test } from 'vitest';
-import { createDeviceEngine, type EngineWorker } from '#client/pages/stopwatch/device-engine.ts';
-import { answerTask, READY, type AnalyseRun } from '#client/pages/stopwatch/engine-task.ts';
+import { createDeviceEngine, type EngineWorker } from '#client/device/engine/device-engine.ts';
+import { answerTask, READY, type AnalyseRun } from '#client/device/engine/engine-task.ts';
 import { analyseRun } from '#shared/analysis/analyse-run.ts';
 import type { AnalysisInput } from '#shared/analysis/analysis.ts';
 import { cyclingTemps } from '#tests/support/cycling-log.ts';
