@@ -3,6 +3,7 @@ import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { defineConfig } from '@playwright/test';
+import { CHROMIUM_ARGS, CHROMIUM_PATH } from './tests/browser/support/debians-chromium.ts';
 
 async function freePort(): Promise<string> {
   const server = createServer();
@@ -68,16 +69,8 @@ export default defineConfig({
     // Without a film of every page: that costs more than most tests.
     trace: { mode: 'retain-on-failure', screenshots: false },
     launchOptions: {
-      executablePath: process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium',
-      args: [
-        '--no-sandbox',
-        '--disable-gpu',
-        '--disable-quic',
-        '--no-first-run',
-        '--disable-background-networking',
-        '--disable-component-update',
-        '--disable-sync',
-      ],
+      executablePath: CHROMIUM_PATH,
+      args: CHROMIUM_ARGS,
     },
   },
   webServer: [

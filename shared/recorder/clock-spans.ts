@@ -1,4 +1,4 @@
-import type { RunEvent, RunEventOf } from './run-event.ts';
+import type { Reached, RunEvent, RunEventOf } from './run-event.ts';
 
 /** A span measured by the phone's clock alone, and what the server's clock said to it. */
 export type ClockSpan = {
@@ -64,9 +64,6 @@ function longerBetween(before: Check, after: Check): number {
 }
 
 /** The run's time goes on after its end by the phone's clock. */
-function checkByEnd(
-  { n, atS, wallMs }: RunEventOf<'end'>,
-  { serverMs, phoneMs }: { serverMs: number; phoneMs: number },
-): Check {
+function checkByEnd({ n, atS, wallMs }: RunEventOf<'end'>, { serverMs, phoneMs }: Reached): Check {
   return { n: n + 1, atS: atS + (phoneMs - wallMs) / 1000, serverMs };
 }

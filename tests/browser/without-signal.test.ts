@@ -1,39 +1,10 @@
 import { appendFile } from 'node:fs/promises';
 import { join } from 'node:path';
-import type { Page } from '@playwright/test';
-import { DEMO_PASSWORD } from '#server/demo/demo-people.ts';
 import { ownServer } from './support/own-server.ts';
+import { laidBy, signIn, untilLaidBy } from './support/phone.ts';
 import { expect, test } from './support/watched-test.ts';
 
 test.use({ viewport: { width: 390, height: 844 }, serviceWorkers: 'allow' });
-
-async function signIn(page: Page, url: string): Promise<void> {
-  await page.goto(`${url}/`);
-  await page.getByLabel('E-mail').fill('tom.birkett@harrowlane.example');
-  await page.getByLabel('Password').fill(DEMO_PASSWORD);
-  await page.getByRole('button', { name: 'Sign in' }).click();
-  await expect(page.getByRole('link', { name: 'Rosalind Peake', exact: true })).toBeVisible();
-}
-
-/** Addresses whose answers lie on the phone. */
-function laidBy(page: Page): Promise<string[]> {
-  return page.evaluate(async () => {
-    const open = indexedDB.open('fusekeeper');
-    await new Promise((resolve) => (open.onsuccess = resolve));
-    const keys = open.result.transaction('answers').objectStore('answers').getAllKeys();
-    await new Promise((resolve) => (keys.onsuccess = resolve));
-    open.result.close();
-    return keys.result.map((key) => String(key).split(',')[1] ?? '');
-  });
-}
-
-/** The application and every visit of the day lie on the phone. */
-async function untilLaidBy(page: Page): Promise<void> {
-  await page.waitForFunction(() => navigator.serviceWorker.controller !== null);
-  const rounds = await (await page.request.get(new URL('/api/rounds', page.url()).href)).json();
-  const visits = rounds.visits.map(({ id }: { id: string }) => `/api/visits/${id}`);
-  await expect.poll(() => laidBy(page)).toEqual(expect.arrayContaining(visits));
-}
 
 test('a visit is worked on with the server dead, and all of it is sent once when it is back', async ({
   page,

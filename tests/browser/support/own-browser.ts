@@ -1,18 +1,13 @@
 import { spawn } from 'node:child_process';
 import { once } from 'node:events';
 import { chromium, type BrowserContext, type Page } from '@playwright/test';
+import { CHROMIUM_ARGS, CHROMIUM_PATH } from './debians-chromium.ts';
 
 export type OwnBrowser = Awaited<ReturnType<typeof openBrowser>>;
 
 const ARGS = [
   '--headless=new',
-  '--no-sandbox',
-  '--disable-gpu',
-  '--disable-quic',
-  '--no-first-run',
-  '--disable-background-networking',
-  '--disable-component-update',
-  '--disable-sync',
+  ...CHROMIUM_ARGS,
   '--password-store=basic',
   // After a crash it would ask whether to restore.
   '--hide-crash-restore-bubble',
@@ -27,7 +22,7 @@ const ARGS = [
 export async function openBrowser(profile: string) {
   const faults: string[] = [];
   const child = spawn(
-    process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium',
+    CHROMIUM_PATH,
     [...ARGS, `--user-data-dir=${profile}`, 'about:blank'],
     // A process group of its own, so that all of it can be ended at once.
     { detached: true, stdio: ['ignore', 'ignore', 'pipe'] },

@@ -7,16 +7,10 @@ import type { RunEvent } from '#shared/recorder/run-event.ts';
 import { FakeBluetoothDevice, FakeCharacteristic } from '../device/live/fake-bluetooth.ts';
 import { FakePort, FakeSerial } from '../device/live/fake-serial.ts';
 import { handClock, settled } from '../device/live/hand-clock.ts';
+import { NEW_RUN } from './new-run.ts';
 
 const ESS = 0x181a;
-const RUN = {
-  visitId: 'v',
-  label: 'Run 1',
-  unit: 'F',
-  hasTenths: false,
-  setup: { placement: '', duct: null, load: null, setting: 'high', roomTemp: null, probeId: null },
-} as const;
-const END = { ...RUN.setup, placement: 'x', duct: 'on', load: 'empty' } as const;
+const END = { ...NEW_RUN.setup, placement: 'x', duct: 'on', load: 'empty' } as const;
 
 function steps(tempC: number): DataView {
   const value = new DataView(new ArrayBuffer(2));
@@ -38,7 +32,7 @@ async function aRun(unit: 'F' | 'C' = 'F') {
       probe: { accuracyK: 0, calibrationUK: 0, correction: null, responseS: null },
     }),
   };
-  const start = await beginRun(parts, { ...RUN, unit }, clock.nowMs());
+  const start = await beginRun(parts, { ...NEW_RUN, unit }, clock.nowMs());
   const recorder = openRecorder(parts, [start], true);
   const temperature = new FakeCharacteristic({ notify: true }, steps(20));
   const device = new FakeBluetoothDevice({ [ESS]: [temperature] });

@@ -1,14 +1,7 @@
 import { expect, test } from 'vitest';
 import { beginRun, openRecorder } from '#client/pages/stopwatch/recorder.ts';
 import type { RunEvent } from '#shared/recorder/run-event.ts';
-
-const RUN = {
-  visitId: 'v',
-  label: 'Run 1',
-  unit: 'F',
-  hasTenths: false,
-  setup: { placement: '', duct: null, load: null, setting: 'high', roomTemp: null, probeId: null },
-} as const;
+import { NEW_RUN } from './new-run.ts';
 
 /** A phone whose store and clocks the test holds in its hand. */
 function aPhone() {
@@ -45,7 +38,7 @@ function aPhone() {
 }
 
 async function begun(phone: ReturnType<typeof aPhone>) {
-  const start = await beginRun(phone.parts, RUN, phone.monoMs());
+  const start = await beginRun(phone.parts, NEW_RUN, phone.monoMs());
   return openRecorder(phone.parts, [start], true);
 }
 
@@ -85,7 +78,7 @@ test('what could not be kept is not shown, says why, and leaves no hole', async 
 test('nothing follows the end of a run', async () => {
   const phone = aPhone();
   const recorder = await begun(phone);
-  const setup = { ...RUN.setup, placement: 'Outlet', duct: 'on', load: 'empty' } as const;
+  const setup = { ...NEW_RUN.setup, placement: 'Outlet', duct: 'on', load: 'empty' } as const;
   await recorder.end('As found', setup);
 
   expect(await recorder.read(150, recorder.at())).toBe(false);
