@@ -1,5 +1,5 @@
 import type { FindingCode } from '../analysis/analysis.ts';
-import { isGas, type About, type Cause } from './finding-words.ts';
+import { isGas, unlessRun, type About, type Cause } from './finding-words.ts';
 
 const READS_COLD: Cause = {
   cause: 'Thermistor open, unplugged or reading cold',
@@ -85,10 +85,14 @@ function probe(): Cause {
 export function boardChecks(code: FindingCode, about: About): string[] | null {
   const ohms = 'Thermistor: its ohms at a known temperature against the service sheet, plug out';
   const plugs = 'Plugs of thermistor and board: loose or discoloured, plug out';
-  const duct = 'The same run with the duct off, to tell overshoot from set-point';
+  const duct = unlessRun(
+    about,
+    'off',
+    'The same run with the duct off, to tell overshoot from set-point',
+  );
   const setting = 'Heat setting: is it the one that is told here?';
   if (code === 'opens-high')
-    return [setting, ohms, 'Its seat: in the air stream, no lint on it', duct];
+    return [setting, ohms, 'Its seat: in the air stream, no lint on it', ...duct];
   if (code === 'opens-low' || code === 'closes-high') return [setting, ohms, plugs];
   if (code === 'closes-low') return [...(isGas(about) ? [slowFlame().settles] : []), setting, ohms];
   if (code === 'drifting') return ['Next run: mark every click of the relay', plugs, ohms];

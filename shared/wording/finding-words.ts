@@ -37,6 +37,11 @@ export type FindingWords = {
   nextChecks: (finding: Finding, about: About) => string[];
 };
 
+/** A check that asks for a run with the duct so: none where there is such a run already. */
+export function unlessRun({ ducts = [] }: About, duct: 'on' | 'off', check: string): string[] {
+  return ducts.includes(duct) ? [] : [check];
+}
+
 /** A number of the evidence, or null where the finding does not carry it. */
 export function numberOf({ evidence }: Finding, key: string): number | null {
   const value = evidence[key];

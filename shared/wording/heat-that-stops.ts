@@ -7,6 +7,7 @@ import {
   type About,
   type Cause,
   type FindingWords,
+  unlessRun,
 } from './finding-words.ts';
 
 type Code = 'heat-lost' | 'limit-cycling';
@@ -28,8 +29,12 @@ export const HEAT_THAT_STOPS: Record<Code, FindingWords> = {
     title: () => 'Heat is cut short before the thermostat’s band',
     sentences: limitCyclingSentences,
     causes: (_, about) => limitCyclingCauses(about),
-    nextChecks: () => [
-      'The same run with the duct off: short bursts that stop point to the duct',
+    nextChecks: (_, about) => [
+      ...unlessRun(
+        about,
+        'off',
+        'The same run with the duct off: short bursts that stop point to the duct',
+      ),
       'Duct: crushed, long, full of lint, or a flap that does not open',
       'Lint chute, screen film and blower wheel',
       'Back pressure at the outlet, no heat, against the service sheet',

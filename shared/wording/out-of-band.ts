@@ -7,6 +7,7 @@ import {
   type About,
   type Cause,
   type FindingWords,
+  unlessRun,
 } from './finding-words.ts';
 
 type Code = Extract<FindingCode, `opens-${string}` | `closes-${string}`>;
@@ -17,11 +18,15 @@ export const OUT_OF_BAND: Record<Code, FindingWords> = {
     title: () => 'Cuts out too high',
     sentences: (finding, about) => bandSentences(finding, about, 'cut-out', 'above'),
     causes: () => opensHighCauses(),
-    nextChecks: () => [
+    nextChecks: (_, about) => [
       'Read the mark on the thermostat against the service sheet',
       'Its seat: flat in the air stream, no lint under it',
       'Where a bias heater is fitted: its ohms, and its volts on low',
-      'The same run with the duct off, to tell overshoot from set-point',
+      ...unlessRun(
+        about,
+        'off',
+        'The same run with the duct off, to tell overshoot from set-point',
+      ),
     ],
   },
   'opens-low': {

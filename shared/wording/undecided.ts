@@ -1,7 +1,14 @@
 import type { Finding } from '../analysis/analysis.ts';
 import type { TooShortReason } from '../analysis/findings/too-short.ts';
 import { formatWithin } from './format.ts';
-import { counted, numberOf, type About, type Cause, type FindingWords } from './finding-words.ts';
+import {
+  counted,
+  numberOf,
+  type About,
+  type Cause,
+  type FindingWords,
+  unlessRun,
+} from './finding-words.ts';
 
 type Code = 'mixed' | 'too-close' | 'too-short' | 'in-band';
 
@@ -37,7 +44,8 @@ export const UNDECIDED: Record<Code, FindingWords> = {
     title: () => 'Cuts out and comes back in band',
     sentences: inBandSentences,
     causes: () => [],
-    nextChecks: () => ['If it was run with the duct off: a run with the duct on'],
+    nextChecks: (_, about) =>
+      unlessRun(about, 'on', 'If it was run with the duct off: a run with the duct on'),
   },
 };
 

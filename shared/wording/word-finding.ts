@@ -4,7 +4,6 @@ import { hasBoard, type About, type FindingWords, type WordedFinding } from './f
 import { HEAT_THAT_STAYS } from './heat-that-stays.ts';
 import { HEAT_THAT_STOPS } from './heat-that-stops.ts';
 import { MISSING_HEAT } from './missing-heat.ts';
-import { openChecks } from './open-checks.ts';
 import { OUT_OF_BAND } from './out-of-band.ts';
 import { UNDECIDED } from './undecided.ts';
 import { UNSTEADY } from './unsteady.ts';
@@ -31,9 +30,6 @@ export function wordFinding(finding: Finding, about: About): WordedFinding {
     sentences: words.sentences(finding, about),
     evidence: wordEvidence(finding.evidence, about.unit),
     causes: (byBoard && boardCauses(finding.code, about)) || words.causes(finding, about),
-    nextChecks: openChecks(
-      (byBoard && boardChecks(finding.code, about)) || words.nextChecks(finding, about),
-      about,
-    ),
+    nextChecks: (byBoard && boardChecks(finding.code, about)) || words.nextChecks(finding, about),
   };
 }
